@@ -1,0 +1,307 @@
+"""The ledger: the only place where a printed value comes into being.
+
+Every value has an address, a unit and an origin.  It is kept in two books: the *record*, computed in decimal
+arithmetic from the printed values above it and rounded once to the digits of record, and the *shadow*, the same
+tree in double precision SI from the exact inputs.  What is printed is what was computed, by construction.
+"""
+
+from __future__ import annotations
+
+import hashlib
+from collections import Counter
+from collections.abc import Mapping, Sequence
+from dataclasses import dataclass, field
+from decimal import Decimal
+from fractions import Fraction
+from typing import Literal
+
+from . import formula, lookup, root
+from .catalog import EQUATION
+from .equations import Equation
+from .formula import Cmp, Node
+from .number import decimal, headline, of_record
+from .quantity import COHERENT, PLANT, Quantity, Unit, parse
+from .references import DEFINITION, Cite
+from .symbols import NOMENCLATURE
+
+Kind = Literal["given", "constant", "conversion", "equation", "lookup", "root"]
+Operands = Mapping[str, "Value | Sequence[Value]"]
+#: Sections of the package that hold addressed values.
+INPUTS, COMPUTATION = 4, 8
+
+
+@dataclass(frozen=True)
+class Value:
+    """A number with its address: ``record`` in ``unit``, ``shadow`` in SI."""
+
+    address: str
+    symbol: str
+    record: Decimal
+    shadow: float
+    unit: Unit
+    title: str
+
+
+@dataclass(frozen=True)
+class Provenance:
+    """Where an input comes from: source id and place in it, status and note, as the file states them."""
+
+    source: str = ""
+    place: str = ""
+    status: str = ""
+    note: str = ""
+    confirm: str = ""
+
+
+@dataclass(frozen=True)
+class Line:
+    """One printed line; see ``record`` for how it is written down."""
+
+    kind: Kind
+    value: Value
+    tree: Node | None = None
+    operands: tuple[tuple[str, Value], ...] = ()
+    cite: Cite = DEFINITION
+    validity: str = ""
+    given: str = ""
+    key: str = ""
+    file_line: int = 0
+    provenance: Provenance | None = None
+    function: str = ""
+    library: str = ""
+    residuals: tuple[tuple[Decimal, Decimal], ...] = ()
+    key_result: bool = False
+
+    @property
+    def fingerprint(self) -> str:
+        """Changes when the formula, an operand or the result changes; not when the line moves."""
+        parts = [self.kind, formula.text(self.tree) if self.tree else self.given or self.function, str(self.value.record), self.value.unit.name]
+        parts += [f"{name}={v.record} {v.unit.name}" for name, v in self.operands]
+        return hashlib.sha256("\n".join(parts).encode()).hexdigest()[:12]
+
+
+@dataclass(frozen=True)
+class Row:
+    """A row of a loss table: its label, the element's words, and the line that holds its loss."""
+
+    label: str
+    element: str
+    line: Line
+
+
+@dataclass(frozen=True)
+class Losses:
+    """A loss table with its total and the row worked in full."""
+
+    title: str
+    rows: tuple[Row, ...]
+    total: Line
+    worked: str
+
+
+Block = str | Line | Losses
+
+
+@dataclass
+class Part:
+    """A run of the computation for one state; a block is a group's title, a line or a loss table."""
+
+    title: str
+    scope: str
+    blocks: list[Block] = field(default_factory=list)
+
+
+class Ledger:
+    """Writes lines and hands out their values; the same request twice gives the same line."""
+
+    def __init__(self, system: str) -> None:
+        self.system = system
+        self.inputs: list[Line] = []
+        self.used: dict[str, Value] = {}
+        self.parts: list[Part] = []
+        self._count: Counter[int] = Counter()
+        self._made: dict[tuple[object, ...], Value] = {}
+        self._group = ""
+
+    # --- order on the page
+
+    def part(self, title: str, scope: str) -> None:
+        """Begin a part of the computation."""
+        self.parts.append(Part(title, scope))
+        self._group = ""
+
+    def group(self, title: str) -> None:
+        """Name the lines that follow; a group without lines leaves no heading."""
+        self._group = title
+
+    def _address(self, section: int) -> str:
+        self._count[section] += 1
+        return f"{section}.{self._count[section]}"
+
+    def _place(self, block: Line | Losses) -> None:
+        blocks = self.parts[-1].blocks
+        if self._group:
+            blocks.append(self._group)
+            self._group = ""
+        blocks.append(block)
+
+    def _write(self, line: Line) -> Value:
+        self._place(line)
+        return line.value
+
+    def lines(self) -> list[Line]:
+        """Every line with an address, inputs first, rows of loss tables included."""
+        found = list(self.inputs)
+        for part in self.parts:
+            for block in part.blocks:
+                if isinstance(block, Line):
+                    found.append(block)
+                elif isinstance(block, Losses):
+                    found += [row.line for row in block.rows if row.line.operands and "K" in dict(row.line.operands)]
+                    found.append(block.total)
+        return found
+
+    # --- values
+
+    def coherent(self, symbol: str) -> Unit:
+        """The unit in which ``symbol`` enters formulas."""
+        return COHERENT[self.system][NOMENCLATURE[symbol].kind]
+
+    def given(self, symbol: str, title: str, quantity: Quantity, *, text: str = "", kind: Kind = "given", cite: Cite = DEFINITION,
+              key: str = "", file_line: int = 0, provenance: Provenance | None = None) -> Value:
+        """Enter an input or a constant as typed, and convert it on a line of its own where its unit is not coherent."""
+        identity = ("given", symbol, key or title, quantity.text, quantity.unit.name)
+        if identity not in self._made:
+            value = Value(self._address(INPUTS), symbol, quantity.number, float(quantity.si()), quantity.unit, title)
+            self.inputs.append(Line(kind, value, given=text or f"{quantity.text} {quantity.unit.name}", cite=cite, key=key,
+                                    file_line=file_line, provenance=provenance))
+            self._made[identity] = value
+        used = self.convert(self._made[identity])
+        self.used[self._made[identity].address] = used
+        return used
+
+    def constant(self, symbol: str) -> Value:
+        """A constant of the tool, entered among the inputs."""
+        c = lookup.CONSTANTS[symbol]
+        quantity = parse(c.text, NOMENCLATURE[symbol].kind)
+        return self.given(symbol, c.title, quantity, kind="constant", cite=c.cite)
+
+    def convert(self, value: Value) -> Value:
+        """``value`` in the coherent unit of the display system: itself, or a conversion line with its exact factor."""
+        to = self.coherent(value.symbol)
+        if value.unit.name == to.name:
+            return value
+        made = self._made.get(("convert", value.address))
+        if made is None:
+            tree = conversion_tree(value.symbol, value.unit, to)
+            record = of_record(formula.evaluate(tree, {value.symbol: value.record}, formula.InDecimal()))
+            made = Value(self._address(COMPUTATION), value.symbol, record, value.shadow, to, value.title)
+            self._made["convert", value.address] = made
+            self._write(Line("conversion", made, tree, ((value.symbol, value),)))
+        return made
+
+    def apply(self, name: str, values: Operands, about: str = "", key_result: bool = False) -> Value:
+        """Evaluate an equation of the catalogue on earlier values and write its line."""
+        used = {s: values[s] for s in EQUATION[name].operands}
+        identity = (name, *((s, v.address) for s in used for v in _each(used[s])))
+        if identity not in self._made:
+            self._made[identity] = self._write(self._line(EQUATION[name], used, about, key_result))
+        return self._made[identity]
+
+    def _line(self, equation: Equation, used: Operands, about: str, key_result: bool = False) -> Line:
+        operands = tuple((s, v) for s in used for v in _each(used[s]))
+        for symbol, v in operands:
+            if v.unit.name != self.coherent(symbol).name:
+                raise AssertionError(f"{equation.name}: {symbol} arrives in {v.unit.name}")
+        title = f"{equation.title}, {about}" if about else equation.title
+        residuals: tuple[tuple[Decimal, Decimal], ...] = ()
+        if isinstance(equation.tree, Cmp):
+            low, high = ROOT_RANGES[equation.result]
+            record, residuals = root.of_record_with_residuals(equation.tree, equation.result, _book(used, "record"), low, high)
+            shadow = root.solve(equation.tree, equation.result, _book(used, "shadow"), low, high)
+        else:
+            record = of_record(formula.evaluate(equation.tree, _book(used, "record"), formula.InDecimal()))
+            shadow = formula.evaluate(equation.tree, _book(used, "shadow"), formula.InFloat())
+        value = Value(self._address(COMPUTATION), equation.result, record, shadow, self.coherent(equation.result), title)
+        return Line("root" if residuals else "equation", value, equation.tree, operands, equation.source, equation.validity,
+                    residuals=residuals, key_result=key_result)
+
+    def look_up(self, name: str, temperature: Value) -> Value:
+        """A property of water at ``temperature``, in SI from the library, then converted where the display asks.
+
+        Raises :class:`~calcpack.lookup.OutOfRange` outside the formulation's validity.
+        """
+        p = lookup.PROPERTIES[name]
+        identity = ("look_up", name, temperature.address)
+        if identity not in self._made:
+            record = of_record(Decimal(lookup.water(name, float(temperature.record))))
+            shadow = lookup.water(name, temperature.shadow)
+            value = Value(self._address(COMPUTATION), p.symbol, record, shadow, COHERENT["SI"][NOMENCLATURE[p.symbol].kind], p.title)
+            self._made[identity] = value
+            self._write(Line("lookup", value, None, (("T", temperature),), p.cite, "", function=p.function, library=lookup.library("CoolProp")))
+        return self.convert(self._made[identity])
+
+    def tabulated(self, symbol: str, title: str, quantity: Quantity, place: str, cite: Cite, library: str = "") -> Value:
+        """A number read from a table of ours or of a library, printed as a look-up with its place there."""
+        identity = ("table", symbol, title, place)
+        if identity not in self._made:
+            value = Value(self._address(COMPUTATION), symbol, quantity.number, float(quantity.si()), quantity.unit, title)
+            self._made[identity] = value
+            self._write(Line("lookup", value, None, (), cite, "", function=place, library=library))
+        return self.convert(self._made[identity])
+
+    def losses(self, title: str, rows: Sequence[tuple[str, str, Mapping[str, Value] | Value]], total: str) -> Value:
+        """Write a loss table: each row ``n K h_V`` from its values, or the value of a line above; then its sum."""
+        made = [
+            Row(label, element, self.line_of(content) if isinstance(content, Value) else self._line(EQUATION["row_loss" if "n" in content else "row_loss_single"], content, element))
+            for label, element, content in rows
+        ]
+        sum_line = self._line(EQUATION[total], {"h": [row.line.value for row in made]}, "")
+        worked = next((row.label for row, (_, _, content) in zip(made, rows, strict=True) if not isinstance(content, Value)), "")
+        self._place(Losses(title, tuple(made), sum_line, worked))
+        return sum_line.value
+
+    def line_of(self, value: Value) -> Line:
+        """The line that made ``value``."""
+        return next(line for line in self.lines() if line.value is value)
+
+    def headline(self, value: Value) -> tuple[Decimal, Unit]:
+        """``value`` in plant units at the decimals usual there."""
+        plant, decimals = PLANT[self.system][NOMENCLATURE[value.symbol].kind]
+        return headline(in_unit(value, plant), decimals), plant
+
+
+#: Range searched for each symbol found as a root: Darcy factors of any pipe lie well inside.
+ROOT_RANGES: Mapping[str, tuple[float, float]] = {"f": (1e-3, 10.0)}
+
+
+def in_unit(value: Value, to: Unit) -> Decimal:
+    """The record of ``value`` in another unit of the same dimension, unrounded."""
+    si = (Fraction(value.record) + value.unit.offset) * value.unit.factor
+    return decimal(si / to.factor - to.offset)
+
+
+def drift(value: Value) -> Decimal:
+    """How far the record is from the shadow, in the plant-size coherent unit of the record (m or ft for a head)."""
+    return abs(value.record - decimal(Fraction(value.shadow) / value.unit.factor - value.unit.offset))
+
+
+def conversion_tree(symbol: str, frm: Unit, to: Unit) -> Node:
+    """The conversion as a formula with exact whole numbers: ``Q * (77 / 34560)``, ``(T + 459.67) * (5 / 9)``."""
+    factor = frm.factor / to.factor
+    text = symbol
+    if frm.offset:
+        text = f"{symbol} + {decimal(frm.offset)}"
+    if factor != 1:
+        inner = f"({text})" if frm.offset else text
+        text = f"{inner} * {factor.numerator}" if factor.denominator == 1 else f"{inner} * ({factor.numerator} / {factor.denominator})"
+    return formula.parse(text)
+
+
+def _each(x: Value | Sequence[Value]) -> Sequence[Value]:
+    return (x,) if isinstance(x, Value) else x
+
+
+def _book(used: Operands, book: Literal["record", "shadow"]) -> dict[str, object]:
+    return {s: getattr(v, book) if isinstance(v, Value) else [getattr(x, book) for x in v] for s, v in used.items()}
+

@@ -1,0 +1,172 @@
+"""A printed line's formula: the symbolic form and the form with its numbers, aligned at the equals signs."""
+
+from __future__ import annotations
+
+from collections.abc import Mapping, Sequence
+from dataclasses import dataclass
+from functools import reduce
+
+from .. import formula
+from ..formula import Bin, Call, Cmp, Name, Neg, Node, Num
+from . import boxes
+from .boxes import Box
+from .typeset import SIZE, Display, Setter
+
+#: Width of the working column, 71 mm, in points.
+MEASURE = 71 / 25.4 * 72
+INK = "#16191C"
+#: Body sizes tried in turn where a formula has a part that is too wide and cannot be broken.
+SIZES = (SIZE, 9.0, 8.0, 7.0, 6.0, 5.0)
+BESIDE = 16.0  # gap between the two forms when they share a row
+INDENT = 10.0  # continuation rows, past the equals sign
+LEADING = 2.6  # clear space between rows
+ROW_UP, ROW_DOWN = 0.70, 0.22  # least reach of a row, in ems
+
+Values = Mapping[str, str | Sequence[str]]
+
+
+@dataclass(frozen=True)
+class Setting:
+    """A picture: SVG text, size and baseline (from the top) in points, and the formula in linear form."""
+
+    svg: str
+    width: float
+    height: float
+    baseline: float
+    alt: str
+
+
+def with_numbers(node: Node, values: Values) -> Node:
+    """The tree with every symbol that ``values`` knows replaced by its printed number; a sum is written out."""
+    match node:
+        case Name(name) if name in values:
+            value = values[name]
+            return Num(value if isinstance(value, str) else value[0])
+        case Neg(x):
+            return Neg(with_numbers(x, values))
+        case Bin(op, a, b):
+            return Bin(op, with_numbers(a, values), with_numbers(b, values))
+        case Cmp(op, a, b):
+            return Cmp(op, with_numbers(a, values), with_numbers(b, values))
+        case Call("sum", (Name(name),)) if name in values:
+            terms = [values[name]] if isinstance(values[name], str) else values[name]
+            return reduce(lambda a, b: Bin("+", a, b), [Num(str(t)) for t in terms])
+        case Call(fn, args):
+            return Call(fn, tuple(with_numbers(x, values) for x in args))
+    return node
+
+
+def line(symbol: str | None, tree: Node, values: Values | None, names: Mapping[str, Display],
+         symbolic: bool = True, measure: float = MEASURE) -> Setting:
+    """Set ``symbol = tree`` and below or beside it ``= tree with numbers``.
+
+    ``symbol`` is None where the tree is itself a comparison.  ``symbolic=False`` leaves the symbolic form out (a
+    conversion).  Raises :class:`KeyError` for a symbol that ``names`` lacks.
+    """
+    numbers = None if values is None else with_numbers(tree, values)
+    forms = ([(tree, False)] if symbolic else []) + ([(numbers, True)] if numbers is not None else [])
+    for size in SIZES:
+        box = _rows(symbol, forms, names, size, measure)
+        if box.width <= measure + 0.01:
+            break
+    return _picture(box, _linear(symbol, [form for form, _ in forms]))
+
+
+def picture(parts: Sequence[Box], alt: str) -> Setting:
+    """Loose boxes in one row as a picture."""
+    return _picture(boxes.row(parts), alt)
+
+
+def _picture(box: Box, alt: str) -> Setting:
+    return Setting(boxes.svg(box, INK), box.width, box.ascent + box.descent, box.ascent, alt)
+
+
+def _linear(symbol: str | None, forms: Sequence[Node]) -> str:
+    written = [formula.text(form) for form in forms]
+    if symbol is None:
+        return "; ".join(written)
+    return " = ".join([symbol, *written])
+
+
+def _rows(symbol: str | None, forms: Sequence[tuple[Node, bool]], names: Mapping[str, Display], size: float,
+          measure: float) -> Box:
+    """All rows of a line at one body size; may come out wider than ``measure``."""
+    sides = []
+    for tree, numeric in forms:
+        setter = Setter(names, numeric, size)
+        if isinstance(tree, Cmp):
+            sides.append((setter.tree(tree.a), setter.relation(tree.op), _pieces(tree.b, setter)))
+        else:
+            head = setter.symbol(symbol) if symbol and not sides else boxes.gap(0)
+            sides.append((head, setter.relation("=="), _pieces(tree, setter)))
+    beside = _beside(sides)
+    if symbol is not None and beside.width <= measure:
+        return beside
+    edge = max(left.width for left, _, _ in sides)
+    rows: list[Box] = []
+    for left, sign, pieces in sides:
+        begin = edge + sign.width
+        for i, part in enumerate(_broken(pieces, measure - begin, measure - begin - INDENT * size / SIZE)):
+            if i == 0:
+                rows.append(boxes.row([boxes.gap(edge - left.width), left, sign, part]))
+            else:
+                rows.append(boxes.row([boxes.gap(begin + INDENT * size / SIZE), part]))
+    return _stacked(rows, size)
+
+
+def _beside(sides: Sequence[tuple[Box, Box, list[Box]]]) -> Box:
+    parts: list[Box] = []
+    for i, (left, sign, pieces) in enumerate(sides):
+        parts += [*([boxes.gap(BESIDE)] if i else []), left, sign, *pieces]
+    return _stacked([boxes.row(parts)], SIZE)
+
+
+def _stacked(rows: Sequence[Box], size: float) -> Box:
+    """Rows under one another; the baseline is the first row's."""
+    first, placed, pen = max(rows[0].ascent, ROW_UP * size), [], 0.0
+    for i, row in enumerate(rows):
+        up, down = max(row.ascent, ROW_UP * size), max(row.descent, ROW_DOWN * size)
+        pen = pen - up - LEADING if i else 0.0
+        placed.append(row.moved(0.0, pen))
+        pen -= down
+    box = boxes.overlaid(placed, max(r.width for r in rows))
+    return Box(box.width, first, -pen, box.runs, box.bars)
+
+
+def _pieces(tree: Node, setter: Setter) -> list[Box]:
+    """The top-level terms, each with its operator before it; a term too wide for any row falls into its factors."""
+    match tree:
+        case Bin("+" | "-" as op, a, b):
+            operator, term = setter.joined(op, a, b, 0)
+            if term.width > MEASURE * 0.75 and isinstance(b, Bin) and b.op == "*":
+                first, *rest = _pieces(b, setter)
+                return [*_pieces(a, setter), boxes.row([operator, first]), *rest]
+            return [*_pieces(a, setter), boxes.row([operator, term])]
+        case Bin("*", a, b) if setter.tree(tree).width > MEASURE * 0.75:
+            left = [setter.tree(a, 2)] if isinstance(a, Bin) and a.op in "+-" else _pieces(a, setter)
+            return [*left, boxes.row(setter.joined("*", a, b, 0))]
+    return [setter.tree(tree)]
+
+
+def _broken(pieces: list[Box], first: float, later: float) -> list[Box]:
+    """Fill rows greedily, then with the same number of rows as evenly as can be."""
+    rows = _filled(pieces, first, later)
+    if len(rows) > 1:
+        for cut in range(19, 9, -1):
+            tighter = _filled(pieces, first * cut / 20, later * cut / 20)
+            if len(tighter) > len(rows) or max(r.width for r in tighter) > max(first, later) * cut / 20:
+                break
+            rows = tighter
+    return rows
+
+
+def _filled(pieces: list[Box], first: float, later: float) -> list[Box]:
+    rows: list[list[Box]] = [[pieces[0]]]
+    room = first - pieces[0].width
+    for piece in pieces[1:]:
+        if piece.width > room:
+            rows.append([])
+            room = later
+        rows[-1].append(piece)
+        room -= piece.width
+    return [boxes.row(r) for r in rows]

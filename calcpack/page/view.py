@@ -1,0 +1,124 @@
+"""The record as the templates print it: text made printable, numbers formatted, pictures drawn."""
+
+from __future__ import annotations
+
+from collections.abc import Mapping
+from typing import Any
+
+from . import figures, glyphs, metrics, tables, text
+from .lines import Context, fraction, view
+from .text import all_printable
+
+PAPERS = {"A4": ("210mm 297mm", "20mm", "14mm"), "Letter": ("215.9mm 279.4mm", "22mm", "17.9mm")}
+#: The input file as read: size, and width of a line before it is wrapped (points).
+LISTING_SIZE, LISTING_WIDTH = 7.8, 128 / 25.4 * 72
+FIGURE_SPACE = "\u2007"
+SECTIONS = (
+    "Purpose and scope", "Criteria", "Method", "Inputs", "Assumptions", "References", "System as modelled", "Computation",
+    "Checks against criteria", "Limits of use", "Cautions", "Software and rounding", "Nomenclature and conversions", "Input file as read",
+)
+
+
+def context(record: Mapping[str, Any]) -> dict[str, Any]:
+    """The variables of the template.  Raises :class:`KeyError` where the record lacks a part."""
+    r = all_printable(record)
+    shared = Context(text.display(r["nomenclature"]), _addresses(r), _factors(r))
+    paper = PAPERS[r["calculation"]["paper"]]
+    return {
+        "r": r, "c": r["calculation"], "sections": SECTIONS, "link": shared.link, "check": glyphs.check(),
+        "page": {"size": paper[0], "left": paper[1], "right": paper[2], "paper": r["calculation"]["paper"]},
+        "cover": _cover(r, shared), "inputs": [tables.input_row(line, shared) for line in r["inputs"]],
+        "parts": [_part(p, shared) for p in r["computation"]],
+        "rules": [tables.rule(rule, shared) for rule in r["checks"]],
+        "verdicts": [(glyphs.verdict(word), word) for word in tables.VERDICTS],
+        "statuses": [(glyphs.status(key), words) for key, words in tables.STATUS_WORDS.items()],
+        "margin_key": glyphs.margin_bar("6"),
+        "elevation": glyphs.data_uri(figures.elevation(r["sketch"])) if r["sketch"] else "",
+        "rounding": [_rounding(row, shared) for row in r["rounding"]],
+        "conversions": [{**row, "id": f"C{i}", "factor": fraction(row["factor"])} for i, row in enumerate(r["conversions"], 1)],
+        "nomenclature": [{**n, "symbol": text.symbol(shared.names[n["name"]]), "unit": text.unit(n["unit"]) or "–"} for n in r["nomenclature"]],
+        "listing": listing(r["input_file"]["text"]), "fingerprint": fours(r["fingerprint"]), "input_fingerprint": fours(r["input_file"]["sha256"]),
+    }
+
+
+def _addresses(r: Mapping[str, Any]) -> frozenset[str]:
+    found = {line["address"] for line in r["inputs"]} | {a["address"] for a in r["assumptions"]} | {c["address"] for c in r["checks"]}
+    for part in r["computation"]:
+        for block in part["blocks"]:
+            if "line" in block:
+                found.add(block["line"]["address"])
+            elif "losses" in block:
+                found |= {row["line"]["address"] for row in block["losses"]["rows"]} | {block["losses"]["total"]["address"]}
+    return frozenset(found)
+
+
+def _factors(r: Mapping[str, Any]) -> dict[tuple[str, str], str]:
+    return {(row["from"], row["to"]): f"C{i}" for i, row in enumerate(r["conversions"], 1)}
+
+
+def _cover(r: Mapping[str, Any], shared: Context) -> dict[str, Any]:
+    cover = r["cover"]
+    governing = next((c for c in r["checks"] if c["address"] == cover["governing"]), None)
+    shown = sorted(
+        (c for c in r["checks"] if c["margin"]), key=lambda c: (c["address"] != cover["governing"], c["verdict"] != "not met")
+    )
+    counts = cover["counts"]
+    return {
+        "glyph": glyphs.verdict(cover["verdict"], 14.0), "word": tables.capital(cover["verdict"]), "statement": cover["statement"],
+        "tally": [(n, word) for word, n in cover["tally"].items() if n], "governs": tables.rule(governing, shared) if governing else None,
+        "rules": [tables.rule(c, shared) for c in shown[:2]],
+        "counts": [(counts[k], words) for k, words in (("verified", "verified"), ("maker", "unconfirmed"), ("preliminary", "preliminary"),
+                                                       ("assumed", "assumed"), ("without source", "without source"))],
+        "unverified": [{**u, "link": shared.link(u["address"]), "status": tables.STATUS_WORDS.get(u["status"], u["status"])} for u in cover["unverified"]],
+        "confirm": [{**c, "link": shared.link(c["address"])} for c in cover.get("confirm", [])], "rounding": cover["rounding"],
+    }
+
+
+def _part(part: Mapping[str, Any], shared: Context) -> dict[str, Any]:
+    """A part of the computation as runs of lines under their groups, and loss tables between them."""
+    runs: list[dict[str, Any]] = []
+    for block in part["blocks"]:
+        if "losses" in block:
+            runs.append({"losses": tables.losses(block["losses"], shared)})
+            continue
+        if not runs or "rows" not in runs[-1]:
+            runs.append({"rows": []})
+        runs[-1]["rows"].append({"group": block["group"]} if "group" in block else {"line": view(block["line"], shared)})
+    return {"title": part["title"], "scope": part["scope"], "runs": runs}
+
+
+def _rounding(row: Mapping[str, Any], shared: Context) -> dict[str, Any]:
+    return {
+        "link": shared.link(row["address"]), "what": row["what"], "unit": text.unit(row["unit"]),
+        **{k: text.number(row[k]) for k in ("record", "shadow", "drift", "limit")},
+    }
+
+
+def fours(digits: str) -> str:
+    """A fingerprint in groups of four."""
+    return " ".join(digits[i : i + 4] for i in range(0, len(digits), 4))
+
+
+def listing(source: str) -> str:
+    """The input file with line numbers; a line past the measure goes on in a row without a number, after an arrow."""
+    lines = source.splitlines()
+    digits, out = len(str(len(lines))), []
+    for i, line in enumerate(lines, 1):
+        body = line.lstrip(" ")
+        indent = FIGURE_SPACE * (len(line) - len(body))
+        first, *rest = _wrapped(body, LISTING_WIDTH - metrics.width(metrics.SANS_REGULAR, LISTING_SIZE, indent))
+        out.append(f"{str(i).rjust(digits).replace(' ', FIGURE_SPACE)}  {FIGURE_SPACE}{indent}{first}")
+        out += [f"{FIGURE_SPACE * digits}  → {indent}{piece}" for piece in rest]
+    return "\n".join(out)
+
+
+def _wrapped(body: str, room: float) -> list[str]:
+    rows, pen = [""], 0.0
+    for character in body:
+        advance = metrics.width(metrics.SANS_REGULAR, LISTING_SIZE, character)
+        if pen + advance > max(room, 60.0):
+            rows.append("")
+            pen = 0.0
+        rows[-1] += character
+        pen += advance
+    return rows

@@ -1,0 +1,4 @@
+"""The reader: a package read back from its visible page alone, every line recomputed.
+
+Imports nothing else of calcpack, so that an error in what writes the page cannot hide in what reads it.
+"""

@@ -1,0 +1,187 @@
+"""The record: one study as plain data, complete for printing and for re-computation without this code."""
+
+from __future__ import annotations
+
+import dataclasses
+import hashlib
+import json
+from collections import Counter
+from collections.abc import Iterator
+
+from .. import __version__, formula
+from ..ledger import Value, drift
+from ..lookup import library
+from ..rules import LARGEST_DRIFT
+from ..source.inputs import Given
+from ..study import Study
+from ..symbols import NOMENCLATURE
+from . import words
+from .cover import checks, cover
+from .lines import Json, References, conversions, line, number, part, short
+from .sketch import sketch
+
+FORMAT = "calcpack record 1"
+
+
+def assemble(study: Study) -> Json:
+    """The record of ``study``; the same study gives the same record, fingerprint included, on every machine."""
+    c, ledger, references = study.calculation, study.ledger, References()
+    computation = [part(ledger, p, references) for p in ledger.parts]
+    inputs = [line(ledger, x, references) for x in ledger.inputs]
+    judged = checks(study, references)
+    record: Json = {
+        "format": FORMAT,
+        "calculation": {
+            "number": c.number, "title": c.title, "revision": c.revision, "date": c.date.isoformat(), "owner": c.owner,
+            "project": c.project, "status": c.status, "units": c.units, "paper": c.paper, "datum": c.datum,
+            "system": f"{c.pump.name} from {c.supply.name}",
+        },
+        "revisions": [{"revision": r.revision, "date": r.date.isoformat(), "reason": r.reason} for r in c.revisions],
+        "route": study.route,
+        "cover": cover(study, judged, inputs),
+        "purpose": words.purpose(c),
+        "scope": words.scope(study),
+        "exclusions": [words.CAUTIONS[-1]],
+        "criteria": [{"rule": r["address"], "text": r["criterion"], "source": r["source"]} for r in judged],
+        "method": words.method(study),
+        "inputs": inputs,
+        "unused": _unused(study),
+        "assumptions": _assumptions(study, inputs),
+        "sketch": sketch(study),
+        "computation": computation,
+        "checks": judged,
+        "findings": [{"text": text, "reason": reason} for text, reason in study.findings.items()],
+        "limits": _limits(study),
+        "cautions": list(words.CAUTIONS),
+        "software": _software(study),
+        "rounding": _rounding(study),
+        "conversions": conversions(ledger.lines()),
+        "nomenclature": _nomenclature(study),
+        "input_file": {"name": c.path, "sha256": c.sha256, "text": c.raw.decode("utf-8-sig")},
+    }  # fmt: skip
+    sources = [{"id": s.id, "text": ", ".join(t for t in (s.title, s.document, s.edition) if t)} for s in c.sources]
+    record["references"] = sources + references.cited()
+    record["fingerprint"] = fingerprint(record)
+    return record
+
+
+def canonical(record: Json) -> bytes:
+    """The record as canonical JSON: sorted keys, no spaces, UTF-8."""
+    return json.dumps(record, sort_keys=True, separators=(",", ":"), ensure_ascii=False, allow_nan=False).encode()
+
+
+def fingerprint(record: Json) -> str:
+    """SHA-256 of the canonical JSON without the fingerprint itself."""
+    return hashlib.sha256(canonical({k: v for k, v in record.items() if k != "fingerprint"})).hexdigest()
+
+
+def givens(of: object) -> Iterator[Given]:
+    """Every value of an input file, in the order of its records."""
+    if isinstance(of, Given):
+        yield of
+    elif isinstance(of, tuple):
+        for each in of:
+            yield from givens(each)
+    elif dataclasses.is_dataclass(of):
+        for field in dataclasses.fields(of):
+            yield from givens(getattr(of, field.name))
+
+
+def _unused(study: Study) -> list[Json]:
+    """Values of the file that enter no line, such as the normal level: listed, so that nothing of the file is lost."""
+    used = {x.key for x in study.ledger.inputs}
+    return [
+        {"key": g.key, "given": g.text, "source": g.source, "place": g.place, "status": g.status, "file_line": g.line}
+        for g in givens(study.calculation) if g.key not in used
+    ]  # fmt: skip
+
+
+def _assumptions(study: Study, inputs: list[Json]) -> list[Json]:
+    found: list[Json] = []
+
+    def add(text: str, basis: str, consequence: str, confirm: str) -> None:
+        found.append({"address": f"5.{len(found) + 1}", "text": text, "basis": basis, "consequence": consequence, "confirm": confirm})
+
+    for x in inputs:
+        p = x.get("provenance")
+        if p and p["status"] == "assumed":
+            add(f"{x['title']}: {x['given']} (line {x['address']})", p["note"], "enters the lines that cite it", p["confirm"])
+    for text, consequence in study.assumptions.values():
+        add(text, "the file states no other value", consequence, "")
+    standing = words.STANDING_ASSUMPTIONS
+    if study.route != "measured":
+        standing += words.DESIGN_ASSUMPTIONS
+    if study.route != "design":
+        standing += words.MEASURED_ASSUMPTIONS
+    for text, consequence in standing:
+        add(text, "made by the method", consequence, "")
+    return found
+
+
+def _limits(study: Study) -> list[Json]:
+    """The ranges outside which the package stops applying, as the file states them."""
+    c = study.calculation
+    rows: list[tuple[str, str, Given | None]] = [
+        ("flow of one pump", "not above", c.pump.flow.highest),
+        ("level of the surface", "not below", c.supply.level.lowest if c.supply.level else None),
+        ("temperature of the liquid", "not above", c.liquid.temperature.highest),
+        ("pressure on the surface", "not below", c.supply.pressure.lowest if c.supply.pressure else None),
+        ("barometer at the site", "not below", c.site.barometer.lowest if c.site.barometer else None),
+        ("speed of the pump", "as", c.pump.npsh_required.speed),
+        ("impeller", "as", c.pump.npsh_required.impeller),
+    ]
+    for section in c.line.sections if c.line else ():
+        rows += [(f"drop of {e.name or 'the strainer'}", "not above", e.fouled) for e in section.elements if e.kind == "strainer"]
+    address = {x.key: x.value.address for x in study.ledger.inputs}
+    return [{"what": what, "limit": f"{word} {g.text}", "address": address.get(g.key, "")} for what, word, g in rows if g is not None]
+
+
+def _software(study: Study) -> list[Json]:
+    lines = study.ledger.lines()
+    found = [{"name": f"calcpack {__version__}", "role": "equations, ledger, rules, record"}]
+    libraries = sorted({x.library for x in lines if x.library})
+    roles = {"CoolProp": "properties of water: IAPWS-95 (thermodynamic), IAPWS 2008 (viscosity)", "fluids": "table of pipe bores, ASME B36.10M"}
+    found += [{"name": name, "role": roles[name.split()[0]]} for name in libraries]
+    found.append({"name": library("jsonschema"), "role": "form of the input file"})
+    found.append({"name": library("weasyprint"), "role": "pages"})
+    return found
+
+
+def _headlines(study: Study) -> Iterator[tuple[str, Value]]:
+    seen: set[str] = set()
+    for x in study.ledger.lines():
+        if x.key_result:
+            seen.add(x.value.address)
+            yield x.value.title, x.value
+    for check in study.checks:
+        for v in (check.left, check.right):
+            if v is not None and v.address not in seen and NOMENCLATURE[v.symbol].kind == "length":
+                seen.add(v.address)
+                yield v.title, v
+
+
+def _rounding(study: Study) -> list[Json]:
+    """The proof that line rounding does not matter: each headline value in both books."""
+    rows = []
+    for title, v in _headlines(study):
+        shadow = float(v.shadow / v.unit.factor)
+        rows.append({
+            "address": v.address, "what": title, "record": number(v.record), "shadow": short(shadow), "unit": v.unit.name,
+            "drift": f"{drift(v):.1E}", "limit": str(LARGEST_DRIFT),
+        })  # fmt: skip
+    return rows
+
+
+def _nomenclature(study: Study) -> list[Json]:
+    used: Counter[str] = Counter()
+    for x in study.ledger.lines():
+        used[x.value.symbol] += 1
+        used.update(symbol for symbol, _ in x.operands)
+    for check in study.checks:
+        used.update(formula.names(check.rule.tree))
+    entries = [NOMENCLATURE[name] for name in sorted(used, key=str.casefold)]
+    return [
+        {"name": s.name, "base": s.base, "sub": s.sub, "upright": s.upright, "meaning": s.meaning, "unit": study.ledger.coherent(s.name).name}
+        for s in entries
+    ]
+

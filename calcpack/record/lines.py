@@ -1,0 +1,126 @@
+"""Lines of the ledger as plain data, with their sources numbered in the order of first use."""
+
+from __future__ import annotations
+
+from decimal import Decimal
+from typing import Any
+
+from .. import formula
+from ..ledger import Ledger, Line, Losses, Part, Value, conversion_tree
+from ..number import DIGITS
+from ..references import REFERENCES, Cite
+
+Json = dict[str, Any]
+
+
+class References:
+    """Numbers the published sources as they are first cited."""
+
+    def __init__(self) -> None:
+        self._number: dict[str, int] = {}
+
+    def text(self, cite: Cite) -> str:
+        """``[R3] eq. 5; recalled, not re-read``, or the words of a definition or of common practice."""
+        if not cite.key:
+            return "; ".join(part for part in (cite.place, cite.how) if part)
+        number = self._number.setdefault(cite.key, len(self._number) + 1)
+        cited = " ".join(part for part in (f"[R{number}]", cite.place) if part)
+        return "; ".join(part for part in (cited, cite.how) if part)
+
+    def cited(self) -> list[Json]:
+        """The sources cited so far, in the order of their numbers."""
+        return [{"id": f"R{n}", "text": REFERENCES[key].text} for key, n in self._number.items()]
+
+
+def number(x: Decimal) -> str:
+    """A value of record as text: its digits, with a power of ten only where that is how it is printed."""
+    return str(x) if x.is_zero() or -4 < x.adjusted() < DIGITS + 4 else f"{x:E}"
+
+
+def short(x: float) -> str:
+    """A full-precision number at nine digits: enough to show a drift, and the same on every machine."""
+    return f"{x:.8E}"
+
+
+def value(v: Value) -> Json:
+    """A value where another line uses it."""
+    return {"value": number(v.record), "unit": v.unit.name, "address": v.address}
+
+
+def headline(ledger: Ledger, v: Value) -> Json:
+    """The short form in plant units."""
+    x, unit = ledger.headline(v)
+    return {"text": number(x), "unit": unit.name}
+
+
+def _shown(ledger: Ledger, of: Line) -> Json:
+    """The figure shown large: an input and a table's entry as they stand there, a result in plant units."""
+    if of.kind in ("given", "constant") or (of.kind == "lookup" and not of.operands):
+        return {"text": number(of.value.record), "unit": of.value.unit.name}
+    return headline(ledger, of.value)
+
+
+def line(ledger: Ledger, of: Line, references: References) -> Json:
+    """One line with everything the page prints of it."""
+    v = of.value
+    found: Json = {
+        "address": v.address,
+        "kind": of.kind,
+        "title": v.title,
+        "symbol": v.symbol,
+        "formula": formula.text(of.tree) if of.tree else None,
+        "operands": [{"symbol": symbol, **value(operand)} for symbol, operand in of.operands],
+        "value": number(v.record),
+        "unit": v.unit.name,
+        "headline": _shown(ledger, of),
+        "source": references.text(of.cite),
+        "note": of.validity,
+        "key_result": of.key_result,
+        "shadow": {"value": short(v.shadow), "unit": "SI"},
+        "fingerprint": of.fingerprint,
+    }
+    if of.kind in ("given", "constant"):
+        found |= {"given": of.given, "key": of.key, "file_line": of.file_line, "used": value(ledger.used[v.address])}
+        if of.provenance is not None:
+            p = of.provenance
+            found["provenance"] = {"source": p.source, "place": p.place, "status": p.status, "note": p.note, "confirm": p.confirm}
+    if of.kind == "conversion":
+        before = of.operands[0][1].unit
+        factor = before.factor / v.unit.factor
+        found |= {"from": before.name, "to": v.unit.name, "factor": str(factor), "source": before.source}
+    if of.kind == "lookup":
+        found |= {"function": of.function, "library": of.library}
+    if of.kind == "root":
+        found["residuals"] = [[number(x), f"{r:E}"] for x, r in of.residuals]
+    return found
+
+
+def part(ledger: Ledger, of: Part, references: References) -> Json:
+    """A part of the computation with its blocks."""
+    blocks: list[Json] = []
+    for block in of.blocks:
+        if isinstance(block, str):
+            blocks.append({"group": block})
+        elif isinstance(block, Losses):
+            blocks.append({"losses": _losses(ledger, block, references)})
+        else:
+            blocks.append({"line": line(ledger, block, references)})
+    return {"title": of.title, "scope": of.scope, "blocks": blocks}
+
+
+def _losses(ledger: Ledger, of: Losses, references: References) -> Json:
+    rows = [{"row": r.label, "element": r.element, "line": line(ledger, r.line, references)} for r in of.rows]
+    return {"title": of.title, "rows": rows, "total": line(ledger, of.total, references), "worked": of.worked}
+
+
+def conversions(lines: list[Line]) -> list[Json]:
+    """Each conversion used, once, with its exact factor."""
+    seen: dict[tuple[str, str], Json] = {}
+    for of in lines:
+        if of.kind == "conversion":
+            before, after = of.operands[0][1].unit, of.value.unit
+            seen.setdefault((before.name, after.name), {
+                "from": before.name, "to": after.name, "factor": str(before.factor / after.factor),
+                "formula": formula.text(conversion_tree("x", before, after)), "source": before.source,
+            })  # fmt: skip
+    return list(seen.values())

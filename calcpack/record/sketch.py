@@ -1,0 +1,63 @@
+"""Data of the elevation sketch and the head build-up, all taken from lines."""
+
+from __future__ import annotations
+
+from ..ledger import Line, Value
+from ..number import decimal, rounded
+from ..quantity import Unit
+from ..source.inputs import Given
+from ..study import Study
+from .lines import Json, number
+
+
+def sketch(study: Study) -> Json:
+    """Levels, datum, inlet and heads of the first state computed, in the display system's unit of length."""
+    c, ledger = study.calculation, study.ledger
+    lines = ledger.lines()
+
+    def of(symbol: str, title: str = "") -> Value | None:
+        return next((x.value for x in lines if x.value.symbol == symbol and x.value.title.startswith(title)
+                     and x.value.unit.name == ledger.coherent(symbol).name), None)  # fmt: skip
+
+    def text(v: Value | None) -> str | None:
+        return None if v is None else number(v.record)
+
+    result = next(x for x in lines if x.key_result and x.value.symbol in ("NPSHA_d", "NPSHA_m"))
+    names = {"H_s": "surface pressure", "z": "static head", "H_v": "vapour pressure", "h_L": "losses", "H_b": "barometer",
+             "H_g": "gauge reading", "z_g": "gauge height", "h_V": "velocity head"}  # fmt: skip
+    heads = [{"name": names[s], "symbol": s, "value": number(-v.record if s in ("H_v", "h_L") else v.record)} for s, v in result.operands]
+    level = of("z_s")
+    elements = [
+        {"row": e.id, "kind": e.kind, "name": e.name or e.kind} for s in (c.line.sections if c.line else ()) for e in s.elements
+    ]
+    inlet = None
+    if c.intake is not None:
+        inlet = {"reference": c.intake.reference, "elevation": _length(ledger.coherent("z"), c.intake.elevation),
+                 "diameter": _length(ledger.coherent("z"), c.intake.inlet_diameter)}  # fmt: skip
+    gauge = None
+    if c.readings:
+        g = c.readings[0].gauge
+        gauge = {"elevation": _length(ledger.coherent("z"), g.elevation), "leg": g.leg}
+    limit = study.need.limit
+    return {
+        "unit": ledger.coherent("z").name,
+        "state": _state(study, result),
+        "supply": {"name": c.supply.name, "kind": c.supply.kind,
+                   "levels": [{"name": level.title, "value": number(level.record)}] if level is not None else []},
+        "datum": c.datum,
+        "pump": {"name": c.pump.name, "elevation": text(of("z_d"))},
+        "intake": inlet,
+        "elements": elements,
+        "gauge": gauge,
+        "heads": heads,
+        "available": number(result.value.record),
+        "limit": number(limit.record),
+    }  # fmt: skip
+
+
+def _state(study: Study, result: Line) -> str:
+    return next(p.scope for p in study.ledger.parts if result in p.blocks)
+
+
+def _length(unit: Unit, given: Given) -> str:
+    return str(rounded(decimal(given.quantity.si() / unit.factor), 3))

@@ -1,0 +1,85 @@
+"""Inputs entering the ledger: the one way from what the file says to an addressed value."""
+
+from __future__ import annotations
+
+from collections.abc import Callable
+from typing import NoReturn, Protocol
+
+from ..faults import Fault, InputFault
+from ..ledger import Ledger, Provenance, Value
+from ..lookup import OutOfRange
+from ..quantity import parse
+from ..source.inputs import Calculation, Element, Given
+from ..source.inputs import Provenance as Origin
+
+
+class Place(Protocol):
+    """Anything of the file that knows where it stands."""
+
+    @property
+    def line(self) -> int: ...
+    @property
+    def column(self) -> int: ...
+    @property
+    def key(self) -> str: ...
+
+
+class Entry:
+    """A calculation and the ledger it is written into."""
+
+    def __init__(self, calculation: Calculation, ledger: Ledger) -> None:
+        self.calculation = calculation
+        self.ledger = ledger
+        self.findings: dict[str, str] = {}
+        self.assumptions: dict[str, tuple[str, str]] = {}
+
+    def value(self, given: Given, symbol: str, title: str) -> Value:
+        """Enter ``given`` as ``symbol``, converted to the display system's unit where it needs to be."""
+        return self.ledger.given(
+            symbol, title, given.quantity, text=given.text, key=given.key, file_line=given.line,
+            provenance=_provenance(given),
+        )  # fmt: skip
+
+    def count(self, element: Element) -> Value:
+        """The number of equal elements, a plain number of the file."""
+        p = element.provenance
+        return self.ledger.given(
+            "n", f"Number of equal elements, element {element.id}", parse(str(element.count), "ratio"), text=str(element.count),
+            key=f"{element.key}.count", file_line=element.line, provenance=_provenance(p),
+        )  # fmt: skip
+
+    def absolute(self, given: Given, title: str, barometer: Callable[[], Value]) -> Value:
+        """A pressure on the surface, absolute: as given, or a gauge pressure with the barometer added."""
+        if given.quantity.reference == "absolute":
+            return self.value(given, "p_s", f"{title}, absolute")
+        return self.ledger.apply("absolute_from_gauge", {"p_g": self.gauge(given, title), "p_b": barometer()})
+
+    def gauge(self, given: Given, title: str) -> Value:
+        """A pressure relative to the barometer; a vacuum as read becomes a negative gauge pressure on a line of its own."""
+        if given.quantity.reference == "vacuum":
+            read = self.value(given, "p_vac", f"{title}, vacuum")
+            return self.ledger.apply("gauge_from_vacuum", {"p_vac": read})
+        return self.value(given, "p_g", f"{title}, gauge")
+
+    def refuse(self, at: Place, wanted: str, found: str, suggestion: str = "") -> NoReturn:
+        """Raise :class:`InputFault` at a place in the file."""
+        raise InputFault([Fault(self.calculation.path, at.line, at.column, at.key, wanted, found, suggestion)])
+
+    def look_up(self, name: str, temperature: Value, given: Given) -> Value:
+        """A property of water; outside its range the fault stands at the temperature's place in the file."""
+        try:
+            return self.ledger.look_up(name, temperature)
+        except OutOfRange as error:
+            self.refuse(given, str(error), given.text, "cite the property instead")
+
+    def assume(self, key: str, text: str, consequence: str) -> None:
+        """Record an assumption the tool makes, once."""
+        self.assumptions.setdefault(key, (text, consequence))
+
+    def find(self, text: str, reason: str) -> None:
+        """Record a finding, once."""
+        self.findings.setdefault(text, reason)
+
+
+def _provenance(of: Origin) -> Provenance:
+    return Provenance(of.source, of.place, of.status, of.note, of.confirm)

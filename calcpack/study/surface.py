@@ -1,0 +1,44 @@
+"""The pressure on the liquid surface."""
+
+from __future__ import annotations
+
+from ..ledger import Value
+from .entry import Entry
+from .state import State
+
+
+def barometer(entry: Entry, state: State) -> Value:
+    """The absolute barometer of ``state``: as read there, else the site's lowest."""
+    if state.barometer is not None:
+        return entry.value(state.barometer, "p_b", "Barometer at the reading, absolute")
+    site, ledger = entry.calculation.site, entry.ledger
+    station = site.barometer and (site.barometer.lowest or site.barometer.normal)
+    if station:
+        word = "Lowest" if site.barometer and site.barometer.lowest else "Normal"
+        if site.weather_allowance is None:
+            return entry.value(station, "p_b", f"{word} station barometer, absolute")
+        read = entry.value(station, "p_r", f"{word} station barometer, absolute")
+        return ledger.apply("barometer_station", {"p_r": read, "dp_w": _allowance(entry)})
+    assert site.elevation is not None, "source asks for an elevation where no barometer is given"
+    height = ledger.apply("geopotential_height", {
+        "Z": entry.value(site.elevation, "Z", "Site elevation above sea level"), "r_0": ledger.constant("r_0"),
+    })  # fmt: skip
+    exponent = ledger.apply("atmosphere_exponent", {"K_h": ledger.constant("K_h"), "beta": ledger.constant("beta")})
+    standard = ledger.apply("standard_atmosphere", {
+        "p_0": ledger.constant("p_0"), "beta": ledger.constant("beta"), "H": height, "T_0": ledger.constant("T_0"),
+        "n_a": exponent,
+    })  # fmt: skip
+    return ledger.apply("barometer_standard", {"p_a": standard, "dp_w": _allowance(entry)})
+
+
+def _allowance(entry: Entry) -> Value:
+    given = entry.calculation.site.weather_allowance
+    assert given is not None, "source asks for the allowance where the barometer is not the lowest reading"
+    return entry.value(given, "dp_w", "Weather allowance on the barometer")
+
+
+def pressure(entry: Entry, state: State) -> Value:
+    """The absolute pressure on the surface: the barometer over an open one, the vessel's own in a closed one."""
+    if state.pressure is None:
+        return barometer(entry, state)
+    return entry.absolute(state.pressure, f"Pressure in {entry.calculation.supply.name}", lambda: barometer(entry, state))
