@@ -11,8 +11,8 @@ from difflib import get_close_matches
 class Fault:
     """One thing wrong in one place.
 
-    ``line`` and ``column`` count from 1, as editors do; 0 means the fault belongs to the file as a whole.  ``kind``
-    is a short fixed word for programs (``missing key``, ``unit``); the other texts are for the engineer.
+    ``line`` and ``column`` count from 1, as editors do; 0 means the fault belongs to the file as a whole.
+    ``kind`` is a short fixed word for programs (``missing key``, ``unit``); the other texts are for people.
     """
 
     file: str
@@ -43,7 +43,7 @@ def format_fault(fault: Fault) -> str:
 
 
 def nearest(word: str, choices: Iterable[str]) -> str:
-    """The choice most like ``word``, or an empty text when none is near: the same letters in another case come first."""
+    """The choice most like ``word``, or an empty text; the same letters in another case come first."""
     known = list(choices)
     folded = {choice.casefold(): choice for choice in reversed(known)}
     if word.casefold() in folded:
@@ -61,7 +61,7 @@ def did_you_mean(word: str, choices: Iterable[str]) -> str:
 
 
 def shown(text: str, length: int = 60) -> str:
-    """``text`` in quotation marks for a message: one line, cut when long, invisible characters written out."""
+    """``text`` in quotation marks, for a message: cut when long, invisible characters written out."""
     cut = text if len(text) <= length else text[: length - 1] + "…"
     visible = "".join(c if c.isprintable() else f"<U+{ord(c):04X}>" for c in cut)
     return f"“{visible}”"

@@ -10,13 +10,10 @@ from __future__ import annotations
 
 import ast
 import hashlib
-import math
-from collections.abc import Callable, Iterator, Mapping, Sequence
+from collections.abc import Iterator, Mapping
 from dataclasses import dataclass
-from decimal import Context, Decimal, DecimalException, DivisionByZero, InvalidOperation, Overflow
+from decimal import Decimal
 from fractions import Fraction
-from functools import reduce
-from typing import Any, Protocol
 
 
 class FormulaError(ValueError):
@@ -161,175 +158,6 @@ def fingerprint(node: Node) -> str:
     return hashlib.sha256(text(node).encode()).hexdigest()[:12]
 
 
-# --- arithmetic -------------------------------------------------------------------------------------------------
-
-
-class Arithmetic(Protocol):
-    """What an evaluation needs to know of its numbers."""
-
-    def number(self, text: str) -> Any: ...
-    def binary(self, op: str, a: Any, b: Any) -> Any: ...
-    def call(self, fn: str, args: Sequence[Any]) -> Any: ...
-
-
-def _operate(op: str, a: Any, b: Any) -> Any:
-    match op:
-        case "+":
-            return a + b
-        case "-":
-            return a - b
-        case "*":
-            return a * b
-        case "/":
-            return a / b
-        case "**":
-            return a**b
-        case ">=":
-            return a >= b
-        case "<=":
-            return a <= b
-        case ">":
-            return a > b
-        case "<":
-            return a < b
-        case "==":
-            return a == b
-    raise AssertionError(op)
-
-
-#: 50 digits, and every special value trapped: Decimal's own log of 0 is silently -Infinity.
-DECIMAL = Context(prec=50, traps=[DivisionByZero, InvalidOperation, Overflow])
-#: pi to 50 digits (OEIS A000796).
-PI = Decimal("3.1415926535897932384626433832795028841971693993751")
-
-
-class InDecimal:
-    """The record book: :class:`decimal.Decimal` at 50 digits."""
-
-    def number(self, text: str) -> Decimal:
-        return PI if text == "pi" else Decimal(text)
-
-    def binary(self, op: str, a: Decimal, b: Decimal) -> Any:
-        match op:
-            case "+":
-                return DECIMAL.add(a, b)
-            case "-":
-                return DECIMAL.subtract(a, b)
-            case "*":
-                return DECIMAL.multiply(a, b)
-            case "/":
-                return DECIMAL.divide(a, b)
-            case "**":
-                return DECIMAL.power(a, b)
-        return _operate(op, a, b)
-
-    def call(self, fn: str, args: Sequence[Any]) -> Decimal:
-        match fn:
-            case "sqrt":
-                return DECIMAL.sqrt(args[0])
-            case "log10":
-                return _finite(DECIMAL.log10(args[0]), fn)
-            case "ln":
-                return _finite(DECIMAL.ln(args[0]), fn)
-            case "exp":
-                return DECIMAL.exp(args[0])
-            case "max":
-                return Decimal(max(args))
-            case "min":
-                return Decimal(min(args))
-            case "sum":
-                return reduce(DECIMAL.add, args[0])
-        raise AssertionError(fn)
-
-
-def _finite(x: Decimal, fn: str) -> Decimal:
-    if not x.is_finite():
-        raise FormulaError(f"{fn} of a number outside its domain")
-    return x
-
-
-class InFloat:
-    """The shadow book: double precision."""
-
-    _functions: Mapping[str, Callable[..., float]] = {
-        "sqrt": math.sqrt, "log10": math.log10, "ln": math.log, "exp": math.exp, "max": max, "min": min,
-    }
-
-    def number(self, text: str) -> float | int:
-        return math.pi if text == "pi" else _literal(text)
-
-    def binary(self, op: str, a: float, b: float) -> Any:
-        return _operate(op, a, b)
-
-    def call(self, fn: str, args: Sequence[Any]) -> float:
-        return math.fsum(args[0]) if fn == "sum" else self._functions[fn](*args)
-
-
-class OnArrays:
-    """Arrays: numpy, element by element; no ledger, no rounding."""
-
-    def __init__(self) -> None:
-        import numpy  # only where arrays are asked for: the import costs more than a whole assessment's arithmetic
-
-        self._np = numpy
-
-    def number(self, text: str) -> float | int:
-        return math.pi if text == "pi" else _literal(text)
-
-    def binary(self, op: str, a: Any, b: Any) -> Any:
-        return _operate(op, a, b)
-
-    def call(self, fn: str, args: Sequence[Any]) -> Any:
-        np = self._np
-        match fn:
-            case "ln":
-                return np.log(args[0])
-            case "max":
-                return reduce(np.maximum, args)
-            case "min":
-                return reduce(np.minimum, args)
-            case "sum":
-                return reduce(np.add, args[0])
-        return getattr(np, fn)(args[0])
-
-
-def _literal(text: str) -> float | int:
-    return int(text) if text.lstrip("-").isdigit() else float(text)
-
-
-def evaluate(node: Node, values: Mapping[str, Any], arithmetic: Arithmetic) -> Any:
-    """Evaluate a tree on ``values`` (symbol -> number, or a sequence where ``sum`` takes it).
-
-    Raises :class:`FormulaError` where a function leaves its domain or a result is not finite; never returns a
-    non-finite scalar.
-    """
-    try:
-        result = _evaluate(node, values, arithmetic)
-    except (DecimalException, ArithmeticError, ValueError) as error:
-        if isinstance(error, FormulaError):
-            raise
-        raise FormulaError(f"{text(node)} has no finite value here") from None
-    finite = result.is_finite() if isinstance(result, Decimal) else not isinstance(result, float) or math.isfinite(result)
-    if not finite or isinstance(result, complex):
-        raise FormulaError(f"{text(node)} has no finite value here")
-    return result
-
-
-def _evaluate(node: Node, values: Mapping[str, Any], on: Arithmetic) -> Any:
-    match node:
-        case Num(t):
-            return on.number(t)
-        case Name(name):
-            return on.number("pi") if name == "pi" else values[name]
-        case Neg(x):
-            return on.binary("-", 0, _evaluate(x, values, on))
-        case Bin(op, a, b) | Cmp(op, a, b):
-            return on.binary(op, _evaluate(a, values, on), _evaluate(b, values, on))
-        case Call(fn, args):
-            return on.call(fn, [_evaluate(x, values, on) for x in args])
-    raise AssertionError(node)
-
-
 # --- dimensions -------------------------------------------------------------------------------------------------
 
 #: Exponents of length, mass, time, temperature.
@@ -368,7 +196,7 @@ def dimension(node: Node, of: Mapping[str, Dimension]) -> Dimension:
                 return NONE
             if names(b):
                 raise FormulaError(f"{text(node)}: a quantity with a dimension takes a constant exponent only")
-            power = Fraction(evaluate(b, {}, InDecimal()))
+            power = _constant(b)
             return (base[0] * power, base[1] * power, base[2] * power, base[3] * power)
         case Call("sqrt", (x,)):
             inner = dimension(x, of)
@@ -387,3 +215,21 @@ def dimension(node: Node, of: Mapping[str, Dimension]) -> Dimension:
 
 def _combine(a: Dimension, b: Dimension, sign: int) -> Dimension:
     return (a[0] + sign * b[0], a[1] + sign * b[1], a[2] + sign * b[2], a[3] + sign * b[3])
+
+
+def _constant(node: Node) -> Fraction:
+    """An exponent without symbols, exact."""
+    match node:
+        case Num(t):
+            return Fraction(t)
+        case Neg(x):
+            return -_constant(x)
+        case Bin("+", a, b):
+            return _constant(a) + _constant(b)
+        case Bin("-", a, b):
+            return _constant(a) - _constant(b)
+        case Bin("*", a, b):
+            return _constant(a) * _constant(b)
+        case Bin("/", a, b):
+            return _constant(a) / _constant(b)
+    raise FormulaError(f"{text(node)}: an exponent is a plain number or a fraction")

@@ -10,7 +10,10 @@ Reference = Literal["gauge", "absolute", "vacuum"]
 
 @dataclass(frozen=True)
 class Kind:
-    """What a key asks for: the dimensions a unit may have, the sign, what a pressure may count from, and how to say so."""
+    """What a key asks for.
+
+    ``dimensions`` are those a unit may have, ``references`` what a pressure may count from.
+    """
 
     dimensions: tuple[str, ...]
     sign: Literal["any", "not negative", "positive"]

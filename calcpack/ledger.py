@@ -13,9 +13,10 @@ from collections.abc import Mapping, Sequence
 from dataclasses import dataclass, field
 from decimal import Decimal
 from fractions import Fraction
-from typing import Literal
+from typing import Any, Literal
 
 from . import formula, lookup, root
+from .arithmetic import InDecimal, InFloat, evaluate
 from .catalog import EQUATION
 from .equations import Equation
 from .formula import Cmp, Node
@@ -75,7 +76,12 @@ class Line:
     @property
     def fingerprint(self) -> str:
         """Changes when the formula, an operand or the result changes; not when the line moves."""
-        parts = [self.kind, formula.text(self.tree) if self.tree else self.given or self.function, str(self.value.record), self.value.unit.name]
+        parts = [
+            self.kind,
+            formula.text(self.tree) if self.tree else self.given or self.function,
+            str(self.value.record),
+            self.value.unit.name,
+        ]
         parts += [f"{name}={v.record} {v.unit.name}" for name, v in self.operands]
         return hashlib.sha256("\n".join(parts).encode()).hexdigest()[:12]
 
@@ -167,14 +173,34 @@ class Ledger:
         """The unit in which ``symbol`` enters formulas."""
         return COHERENT[self.system][NOMENCLATURE[symbol].kind]
 
-    def given(self, symbol: str, title: str, quantity: Quantity, *, text: str = "", kind: Kind = "given", cite: Cite = DEFINITION,
-              key: str = "", file_line: int = 0, provenance: Provenance | None = None) -> Value:
+    def given(
+        self,
+        symbol: str,
+        title: str,
+        quantity: Quantity,
+        *,
+        text: str = "",
+        kind: Kind = "given",
+        cite: Cite = DEFINITION,
+        key: str = "",
+        file_line: int = 0,
+        provenance: Provenance | None = None,
+    ) -> Value:
         """Enter an input or a constant as typed, and convert it on a line of its own where its unit is not coherent."""
         identity = ("given", symbol, key or title, quantity.text, quantity.unit.name)
         if identity not in self._made:
             value = Value(self._address(INPUTS), symbol, quantity.number, float(quantity.si()), quantity.unit, title)
-            self.inputs.append(Line(kind, value, given=text or f"{quantity.text} {quantity.unit.name}", cite=cite, key=key,
-                                    file_line=file_line, provenance=provenance))
+            self.inputs.append(
+                Line(
+                    kind,
+                    value,
+                    given=text or f"{quantity.text} {quantity.unit.name}",
+                    cite=cite,
+                    key=key,
+                    file_line=file_line,
+                    provenance=provenance,
+                )
+            )
             self._made[identity] = value
         used = self.convert(self._made[identity])
         self.used[self._made[identity].address] = used
@@ -194,7 +220,7 @@ class Ledger:
         made = self._made.get(("convert", value.address))
         if made is None:
             tree = conversion_tree(value.symbol, value.unit, to)
-            record = of_record(formula.evaluate(tree, {value.symbol: value.record}, formula.InDecimal()))
+            record = of_record(evaluate(tree, {value.symbol: value.record}, InDecimal()))
             made = Value(self._address(COMPUTATION), value.symbol, record, value.shadow, to, value.title)
             self._made["convert", value.address] = made
             self._write(Line("conversion", made, tree, ((value.symbol, value),)))
@@ -217,14 +243,26 @@ class Ledger:
         residuals: tuple[tuple[Decimal, Decimal], ...] = ()
         if isinstance(equation.tree, Cmp):
             low, high = ROOT_RANGES[equation.result]
-            record, residuals = root.of_record_with_residuals(equation.tree, equation.result, _book(used, "record"), low, high)
+            record, residuals = root.of_record_with_residuals(
+                equation.tree, equation.result, _book(used, "record"), low, high
+            )
             shadow = root.solve(equation.tree, equation.result, _book(used, "shadow"), low, high)
         else:
-            record = of_record(formula.evaluate(equation.tree, _book(used, "record"), formula.InDecimal()))
-            shadow = formula.evaluate(equation.tree, _book(used, "shadow"), formula.InFloat())
-        value = Value(self._address(COMPUTATION), equation.result, record, shadow, self.coherent(equation.result), title)
-        return Line("root" if residuals else "equation", value, equation.tree, operands, equation.source, equation.validity,
-                    residuals=residuals, key_result=key_result)
+            record = of_record(evaluate(equation.tree, _book(used, "record"), InDecimal()))
+            shadow = evaluate(equation.tree, _book(used, "shadow"), InFloat())
+        value = Value(
+            self._address(COMPUTATION), equation.result, record, shadow, self.coherent(equation.result), title
+        )
+        return Line(
+            "root" if residuals else "equation",
+            value,
+            equation.tree,
+            operands,
+            equation.source,
+            equation.validity,
+            residuals=residuals,
+            key_result=key_result,
+        )
 
     def look_up(self, name: str, temperature: Value) -> Value:
         """A property of water at ``temperature``, in SI from the library, then converted where the display asks.
@@ -236,16 +274,38 @@ class Ledger:
         if identity not in self._made:
             record = of_record(Decimal(lookup.water(name, float(temperature.record))))
             shadow = lookup.water(name, temperature.shadow)
-            value = Value(self._address(COMPUTATION), p.symbol, record, shadow, COHERENT["SI"][NOMENCLATURE[p.symbol].kind], p.title)
+            value = Value(
+                self._address(COMPUTATION),
+                p.symbol,
+                record,
+                shadow,
+                COHERENT["SI"][NOMENCLATURE[p.symbol].kind],
+                p.title,
+            )
             self._made[identity] = value
-            self._write(Line("lookup", value, None, (("T", temperature),), p.cite, "", function=p.function, library=lookup.library("CoolProp")))
+            self._write(
+                Line(
+                    "lookup",
+                    value,
+                    None,
+                    (("T", temperature),),
+                    p.cite,
+                    "",
+                    function=p.function,
+                    library=lookup.library("CoolProp"),
+                )
+            )
         return self.convert(self._made[identity])
 
-    def tabulated(self, symbol: str, title: str, quantity: Quantity, place: str, cite: Cite, library: str = "") -> Value:
+    def tabulated(
+        self, symbol: str, title: str, quantity: Quantity, place: str, cite: Cite, library: str = ""
+    ) -> Value:
         """A number read from a table of ours or of a library, printed as a look-up with its place there."""
         identity = ("table", symbol, title, place)
         if identity not in self._made:
-            value = Value(self._address(COMPUTATION), symbol, quantity.number, float(quantity.si()), quantity.unit, title)
+            value = Value(
+                self._address(COMPUTATION), symbol, quantity.number, float(quantity.si()), quantity.unit, title
+            )
             self._made[identity] = value
             self._write(Line("lookup", value, None, (), cite, "", function=place, library=library))
         return self.convert(self._made[identity])
@@ -253,11 +313,19 @@ class Ledger:
     def losses(self, title: str, rows: Sequence[tuple[str, str, Mapping[str, Value] | Value]], total: str) -> Value:
         """Write a loss table: each row ``n K h_V`` from its values, or the value of a line above; then its sum."""
         made = [
-            Row(label, element, self.line_of(content) if isinstance(content, Value) else self._line(EQUATION["row_loss" if "n" in content else "row_loss_single"], content, element))
+            Row(
+                label,
+                element,
+                self.line_of(content)
+                if isinstance(content, Value)
+                else self._line(EQUATION["row_loss" if "n" in content else "row_loss_single"], content, element),
+            )
             for label, element, content in rows
         ]
         sum_line = self._line(EQUATION[total], {"h": [row.line.value for row in made]}, "")
-        worked = next((row.label for row, (_, _, content) in zip(made, rows, strict=True) if not isinstance(content, Value)), "")
+        worked = next(
+            (row.label for row, (_, _, content) in zip(made, rows, strict=True) if not isinstance(content, Value)), ""
+        )
         self._place(Losses(title, tuple(made), sum_line, worked))
         return sum_line.value
 
@@ -294,7 +362,11 @@ def conversion_tree(symbol: str, frm: Unit, to: Unit) -> Node:
         text = f"{symbol} + {decimal(frm.offset)}"
     if factor != 1:
         inner = f"({text})" if frm.offset else text
-        text = f"{inner} * {factor.numerator}" if factor.denominator == 1 else f"{inner} * ({factor.numerator} / {factor.denominator})"
+        text = (
+            f"{inner} * {factor.numerator}"
+            if factor.denominator == 1
+            else f"{inner} * ({factor.numerator} / {factor.denominator})"
+        )
     return formula.parse(text)
 
 
@@ -302,6 +374,5 @@ def _each(x: Value | Sequence[Value]) -> Sequence[Value]:
     return (x,) if isinstance(x, Value) else x
 
 
-def _book(used: Operands, book: Literal["record", "shadow"]) -> dict[str, object]:
+def _book(used: Operands, book: Literal["record", "shadow"]) -> dict[str, Any]:
     return {s: getattr(v, book) if isinstance(v, Value) else [getattr(x, book) for x in v] for s, v in used.items()}
-

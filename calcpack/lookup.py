@@ -37,11 +37,18 @@ WATER_RANGE = (273.16, 600.0)
 PROPERTIES: Mapping[str, Property] = {
     p.name: p
     for p in (
-        Property("vapour_pressure", "p_v", "P", "p_sat(T)", "Vapour pressure, absolute, looked up",
-                 Cite("iapws95", "saturation line")),
+        Property(
+            "vapour_pressure",
+            "p_v",
+            "P",
+            "p_sat(T)",
+            "Vapour pressure, absolute, looked up",
+            Cite("iapws95", "saturation line"),
+        ),
         Property("density", "rho", "D", "rho_sat(T)", "Density, looked up", Cite("iapws95", "saturated liquid")),
-        Property("viscosity", "mu", "V", "mu_sat(T)", "Dynamic viscosity, looked up",
-                 Cite("iapws08", "saturated liquid")),
+        Property(
+            "viscosity", "mu", "V", "mu_sat(T)", "Dynamic viscosity, looked up", Cite("iapws08", "saturated liquid")
+        ),
     )
 }
 
@@ -86,12 +93,14 @@ def bore(size: str, schedule: str) -> Bore:
     from fluids.piping import nearest_pipe
 
     try:
-        found, inside, outside, wall = nearest_pipe(NPS=nps, schedule=schedule)
+        found, inside, outside, wall = nearest_pipe(NPS=nps, schedule=schedule)  # type: ignore[arg-type]  # its annotation says int; NPS 1.5 is meant
     except (ValueError, KeyError):
         raise OutOfRange(f"the table has no pipe {size}, schedule {schedule}") from None
     if found != nps:
         raise OutOfRange(f"the table has no pipe {size}, schedule {schedule}")
-    return Bore(f"{inside * 1000:.2f}", f"{size} schedule {schedule}: {outside * 1000:.1f} mm less twice {wall * 1000:.2f} mm")
+    return Bore(
+        f"{inside * 1000:.2f}", f"{size} schedule {schedule}: {outside * 1000:.1f} mm less twice {wall * 1000:.2f} mm"
+    )
 
 
 def _inches(text: str) -> float:
@@ -104,7 +113,15 @@ def _inches(text: str) -> float:
 
 #: Nominal diameters of ISO 6708 beside the NPS of ASME B36.10M; from DN 100 on it is 25 mm an inch.
 DN_TO_NPS: Mapping[str, float] = {
-    "15": 0.5, "20": 0.75, "25": 1, "32": 1.25, "40": 1.5, "50": 2, "65": 2.5, "80": 3, "90": 3.5,
+    "15": 0.5,
+    "20": 0.75,
+    "25": 1,
+    "32": 1.25,
+    "40": 1.5,
+    "50": 2,
+    "65": 2.5,
+    "80": 3,
+    "90": 3.5,
     **{str(25 * n): float(n) for n in (4, 5, 6, 8, 10, 12, 14, 16, 18, 20, 22, 24, 26, 28, 30, 32, 34, 36)},
 }
 
@@ -127,8 +144,12 @@ CONSTANTS: Mapping[str, Constant] = {
         Constant("T_0", "288.15 K", "Temperature at sea level", Cite("ussa76")),
         Constant("beta", "0.0065 K/m", "Fall of temperature with height, up to 11 km", Cite("ussa76")),
         Constant("r_0", "6356766 m", "Radius of the Earth at latitude 45.5°", Cite("ussa76")),
-        Constant("K_h", "0.034163195 K/m", "Hydrostatic constant g₀M₀/R*", Cite("ussa76", "derived from its constants")),
-        Constant("eps_c", "0.00015 ft", "Roughness the fitting set takes for clean steel", Cite("crane09", "0.0018 in")),
+        Constant(
+            "K_h", "0.034163195 K/m", "Hydrostatic constant g₀M₀/R*", Cite("ussa76", "derived from its constants")
+        ),
+        Constant(
+            "eps_c", "0.00015 ft", "Roughness the fitting set takes for clean steel", Cite("crane09", "0.0018 in")
+        ),
         Constant("dT", "5 K", "Step of temperature for the cost line", PRACTICE),
     )
 }

@@ -15,7 +15,8 @@ from .units import CARRIED, SPELLINGS, UNITS
 _MEANT = {
     typed: name
     for name, words in {
-        "°C": "C|c|ºC|deg C|celsius|Celsius", "°F": "F|f|ºF|deg F|fahrenheit|Fahrenheit", "°R": "R", "K": "kelvin|°K",
+        "°C": "C|c|ºC|deg C|celsius|Celsius", "°F": "F|f|ºF|deg F|fahrenheit|Fahrenheit", "°R": "R",
+        "K": "kelvin|°K",
         "ft": "feet|foot|'", "in": 'inch|inches|"', "m": "metre|metres|meter|meters|mtr",
         "m³/h": "cbm/h|cmh|m³", "L/s": "lps", "L/min": "lpm", "gal/min": "gal",
         "cSt": "cst", "cP": "cp|cps", "lb/ft³": "lbs/ft³|pcf", "psi": "lb/in²|lbs", "kgf/cm²": "at",
@@ -50,6 +51,7 @@ def with_units(number: str, kind: str) -> str:
 def unknown_unit(
     number: str, name: str, reference: str | None, kind: str, wanted: str, text: str
 ) -> QuantityFault:
+    """A unit that is not on the list, or not in that spelling."""
     asked = KINDS[kind]
     if kind in BARE:
         return QuantityFault("unit", wanted, shown(text), f"write `{number}`")

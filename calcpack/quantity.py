@@ -15,18 +15,7 @@ from .kinds import BARE, KINDS, Kind, Reference
 from .misread import QuantityFault, unknown_unit, unreadable, with_units
 from .units import CARRIED, COHERENT, PLANT, SPELLINGS, Unit, conversion, unit
 
-__all__ = [
-    "COHERENT",
-    "KINDS",
-    "PLANT",
-    "Kind",
-    "Quantity",
-    "QuantityFault",
-    "Unit",
-    "conversion",
-    "parse",
-    "unit",
-]
+__all__ = ["COHERENT", "KINDS", "PLANT", "Quantity", "QuantityFault", "Unit", "conversion", "parse", "unit"]
 
 #: What each dimension is called when a unit of the wrong one is typed.
 _MEASURES = {
@@ -56,7 +45,7 @@ _REFERENCES: dict[str, Reference] = {
 _MINUS = ("-", "\u2212")
 #: A number as it must be typed.  Digits are capped so that no text can ask for a number of unreasonable size.
 _NUMBER = re.compile(r"([+\-\u2212]?)([0-9]{1,30}(?:\.[0-9]{1,30})?(?:[eE][+\-]?[0-9]{1,2})?)(?![0-9.,eE/])")
-#: No gauge on Earth reads lower than this below its barometer: the highest barometer recorded is under 1 090 hPa.
+#: No gauge on Earth reads lower than this below its barometer: no barometer recorded is above 1 090 hPa.
 _FULL_VACUUM = Fraction(110_000)
 
 
@@ -64,7 +53,7 @@ _FULL_VACUUM = Fraction(110_000)
 class Quantity:
     """A value as the engineer typed it.
 
-    ``text`` keeps the digits typed, with ``.`` and ``-``; ``reference`` is set for pressures that count from something.
+    ``text`` keeps the digits typed, with ``.`` and ``-``; ``reference`` is what a pressure counts from.
     """
 
     number: Decimal
@@ -80,7 +69,7 @@ class Quantity:
 def parse(text: str, kind: str) -> Quantity:
     """Read ``text`` as a quantity of ``kind`` (a key of :data:`KINDS`), exactly.
 
-    Raises :class:`QuantityFault` for anything else, with what was wanted, what was found and what to write instead.
+    Raises :class:`QuantityFault` for anything else: what was wanted, what was found, what to write instead.
     """
     asked = KINDS[kind]
     wanted = f"{asked.words}, such as {listed(asked.examples)}"
@@ -103,6 +92,8 @@ def parse(text: str, kind: str) -> Quantity:
     if name not in SPELLINGS or (name == "1" and rest):
         raise unknown_unit(typed, name, reference, kind, wanted, text)
     found = unit(name)
+    if kind == "temperature_difference" and found.offset:
+        raise QuantityFault("unit", wanted, f"{shown(text)}: {found.name} has a zero of its own")
     if found.kind not in asked.dimensions or (found.name == "%") != (kind == "percentage"):
         measures = _MEASURES[found.kind] if found.name != "%" else "a percentage"
         raise QuantityFault("dimension", wanted, f"{shown(text)}: {found.name} measures {measures}")

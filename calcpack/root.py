@@ -6,7 +6,8 @@ import math
 from collections.abc import Callable
 from decimal import Context, Decimal
 
-from .formula import Cmp, FormulaError, InDecimal, InFloat, Bin, evaluate
+from .arithmetic import InDecimal, InFloat, evaluate
+from .formula import Bin, Cmp, FormulaError
 from .number import last_unit, of_record
 
 _RESIDUAL = Context(prec=3)

@@ -1,7 +1,8 @@
 """The units that may be typed or printed: exact factors, spellings, and the two display systems.
 
-Every factor is an exact fraction built from the definitions: international foot 0.3048 m, pound 0.453 592 37 kg,
-US gallon 231 in³, UK gallon 4.546 09 L, standard gravity 9.806 65 m/s² (NIST SP 811 (2008), App. B).
+Every factor is an exact fraction built from the definitions: international foot 0.3048 m, pound
+0.453 592 37 kg, US gallon 231 in³, UK gallon 4.546 09 L, standard gravity 9.806 65 m/s² (NIST SP 811 (2008),
+App. B).
 """
 
 from __future__ import annotations
@@ -31,7 +32,7 @@ _WATER = 1000 * _GRAVITY
 class Unit:
     """A unit of a kind of quantity: value in SI = (number + ``offset``) * ``factor``, both exact.
 
-    ``kind`` is the dimension measured (``length``, ``flow``, ``pressure`` …); ``source`` is where the factor comes from.
+    ``kind`` is the dimension measured (``length``, ``flow`` …); ``source`` is where the factor comes from.
     """
 
     name: str
@@ -68,7 +69,7 @@ _TABLE: tuple[tuple[str, str, Fraction | int, str, str], ...] = (
     ("flow", "ft³/min", _FOOT**3 / 60, _SP811, "cfm"),
     ("flow", "gal/min", _GALLON / 60, _SP811 + ", US gallon of 231 in³", "gpm USgpm US_gal/min USgal/min"),
     ("flow", "Mgal/d", _GALLON * 10**6 / 86400, _SP811 + ", US gallon of 231 in³", "mgd MGD"),
-    ("flow", "UK gal/min", _UK_GALLON / 60, _SP811 + ", UK gallon of 4.546 09 L", "UKgal/min UKgpm imp_gal/min igpm"),
+    ("flow", "UK gal/min", _UK_GALLON / 60, _SP811 + ", UK gallon of 4.546 09 L", "UKgpm imp_gal/min igpm"),
     ("flow", "bbl/h", 42 * _GALLON / 3600, _SP811 + ", barrel of 42 US gallons", ""),
     ("flow", "bbl/d", 42 * _GALLON / 86400, _SP811 + ", barrel of 42 US gallons", ""),
     ("pressure", "Pa", 1, _SI, ""),
@@ -131,7 +132,8 @@ def _typed(name: str) -> Iterator[str]:
             yield power.replace("·", dot)
 
 
-_ENDINGS: dict[Literal["gauge", "absolute"], tuple[str, ...]] = {"gauge": ("g", "(g)"), "absolute": ("a", "(a)")}
+_Carried = Literal["gauge", "absolute"]
+_ENDINGS: dict[_Carried, tuple[str, ...]] = {"gauge": ("g", "(g)"), "absolute": ("a", "(a)")}
 #: Every accepted spelling -> the unit's name.
 SPELLINGS: dict[str, str] = {
     spelling: name
@@ -142,7 +144,7 @@ SPELLINGS: dict[str, str] = {
 
 
 #: Spellings of a pressure unit that carry what the pressure counts from -> the unit's name, and what.
-CARRIED: dict[str, tuple[str, Literal["gauge", "absolute"]]] = {
+CARRIED: dict[str, tuple[str, _Carried]] = {
     f"{name}{spelt}": (name, reference)
     for name in ("psi", "bar", "mbar", "kPa", "MPa")
     for reference, spellings in _ENDINGS.items()
@@ -156,7 +158,10 @@ def unit(name: str) -> Unit:
 
 
 def conversion(a: Unit, b: Unit) -> Fraction:
-    """The exact multiplier from ``a`` to ``b``.  Raises ``ValueError`` for different kinds or a unit with its own zero."""
+    """The exact multiplier from ``a`` to ``b``.
+
+    Raises ``ValueError`` for units of different kinds and for a unit with a zero of its own.
+    """
     if a.kind != b.kind or a.offset or b.offset:
         raise ValueError(f"no factor leads from {a.name} to {b.name}")
     return a.factor / b.factor

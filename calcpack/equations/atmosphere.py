@@ -1,26 +1,45 @@
 """The barometer at the site."""
 
-from . import Equation
 from ..references import DEFINITION, PRACTICE, Cite
+from . import Equation
 
 EQUATIONS = (
     Equation(
-        "geopotential_height", "H", "r_0 * Z / (r_0 + Z)", "Geopotential height of the site",
-        Cite("ussa76"), "up to 11 km",
+        "geopotential_height",
+        "H",
+        "r_0 * Z / (r_0 + Z)",
+        "Geopotential height of the site",
+        Cite("ussa76"),
+        "up to 11 km",
     ),
     Equation(
-        "atmosphere_exponent", "n_a", "K_h / beta", "Exponent of the pressure law",
+        "atmosphere_exponent",
+        "n_a",
+        "K_h / beta",
+        "Exponent of the pressure law",
         Cite("ussa76"),
     ),
     Equation(
-        "standard_atmosphere", "p_a", "p_0 * (1 - beta * H / T_0)**n_a", "Standard atmosphere at the site, absolute",
-        Cite("ussa76"), "-5 to 11 km",
+        "standard_atmosphere",
+        "p_a",
+        "p_0 * (1 - beta * H / T_0)**n_a",
+        "Standard atmosphere at the site, absolute",
+        Cite("ussa76"),
+        "-5 to 11 km",
     ),
     Equation(
-        "barometer_standard", "p_b", "p_a - dp_w", "Lowest barometer, absolute: standard less weather allowance", PRACTICE,
+        "barometer_standard",
+        "p_b",
+        "p_a - dp_w",
+        "Lowest barometer, absolute: standard less weather allowance",
+        PRACTICE,
     ),
     Equation(
-        "barometer_station", "p_b", "p_r - dp_w", "Lowest barometer, absolute: station less weather allowance", PRACTICE,
+        "barometer_station",
+        "p_b",
+        "p_r - dp_w",
+        "Lowest barometer, absolute: station less weather allowance",
+        PRACTICE,
     ),
     Equation("absolute_from_gauge", "p_s", "p_b + p_g", "Surface pressure, absolute", DEFINITION),
     Equation("absolute_vapour_from_gauge", "p_v", "p_b + p_g", "Vapour pressure, absolute", DEFINITION),

@@ -1,7 +1,7 @@
 """The inlet below a free surface."""
 
-from . import Equation
 from ..references import DEFINITION, Cite
+from . import Equation
 
 EQUATIONS = (
     Equation("inlet_area", "A_i", "pi * D_i**2 / 4", "Area of the inlet", DEFINITION),

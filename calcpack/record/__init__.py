@@ -100,15 +100,28 @@ def _assumptions(study: Study, inputs: list[Json]) -> list[Json]:
     found: list[Json] = []
 
     def add(text: str, basis: str, consequence: str, confirm: str) -> None:
-        found.append({"address": f"5.{len(found) + 1}", "text": text, "basis": basis, "consequence": consequence, "confirm": confirm})
+        found.append(
+            {
+                "address": f"5.{len(found) + 1}",
+                "text": text,
+                "basis": basis,
+                "consequence": consequence,
+                "confirm": confirm,
+            }
+        )
 
     for x in inputs:
         p = x.get("provenance")
         if p and p["status"] == "assumed":
-            add(f"{x['title']}: {x['given']} (line {x['address']})", p["note"], "enters the lines that cite it", p["confirm"])
+            add(
+                f"{x['title']}: {x['given']} (line {x['address']})",
+                p["note"],
+                "enters the lines that cite it",
+                p["confirm"],
+            )
     for text, consequence in study.assumptions.values():
         add(text, "the file states no other value", consequence, "")
-    standing = words.STANDING_ASSUMPTIONS
+    standing: tuple[tuple[str, str], ...] = words.STANDING_ASSUMPTIONS
     if study.route != "measured":
         standing += words.DESIGN_ASSUMPTIONS
     if study.route != "design":
@@ -131,16 +144,27 @@ def _limits(study: Study) -> list[Json]:
         ("impeller", "as", c.pump.npsh_required.impeller),
     ]
     for section in c.line.sections if c.line else ():
-        rows += [(f"drop of {e.name or 'the strainer'}", "not above", e.fouled) for e in section.elements if e.kind == "strainer"]
+        rows += [
+            (f"drop of {e.name or 'the strainer'}", "not above", e.fouled)
+            for e in section.elements
+            if e.kind == "strainer"
+        ]
     address = {x.key: x.value.address for x in study.ledger.inputs}
-    return [{"what": what, "limit": f"{word} {g.text}", "address": address.get(g.key, "")} for what, word, g in rows if g is not None]
+    return [
+        {"what": what, "limit": f"{word} {g.text}", "address": address.get(g.key, "")}
+        for what, word, g in rows
+        if g is not None
+    ]
 
 
 def _software(study: Study) -> list[Json]:
     lines = study.ledger.lines()
     found = [{"name": f"calcpack {__version__}", "role": "equations, ledger, rules, record"}]
     libraries = sorted({x.library for x in lines if x.library})
-    roles = {"CoolProp": "properties of water: IAPWS-95 (thermodynamic), IAPWS 2008 (viscosity)", "fluids": "table of pipe bores, ASME B36.10M"}
+    roles = {
+        "CoolProp": "properties of water: IAPWS-95 (thermodynamic), IAPWS 2008 (viscosity)",
+        "fluids": "table of pipe bores, ASME B36.10M",
+    }
     found += [{"name": name, "role": roles[name.split()[0]]} for name in libraries]
     found.append({"name": library("jsonschema"), "role": "form of the input file"})
     found.append({"name": library("weasyprint"), "role": "pages"})
@@ -181,7 +205,13 @@ def _nomenclature(study: Study) -> list[Json]:
         used.update(formula.names(check.rule.tree))
     entries = [NOMENCLATURE[name] for name in sorted(used, key=str.casefold)]
     return [
-        {"name": s.name, "base": s.base, "sub": s.sub, "upright": s.upright, "meaning": s.meaning, "unit": study.ledger.coherent(s.name).name}
+        {
+            "name": s.name,
+            "base": s.base,
+            "sub": s.sub,
+            "upright": s.upright,
+            "meaning": s.meaning,
+            "unit": study.ledger.coherent(s.name).name,
+        }
         for s in entries
     ]
-

@@ -71,7 +71,10 @@ def _side(ledger: Ledger, v: Value | None, symbol: str, toward: str) -> Json | N
 
 def governing(judged: list[Json]) -> Json:
     """The rule that decides: not met before not assessed before met, then the least margin in per cent."""
-    return min(judged, key=lambda r: (_RANK[r["verdict"]], Decimal(r["margin"]["percent"] or 1000) if r["margin"] else Decimal(1000)))
+    return min(
+        judged,
+        key=lambda r: (_RANK[r["verdict"]], Decimal(r["margin"]["percent"] or 1000) if r["margin"] else Decimal(1000)),
+    )
 
 
 def cover(study: Study, judged: list[Json], inputs: list[Json]) -> Json:
@@ -82,14 +85,17 @@ def cover(study: Study, judged: list[Json], inputs: list[Json]) -> Json:
     counts = Counter(p["status"] or "no status" for _, p in statuses)
     unsourced = [x for x, p in statuses if not p["source"] and p["status"] != "assumed"]
     unverified = [
-        {"address": x["address"], "what": x["title"], "status": p["status"] or "no status"} for x, p in statuses if p["status"] != "verified"
+        {"address": x["address"], "what": x["title"], "status": p["status"] or "no status"}
+        for x, p in statuses
+        if p["status"] != "verified"
     ]
     return {
         "verdict": verdict,
         "statement": " ".join(_sentence(r) for r in judged if r["verdict"] != "not applicable") + _found(study),
         "tally": {word: tally[word] for word in _RANK},
         "governing": governing(judged)["address"],
-        "counts": {word: counts[word] for word in ("verified", "maker", "preliminary", "assumed")} | {"without source": len(unsourced)},
+        "counts": {word: counts[word] for word in ("verified", "maker", "preliminary", "assumed")}
+        | {"without source": len(unsourced)},
         "unverified": unverified,
         "rounding": _rounding(study),
     }
@@ -101,7 +107,11 @@ def _sentence(r: Json) -> str:
         return f"{r['title']}{about}: {r['verdict']}, {r['reason']}."
     left, right, margin = r["left"]["headline"], r["right"]["headline"], r["margin"]["headline"]
     if r["id"] == "highest_temperature":
-        return f"The highest temperature was used, {left['text']} {left['unit']}." if r["verdict"] == "met" else f"{r['title']}: {r['reason']}."
+        return (
+            f"The highest temperature was used, {left['text']} {left['unit']}."
+            if r["verdict"] == "met"
+            else f"{r['title']}: {r['reason']}."
+        )
     words = "short by" if margin["text"].startswith("-") else "met by"
     subject = "NPSH available" if r["id"] == "npsh_margin" else "Submergence"
     amount = margin["text"].lstrip("-")
@@ -115,12 +125,16 @@ def _found(study: Study) -> str:
     for d in study.differences:
         x, unit = study.ledger.headline(d.value)
         more = "more" if x >= 0 else "less"
-        words.append(f" At the state of the reading {d.name}, the model shows {abs(x)} {unit.name} {more} than the reading.")
+        words.append(
+            f" At the state of the reading {d.name}, the model shows {abs(x)} {unit.name} {more} than the reading."
+        )
     return "".join(words)
 
 
 def _rounding(study: Study) -> str:
-    sides = [v for c in study.checks for v in (c.left, c.right) if v is not None and NOMENCLATURE[v.symbol].kind == "length"]
+    sides = [
+        v for c in study.checks for v in (c.left, c.right) if v is not None and NOMENCLATURE[v.symbol].kind == "length"
+    ]
     if not sides:
         return ""
     worst = max(sides, key=drift)

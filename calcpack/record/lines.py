@@ -83,7 +83,13 @@ def line(ledger: Ledger, of: Line, references: References) -> Json:
         found |= {"given": of.given, "key": of.key, "file_line": of.file_line, "used": value(ledger.used[v.address])}
         if of.provenance is not None:
             p = of.provenance
-            found["provenance"] = {"source": p.source, "place": p.place, "status": p.status, "note": p.note, "confirm": p.confirm}
+            found["provenance"] = {
+                "source": p.source,
+                "place": p.place,
+                "status": p.status,
+                "note": p.note,
+                "confirm": p.confirm,
+            }
     if of.kind == "conversion":
         before = of.operands[0][1].unit
         factor = before.factor / v.unit.factor

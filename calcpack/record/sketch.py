@@ -25,10 +25,15 @@ def sketch(study: Study) -> Json:
     result = next(x for x in lines if x.key_result and x.value.symbol in ("NPSHA_d", "NPSHA_m"))
     names = {"H_s": "surface pressure", "z": "static head", "H_v": "vapour pressure", "h_L": "losses", "H_b": "barometer",
              "H_g": "gauge reading", "z_g": "gauge height", "h_V": "velocity head"}  # fmt: skip
-    heads = [{"name": names[s], "symbol": s, "value": number(-v.record if s in ("H_v", "h_L") else v.record)} for s, v in result.operands]
+    heads = [
+        {"name": names[s], "symbol": s, "value": number(-v.record if s in ("H_v", "h_L") else v.record)}
+        for s, v in result.operands
+    ]
     level = of("z_s")
     elements = [
-        {"row": e.id, "kind": e.kind, "name": e.name or e.kind} for s in (c.line.sections if c.line else ()) for e in s.elements
+        {"row": e.id, "kind": e.kind, "name": e.name or e.kind}
+        for s in (c.line.sections if c.line else ())
+        for e in s.elements
     ]
     inlet = None
     if c.intake is not None:

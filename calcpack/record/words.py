@@ -34,8 +34,11 @@ def scope(study: Study) -> list[str]:
     """What is covered: from where to where, in which states."""
     c = study.calculation
     states = [f"{part.title}: {part.scope}." for part in study.ledger.parts if part.title != "What the pump needs"]
-    return [f"The suction side from the surface of {c.supply.name} to the suction nozzle of {c.pump.name}. Loss from the nozzle to the "
-            "impeller belongs to NPSH required.", *states]
+    return [
+        f"The suction side from the surface of {c.supply.name} to the suction nozzle of {c.pump.name}. Loss from the nozzle to the "
+        "impeller belongs to NPSH required.",
+        *states,
+    ]
 
 
 _DESIGN = (
@@ -56,7 +59,7 @@ _WHY = {
     "design": "The file holds a level and a line and no reading: the design route applies.",
     "measured": "The file holds readings at the pump inlet and no line: the measured route applies.",
     "both": "The file holds a line and readings: both routes apply. The model is run at the state of each reading, where the two are "
-            "compared; the difference is a finding, not an error of rounding.",
+    "compared; the difference is a finding, not an error of rounding.",
 }
 _ROUNDING = (
     "Each line is computed from the printed values above it, in one coherent system of units ({units}), to 50 digits, and rounded once: "
@@ -73,14 +76,18 @@ def method(study: Study) -> list[str]:
     words = [_WHY[study.route]]
     if study.route != "measured":
         words.append(_DESIGN)
-        words.append("Losses are found element by element: straight pipe by Darcy and Weisbach with the friction factor of Colebrook (laminar below "
-                     "Re 2 000; between 2 000 and 4 000 the factor is uncertain and the turbulent one, the greater, is taken); fittings by "
-                     "loss coefficients of one named set on the velocity head of their own bore; strainers by the square of the flow.")
+        words.append(
+            "Losses are found element by element: straight pipe by Darcy and Weisbach with the friction factor of Colebrook (laminar below "
+            "Re 2 000; between 2 000 and 4 000 the factor is uncertain and the turbulent one, the greater, is taken); fittings by "
+            "loss coefficients of one named set on the velocity head of their own bore; strainers by the square of the flow."
+        )
     if study.route != "design":
         words.append(_MEASURED)
     if any("carried" in part.title.lower() for part in study.ledger.parts):
         words.append(_CARRIED)
-    words.append("Properties of water are those of the saturated liquid at the temperature of the state; a cited value replaces a look-up.")
+    words.append(
+        "Properties of water are those of the saturated liquid at the temperature of the state; a cited value replaces a look-up."
+    )
     words.append(_ROUNDING.format(units=_UNITS[study.calculation.units]))
     return words
 
@@ -90,9 +97,18 @@ STANDING_ASSUMPTIONS = (
     ("One inlet carries the flow of one pump", "a shared inlet or line carries more and loses more"),
 )
 DESIGN_ASSUMPTIONS = (
-    ("Every loss coefficient counts on the bore of its own section", "a coefficient on another bore differs by the fourth power of the bores"),
+    (
+        "Every loss coefficient counts on the bore of its own section",
+        "a coefficient on another bore differs by the fourth power of the bores",
+    ),
 )
 MEASURED_ASSUMPTIONS = (
-    ("A filled gauge leg holds the pumped liquid at its temperature", "a colder leg is heavier: below 1 % of the leg's height for water"),
-    ("The loss between the tap and the pump's datum is negligible", "a loss there lowers NPSH available by its own amount"),
+    (
+        "A filled gauge leg holds the pumped liquid at its temperature",
+        "a colder leg is heavier: below 1 % of the leg's height for water",
+    ),
+    (
+        "The loss between the tap and the pump's datum is negligible",
+        "a loss there lowers NPSH available by its own amount",
+    ),
 )

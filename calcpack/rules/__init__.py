@@ -7,7 +7,8 @@ from decimal import Decimal
 from typing import Literal
 
 from .. import formula
-from ..formula import Cmp, Bin, FormulaError, InDecimal, InFloat
+from ..arithmetic import InDecimal, InFloat, evaluate
+from ..formula import Bin, Cmp, FormulaError
 from ..ledger import Value, drift
 from ..number import of_record
 from ..references import Cite
@@ -57,27 +58,56 @@ REPORTED_DECIMALS = 2
 LARGEST_DRIFT = Decimal(1).scaleb(-REPORTED_DECIMALS - 1)
 
 
-def compare(rule: Rule, left: Value, right: Value, *, about: str = "", criterion: str, source: str, met: str = "", not_met: str = "") -> Check:
+def compare(
+    rule: Rule,
+    left: Value,
+    right: Value,
+    *,
+    about: str = "",
+    criterion: str,
+    source: str,
+    met: str = "",
+    not_met: str = "",
+) -> Check:
     """Judge ``rule`` on two values of record; the shadow book must agree, else the rule is not assessed."""
     a, b = formula.names(rule.tree)
-    record: bool = formula.evaluate(rule.tree, {a: left.record, b: right.record}, InDecimal())
-    shadow: bool = formula.evaluate(rule.tree, {a: left.shadow, b: right.shadow}, InFloat())
+    record: bool = evaluate(rule.tree, {a: left.record, b: right.record}, InDecimal())
+    shadow: bool = evaluate(rule.tree, {a: left.shadow, b: right.shadow}, InFloat())
     room = Bin("-", rule.tree.a, rule.tree.b) if rule.tree.op in (">=", ">") else Bin("-", rule.tree.b, rule.tree.a)
-    margin = of_record(formula.evaluate(room, {a: left.record, b: right.record}, InDecimal()))
-    percent = None if not right.record or NOMENCLATURE[b].kind == "temperature" else formula.evaluate(_PERCENT, {"M": margin, "N_L": abs(right.record)}, InDecimal())
+    margin = of_record(evaluate(room, {a: left.record, b: right.record}, InDecimal()))
+    percent = (
+        None
+        if not right.record or NOMENCLATURE[b].kind == "temperature"
+        else evaluate(_PERCENT, {"M": margin, "N_L": abs(right.record)}, InDecimal())
+    )
     worst = max(drift(left), drift(right))
     verdict: Verdict = "met" if record else "not met"
     reason = met if record else not_met
     if record != shadow:
-        verdict, reason = "not assessed", "within rounding: the verdict turns between the record and the full-precision run"
+        verdict, reason = (
+            "not assessed",
+            "within rounding: the verdict turns between the record and the full-precision run",
+        )
     elif worst > LARGEST_DRIFT:
-        verdict, reason = "not assessed", "within rounding: line rounding moves a side by more than a tenth of its last digit reported"
+        verdict, reason = (
+            "not assessed",
+            "within rounding: line rounding moves a side by more than a tenth of its last digit reported",
+        )
     return Check(rule, about, verdict, reason, criterion, source, left, right, margin, percent)
 
 
 _PERCENT = formula.parse("100 * M / N_L")
 
 
-def without_numbers(rule: Rule, verdict: Verdict, reason: str, *, about: str = "", criterion: str = "", source: str = "", left: Value | None = None) -> Check:
+def without_numbers(
+    rule: Rule,
+    verdict: Verdict,
+    reason: str,
+    *,
+    about: str = "",
+    criterion: str = "",
+    source: str = "",
+    left: Value | None = None,
+) -> Check:
     """A rule that no comparison can settle, with the reason."""
     return Check(rule, about, verdict, reason, criterion, source, left)

@@ -6,11 +6,18 @@ from ..ledger import Value
 from ..references import Cite
 from . import Check, Rule, compare, without_numbers
 
-SUBMERGENCE = Rule("submergence", "Submergence against surface vortices", "S >= S_m", Cite("hi98", "9.8.7"))
+SUBMERGENCE = Rule("submergence", "Submergence against surface vortices", "S >= S_m", Cite("hi98"))
 
 
 def check(
-    there_is: Value | None, needed: Value | None, *, free_surface: bool, supply: str, reference: str, missing: str, source: str
+    there_is: Value | None,
+    needed: Value | None,
+    *,
+    free_surface: bool,
+    supply: str,
+    reference: str,
+    missing: str,
+    source: str,
 ) -> Check:
     """Judge submergence over the inlet's ``reference`` line; without a free surface the rule does not apply."""
     criterion = f"Submergence at the lowest level, over the {reference or 'inlet'}, at least D (1 + 2.3 F)"

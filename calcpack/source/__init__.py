@@ -7,12 +7,14 @@ from pathlib import Path
 
 from ..faults import Fault, InputFault
 from .build import build
-from .checks import View, check
+from .checks import check_document
 from .document import parse, read_bytes
 from .inputs import Calculation
+from .plant import check_plant
 from .schema import quantities
 from .spelling import correct
 from .validate import validate
+from .view import View
 
 __all__ = ["Calculation", "load", "loads"]
 
@@ -21,7 +23,10 @@ MAX_FAULTS = 100
 
 
 def load(path: str | Path) -> Calculation:
-    """Read an input file.  Raises :class:`InputFault` with every fault found; faults name the file as ``path`` does."""
+    """Read an input file.
+
+    Raises :class:`InputFault` with every fault found; faults name the file as ``path`` does.
+    """
     return loads(read_bytes(Path(path)), str(path))
 
 
@@ -30,7 +35,8 @@ def loads(raw: bytes, name: str) -> Calculation:
     typed, notation = parse(raw, name)
     root, spelling = correct(typed, name)
     read, unread = quantities(root, name)
-    faults = [*notation, *spelling, *validate(root, name), *unread, *check(View(root, read, name))]
+    view = View(root, read, name)
+    faults = [*notation, *spelling, *validate(root, name), *unread, *check_document(view), *check_plant(view)]
     if faults:
         raise InputFault(_once(faults, name))
     return build(root, read, raw, Path(name).name)

@@ -57,7 +57,7 @@ def _text(node: Node, name: str) -> str:
 
 @dataclass(frozen=True)
 class _Branch:
-    """A mapping of the file with its address and its origin; every reader here knows that the schema has been met."""
+    """A mapping of the file with its address and its origin; its methods rely on a tree without faults."""
 
     node: Mapping
     key: str

@@ -1,7 +1,8 @@
 """From bytes to a tree of text: YAML without its surprises.
 
-Only mappings, lists and text pass.  What YAML would quietly turn into something else (``12:30`` into 750, ``010`` into
-8, ``on`` into true) is refused unless quoted, as are anchors, aliases, tags, merge keys and keys that stand twice.
+Only mappings, lists and text pass.  What YAML would quietly turn into something else (``12:30`` into 750,
+``010`` into 8, ``on`` into true) is refused unless quoted.  Anchors, aliases, tags, merge keys and repeated keys
+are refused.
 """
 
 from __future__ import annotations
@@ -173,8 +174,8 @@ class _Builder:
         mark = (at.line + 1, at.column + 1) if at else (1, 1)
         problem = error.problem or "it cannot be read"
         hints = {
-            "mapping values are not allowed": "put a value that holds a colon and a space in quotation marks, and indent "
-            "the keys of one mapping alike",
+            "mapping values are not allowed": "put a value that holds a colon and a space in quotation marks, "
+            "and indent the keys of one mapping alike",
             r"'\t'": "indent with spaces, not with tabs",
             "cannot start any token": "put the value in quotation marks",
             "',' or '}'": "close the braces, with a comma between the entries",
@@ -198,9 +199,11 @@ def _rejoin(entries: list[tuple[Scalar, Node]]) -> None:
     if len(entries) < 2:
         return
     (name, before), (key, value) = entries[-2:]
-    if isinstance(before, Scalar) and isinstance(value, Scalar) and value.plain and not value.text:
-        if before.plain and _WHOLE.fullmatch(before.text) and _DECIMALS.fullmatch(key.text):
-            entries[-2:] = [(name, Scalar(before.mark, f"{before.text},{key.text}", True, before.oddity))]
+    empty = isinstance(value, Scalar) and value.plain and not value.text
+    whole = isinstance(before, Scalar) and before.plain and _WHOLE.fullmatch(before.text)
+    if empty and whole and _DECIMALS.fullmatch(key.text):
+        assert isinstance(before, Scalar)
+        entries[-2:] = [(name, Scalar(before.mark, f"{before.text},{key.text}"))]
 
 
 def _mark(event: Any) -> Mark:

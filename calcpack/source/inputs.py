@@ -1,4 +1,4 @@
-"""What an input file holds, as frozen records: typed values with their origin, nothing computed or looked up."""
+"""What an input file holds, as frozen records: values with their origin, nothing computed or looked up."""
 
 from __future__ import annotations
 
@@ -25,7 +25,7 @@ class Provenance:
 
 @dataclass(frozen=True, kw_only=True)
 class Given(Provenance):
-    """A value as the file gives it: its address, its text, what was read from it, its origin and its place."""
+    """A value as the file gives it: its address, its text, what was read from it, its origin, its place."""
 
     key: str
     text: str
@@ -74,7 +74,7 @@ class Site:
 
 @dataclass(frozen=True, kw_only=True)
 class Liquid:
-    """What is pumped; the properties are set where they replace the look-up, and always for a liquid other than water."""
+    """What is pumped; properties are set where they replace the look-up, always where it is not water."""
 
     name: str
     temperature: Extremes
@@ -85,7 +85,7 @@ class Liquid:
 
 @dataclass(frozen=True, kw_only=True)
 class Supply:
-    """Where the liquid comes from; ``pressure`` is set for a gas-blanketed vessel only, ``level`` never for a main."""
+    """Where the liquid comes from; a gas-blanketed vessel has a ``pressure``, a main has no ``level``."""
 
     name: str
     kind: Literal["open", "gas_blanketed", "main"]
@@ -95,7 +95,7 @@ class Supply:
 
 @dataclass(frozen=True, kw_only=True)
 class Pipe:
-    """A bore: either a nominal ``size`` with its ``schedule``, or ``bore``; the texts are empty where not given."""
+    """A bore: either a nominal ``size`` with its ``schedule``, or ``bore``; absent texts are empty."""
 
     size: str
     schedule: str
@@ -105,10 +105,11 @@ class Pipe:
 
 @dataclass(frozen=True, kw_only=True)
 class Element:
-    """One thing the liquid passes.  Which of the fields are set follows from ``kind``; the texts are empty otherwise.
+    """One thing the liquid passes.  Which fields are set follows from ``kind``; absent texts are empty.
 
-    entrance: ``shape`` or ``K`` · pipe: ``length`` · elbow: ``angle``, ``radius``, ``count`` · valve: ``type``, ``count`` ·
-    tee: ``flow``, ``count`` · fitting: ``name``, ``K``, ``count`` · strainer: ``name``, ``clean``, ``fouled``, ``at_flow``.
+    entrance: ``shape`` or ``K`` · pipe: ``length`` · elbow: ``angle``, ``radius``, ``count`` ·
+    valve: ``type``, ``count`` · tee: ``flow``, ``count`` · fitting: ``name``, ``K``, ``count`` ·
+    strainer: ``name``, ``clean``, ``fouled``, ``at_flow``.
     """
 
     id: str
@@ -202,7 +203,7 @@ class Submergence:
 
 @dataclass(frozen=True, kw_only=True)
 class Criteria:
-    """What must be met: at least one of ``ratio`` and ``difference``; ``submergence`` where the file names a method."""
+    """What must be met: ``ratio``, ``difference`` or both; ``submergence`` where a method is named."""
 
     ratio: Given | None
     difference: Given | None
@@ -243,8 +244,8 @@ class Reading:
 class Calculation:
     """A whole input file.
 
-    ``line`` together with ``supply.level`` gives the design route, ``readings`` the measured one; at least one is there.
-    ``path`` is the file's name without its folder, ``raw`` its bytes and ``sha256`` their digest in hexadecimal.
+    ``line`` with ``supply.level`` gives the design route, ``readings`` the measured one; one at least is there.
+    ``path`` is the file's name without its folder, ``raw`` its bytes, ``sha256`` their digest in hexadecimal.
     """
 
     number: str

@@ -15,7 +15,7 @@ from ..quantity import KINDS, Quantity, QuantityFault, parse
 from ..resources import find_resource
 from .nodes import Mapping, Mark, Node, Scalar, Sequence, below, label
 
-#: The keys of an origin, which may stand in nearly every mapping and are left out where messages list its keys.
+#: The keys of an origin, which stand in nearly every mapping and are left out where messages list keys.
 PROVENANCE = ("source", "status", "note", "confirm")
 Schema = dict[str, Any]
 
@@ -28,7 +28,7 @@ def schema() -> Schema:
 
 
 def definition(part: Schema) -> tuple[Schema, str]:
-    """What a part of the schema refers to, and the name of the definition, empty where it stands on the spot."""
+    """What a part of the schema refers to, and the name of that definition, empty where there is none."""
     if "$ref" not in part:
         return part, ""
     name = part["$ref"].rpartition("/")[2]

@@ -1,6 +1,6 @@
 """Keys that are not in the schema: reported once, and read as the key they are nearest to.
 
-Reading on under the corrected key keeps one slip from causing a second fault (``flwo`` unknown, ``flow`` missing).
+Reading on under the corrected key keeps one slip from being two faults (``flwo`` unknown, ``flow`` missing).
 """
 
 from __future__ import annotations

@@ -6,10 +6,8 @@ from dataclasses import dataclass
 
 from ..ledger import Ledger, Value
 from ..lookup import CONSTANTS
-from ..rules import Check
-from ..rules import margin, submergence, temperature
-from ..source.inputs import Calculation
-from ..source.inputs import Provenance
+from ..rules import Check, margin, submergence, temperature
+from ..source.inputs import Calculation, Provenance
 from . import need, npsh
 from .entry import Entry
 from .npsh import Available
@@ -61,11 +59,15 @@ def run(calculation: Calculation) -> Study:
         found = npsh.measured(entry, reading, reading.name)
         if model is not None:
             ledger.group("Model and reading at the same state")
-            value = ledger.apply("difference", {"NPSHA_d": model.npsh, "NPSHA_m": found.npsh}, reading.name, key_result=True)
+            value = ledger.apply(
+                "difference", {"NPSHA_d": model.npsh, "NPSHA_m": found.npsh}, reading.name, key_result=True
+            )
             differences.append(Difference(reading.name, value))
         if state.level is None or worst.level is None:
-            entry.find(f"The reading {reading.name} is judged at its own state only",
-                       "a reading is carried to the worst case by the levels, of the reading and the lowest; the file lacks one")
+            entry.find(
+                f"The reading {reading.name} is judged at its own state only",
+                "a reading is carried to the worst case by the levels, of the reading and the lowest; the file lacks one",
+            )
             judged.append(found)
             continue
         ledger.part(f"Carried to the worst case: {reading.name}", worst.scope)
@@ -79,7 +81,17 @@ def run(calculation: Calculation) -> Study:
     checks.append(_temperature(entry, judged, worst))
     checks.append(_submergence(entry, worst))
     route = "both" if by_design and calculation.readings else "design" if by_design else "measured"
-    return Study(calculation, ledger, route, tuple(judged), needed, tuple(differences), tuple(checks), entry.findings, entry.assumptions)
+    return Study(
+        calculation,
+        ledger,
+        route,
+        tuple(judged),
+        needed,
+        tuple(differences),
+        tuple(checks),
+        entry.findings,
+        entry.assumptions,
+    )
 
 
 def _margin(available: Available, needed: need.Needed, calculation: Calculation) -> Check:
@@ -107,14 +119,27 @@ def _temperature(entry: Entry, judged: list[Available], worst: State) -> Check:
 def _submergence(entry: Entry, worst: State) -> Check:
     c = entry.calculation
     free_surface = c.supply.kind != "main"
-    missing = "the file describes no inlet" if c.intake is None else "the file gives no lowest level" if worst.level is None else ""
+    missing = (
+        "the file describes no inlet"
+        if c.intake is None
+        else "the file gives no lowest level"
+        if worst.level is None
+        else ""
+    )
     there_is = needed = None
     if free_surface and not missing:
         found = need.submergence(entry, worst, npsh.flow_of(entry, worst))
         there_is, needed = found.there_is, found.needed
     source = _cited(c.criteria.submergence.provenance) if c.criteria.submergence else ""
-    return submergence.check(there_is, needed, free_surface=free_surface, supply=c.supply.name,
-                             reference=need.reference(c.intake) if c.intake else "", missing=missing, source=source)
+    return submergence.check(
+        there_is,
+        needed,
+        free_surface=free_surface,
+        supply=c.supply.name,
+        reference=need.reference(c.intake) if c.intake else "",
+        missing=missing,
+        source=source,
+    )
 
 
 def _cited(of: Provenance) -> str:

@@ -37,9 +37,16 @@ def bore_of(entry: Entry, pipe: Pipe, at: Place, about: str) -> Value:
     try:
         found = lookup.bore(pipe.size, pipe.schedule)
     except OutOfRange as error:
-        entry.refuse(at, "a nominal size and schedule of ASME B36.10M", f"{pipe.size} schedule {pipe.schedule}", f"{error}; or state the bore")
+        entry.refuse(
+            at,
+            "a nominal size and schedule of ASME B36.10M",
+            f"{pipe.size} schedule {pipe.schedule}",
+            f"{error}; or state the bore",
+        )
     quantity = parse(f"{found.millimetres} mm", "bore")
-    return entry.ledger.tabulated("D", f"Bore, {about}, from the pipe table", quantity, found.place, Cite("b3610"), lookup.library("fluids"))
+    return entry.ledger.tabulated(
+        "D", f"Bore, {about}, from the pipe table", quantity, found.place, Cite("b3610"), lookup.library("fluids")
+    )
 
 
 def flow_in(entry: Entry, flow: Value, bore: Value, about: str) -> Flow:
@@ -59,7 +66,9 @@ def losses(entry: Entry, state: State, flow: Value, liquid: Liquid) -> Value:
     for section in line.sections:
         rows += _section(entry, state, flow, liquid, section)
     if not any(e.kind == "entrance" for s in line.sections for e in s.elements):
-        entry.find("The line has no entrance: its loss is left out", "a line from a tank or basin begins with an entrance loss")
+        entry.find(
+            "The line has no entrance: its loss is left out", "a line from a tank or basin begins with an entrance loss"
+        )
     entry.ledger.group("Losses from the surface to the suction nozzle")
     title = f"Losses, surface to suction nozzle: {SET_NAMES[line.fitting_set]} coefficients; {state.scope}"
     if line.friction_contingency is None:
@@ -96,20 +105,30 @@ def _section(
     return [rows[element.id] for element in section.elements]
 
 
-def _pipe(entry: Entry, state: State, liquid: Liquid, section: Section, pipe: Flow, element: Element) -> tuple[str, Value]:
+def _pipe(
+    entry: Entry, state: State, liquid: Liquid, section: Section, pipe: Flow, element: Element
+) -> tuple[str, Value]:
     ledger, about = entry.ledger, section.name or section.id
     assert element.length is not None, "the schema asks for a pipe's length"
     length = entry.value(element.length, "L", f"Length of straight pipe, element {element.id}")
-    reynolds = ledger.apply("reynolds", {"rho": liquid.density, "V": pipe.velocity, "D": pipe.bore, "mu": viscosity(entry, state, liquid)}, about)
+    reynolds = ledger.apply(
+        "reynolds",
+        {"rho": liquid.density, "V": pipe.velocity, "D": pipe.bore, "mu": viscosity(entry, state, liquid)},
+        about,
+    )
     if reynolds.record < LAMINAR_BELOW:
         friction = ledger.apply("laminar_friction", {"Re": reynolds}, about)
     else:
         relative = ledger.apply("relative_roughness", {"eps": _roughness(entry, section), "D": pipe.bore}, about)
         turbulent = reynolds.record > TURBULENT_ABOVE
-        friction = ledger.apply("colebrook" if turbulent else "colebrook_transition", {"r": relative, "Re": reynolds}, about)
+        friction = ledger.apply(
+            "colebrook" if turbulent else "colebrook_transition", {"r": relative, "Re": reynolds}, about
+        )
         if not turbulent:
-            entry.find(f"The friction factor of {about} is uncertain (line {friction.address})",
-                       f"its Reynolds number lies between {LAMINAR_BELOW} and {TURBULENT_ABOVE}; the turbulent value, the greater, is taken")
+            entry.find(
+                f"The friction factor of {about} is uncertain (line {friction.address})",
+                f"its Reynolds number lies between {LAMINAR_BELOW} and {TURBULENT_ABOVE}; the turbulent value, the greater, is taken",
+            )
     k = ledger.apply("pipe_coefficient", {"f": friction, "L": length, "D": pipe.bore}, f"element {element.id}")
     return f"{element.name or 'Straight pipe'}, {element.length.text}", k
 
@@ -118,9 +137,14 @@ def _roughness(entry: Entry, section: Section) -> Value:
     if section.roughness is not None:
         return entry.value(section.roughness, "eps", f"Roughness of the wall, {section.name or section.id}")
     text, cite = lookup.ROUGHNESS[section.material]
-    entry.assume(f"roughness {section.material}", f"The pipe wall of {section.material} is as rough as new: {text}",
-                 "an aged pipe is rougher and loses more; state a roughness to replace it")
-    return entry.ledger.tabulated("eps", f"Roughness of {section.material}, new, from the table", parse(text, "roughness"), section.material, cite)
+    entry.assume(
+        f"roughness {section.material}",
+        f"The pipe wall of {section.material} is as rough as new: {text}",
+        "an aged pipe is rougher and loses more; state a roughness to replace it",
+    )
+    return entry.ledger.tabulated(
+        "eps", f"Roughness of {section.material}, new, from the table", parse(text, "roughness"), section.material, cite
+    )
 
 
 def _fitting(entry: Entry, pipe: Flow, element: Element) -> tuple[str, Value]:
@@ -129,18 +153,30 @@ def _fitting(entry: Entry, pipe: Flow, element: Element) -> tuple[str, Value]:
     if element.K is not None:
         words = element.name or element.kind.capitalize()
         return words, entry.value(element.K, "K", f"Loss coefficient, {words}, element {element.id}")
-    variant = f"{element.angle} {element.radius}" if element.kind == "elbow" else element.shape or element.type or element.flow
+    variant = (
+        f"{element.angle} {element.radius}"
+        if element.kind == "elbow"
+        else element.shape or element.type or element.flow
+    )
     found = coefficient(line.fitting_set, element.kind, variant, pipe.bore.shadow)
     if found is None:
         known = ", ".join(v for k, v in SETS[line.fitting_set] if k == element.kind)
-        entry.refuse(element, f"a fitting of the set {SET_NAMES[line.fitting_set]}: {element.kind} {known}", f"{element.kind} {variant}",
-                     "state its K with its source")
+        entry.refuse(
+            element,
+            f"a fitting of the set {SET_NAMES[line.fitting_set]}: {element.kind} {known}",
+            f"{element.kind} {variant}",
+            "state its K with its source",
+        )
     words = element.name or found.title
     set_name = SET_NAMES[line.fitting_set]
     if found.K:
-        return words, ledger.tabulated("K", found.title, parse(found.K, "coefficient"), f"{set_name}: {found.title}", found.cite)
+        return words, ledger.tabulated(
+            "K", found.title, parse(found.K, "coefficient"), f"{set_name}: {found.title}", found.cite
+        )
     rough = ledger.apply("fully_rough_friction", {"eps_c": ledger.constant("eps_c"), "D": pipe.bore})
-    multiple = ledger.tabulated("m", f"{found.title}: multiple of f_T", parse(found.m, "ratio"), f"{set_name}: {found.title}", found.cite)
+    multiple = ledger.tabulated(
+        "m", f"{found.title}: multiple of f_T", parse(found.m, "ratio"), f"{set_name}: {found.title}", found.cite
+    )
     return words, ledger.apply("fitting_coefficient", {"m": multiple, "f_T": rough}, found.title)
 
 

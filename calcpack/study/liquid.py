@@ -33,7 +33,11 @@ def at(entry: Entry, state: State) -> Liquid:
 def temperature_of(entry: Entry, state: State) -> Value:
     """The temperature of ``state``, in kelvin."""
     extreme, given = warmest(entry.calculation)
-    title = f"Temperature of the liquid, {extreme}" if given is state.temperature else "Temperature of the liquid at the reading"
+    title = (
+        f"Temperature of the liquid, {extreme}"
+        if given is state.temperature
+        else "Temperature of the liquid at the reading"
+    )
     return entry.value(state.temperature, "T", title)
 
 
@@ -63,6 +67,10 @@ def _cited(entry: Entry, state: State, name: str) -> Given | None:
     if given is None or state.temperature.quantity.si() == warmest(entry.calculation)[1].quantity.si():
         return given
     if liquid.name != "water":
-        entry.refuse(state.temperature, f"the temperature at which {name} is cited", state.temperature.text,
-                     f"a cited property holds at one temperature; {liquid.name} is not looked up at another")
+        entry.refuse(
+            state.temperature,
+            f"the temperature at which {name} is cited",
+            state.temperature.text,
+            f"a cited property holds at one temperature; {liquid.name} is not looked up at another",
+        )
     return None

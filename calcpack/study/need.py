@@ -7,8 +7,8 @@ from dataclasses import dataclass
 from ..ledger import Value
 from ..source.inputs import Intake
 from .entry import Entry
-from .npsh import Available
 from .liquid import temperature_of
+from .npsh import Available
 from .state import State, warmest
 
 
@@ -44,7 +44,9 @@ def needed(entry: Entry) -> Needed:
     if len(found) == 2:
         limit = ledger.apply("needed_greater", {"N_r": found["ratio"], "N_d": found["difference"]})
     governs = next(name for name, value in found.items() if value.record == limit.record)
-    criterion = "NPSH available at least " + (words[0] if len(words) == 1 else f"the greater of {words[0]} and {words[1]}")
+    criterion = "NPSH available at least " + (
+        words[0] if len(words) == 1 else f"the greater of {words[0]} and {words[1]}"
+    )
     return Needed(required, at_flow, limit, governs, criterion)
 
 
@@ -104,4 +106,3 @@ def highest_temperature(entry: Entry) -> Value | None:
     """The highest temperature expected, where the file gives it."""
     extreme, given = warmest(entry.calculation)
     return entry.value(given, "T", "Temperature of the liquid, highest") if extreme == "highest" else None
-

@@ -55,10 +55,13 @@ def surface(entry: Entry, state: State) -> Surface:
     ledger.group("Pressure on the surface")
     p_s = pressure(entry, state)
     if p_s.record <= liquid.vapour_pressure.record:
-        entry.refuse(state.pressure or state.temperature, "a surface pressure above the vapour pressure",
-                     f"{p_s.record} {p_s.unit.name} on the surface, {liquid.vapour_pressure.record} {p_s.unit.name} vapour pressure "
-                     f"at {state.temperature.text}: the liquid boils at the surface",
-                     "check the temperature, and whether the pressure is gauge or absolute")
+        entry.refuse(
+            state.pressure or state.temperature,
+            "a surface pressure above the vapour pressure",
+            f"{p_s.record} {p_s.unit.name} on the surface, {liquid.vapour_pressure.record} {p_s.unit.name} vapour pressure "
+            f"at {state.temperature.text}: the liquid boils at the surface",
+            "check the temperature, and whether the pressure is gauge or absolute",
+        )
     surface_head = ledger.apply("surface_head", {"p_s": p_s, "gamma": liquid.specific_weight})
     vapour_head = ledger.apply("vapour_head", {"p_v": liquid.vapour_pressure, "gamma": liquid.specific_weight})
     ledger.group("Static head")
@@ -122,6 +125,8 @@ def carried(entry: Entry, found: Available, reading: Surface, worst: Surface, ab
     }
     npsh = ledger.apply("npsh_carried", {"NPSHA_m": found.npsh, **changes}, key_result=True)
     if inferred.record < 0:
-        entry.find(f"The reading {found.about} shows more head than the surface offers (line {inferred.address})",
-                   "losses cannot be negative: level, gauge, its elevation, barometer or datum is in doubt")
+        entry.find(
+            f"The reading {found.about} shows more head than the surface offers (line {inferred.address})",
+            "losses cannot be negative: level, gauge, its elevation, barometer or datum is in doubt",
+        )
     return Available(about, npsh, worst.flow, worst.liquid.temperature)

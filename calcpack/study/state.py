@@ -53,5 +53,13 @@ def as_found(reading: Reading) -> State:
     words = [f"flow {reading.flow.text}", reading.temperature.text, f"barometer {reading.barometer.text}"]
     if reading.level is not None:
         words.insert(0, f"level {reading.level.text}")
-    return State(reading.name, ", ".join(words), reading.flow, reading.temperature, reading.level,
-                 reading.surface_pressure, reading.barometer, reading.strainers or "clean")
+    return State(
+        reading.name,
+        ", ".join(words),
+        reading.flow,
+        reading.temperature,
+        reading.level,
+        reading.surface_pressure,
+        reading.barometer,
+        reading.strainers or "clean",
+    )

@@ -1,0 +1,46 @@
+"""The command's entry point: guarded, so that a crash, even one at import, never looks like a rule not met."""
+
+from __future__ import annotations
+
+import sys
+
+#: Exit code of a defect of ours (EX_SOFTWARE of sysexits.h).
+DEFECT = 70
+
+
+def main() -> int:
+    """Run the command and return its exit code; a defect prints a short report to send and returns 70."""
+    try:
+        from .cli import run
+
+        return run(sys.argv[1:])
+    except KeyboardInterrupt:
+        return 130
+    except BrokenPipeError:
+        # The reader of our output has gone; nothing is left to say, and Python must not say it at exit either.
+        sys.stderr.close()
+        return 141
+    except Exception as error:
+        return _report(error)
+
+
+def _report(error: Exception) -> int:
+    import platform
+    import traceback
+
+    from . import __version__
+
+    last = traceback.extract_tb(error.__traceback__)[-1]
+    place = last.filename.replace("\\", "/").rpartition("/calcpack/")[2]
+    print(
+        "calcpack: this is a defect of calcpack, not of your file. Nothing was written. Please send these lines to its developers:\n"
+        f"  calcpack {__version__}, Python {platform.python_version()}, {platform.system()}\n"
+        f"  {type(error).__name__}: {error}\n"
+        f"  at {place}, line {last.lineno}, in {last.name}",
+        file=sys.stderr,
+    )
+    return DEFECT
+
+
+if __name__ == "__main__":
+    sys.exit(main())

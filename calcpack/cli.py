@@ -1,0 +1,200 @@
+"""The commands: draft, assess, verify."""
+
+from __future__ import annotations
+
+import argparse
+import os
+import sys
+import tempfile
+from collections.abc import Sequence
+from pathlib import Path
+from typing import Any, NoReturn
+
+from . import __version__, assess, draft, verify
+from .faults import Fault, InputFault
+
+PASSED, NOT_MET, AT_FAULT, DISAGREES = 0, 1, 2, 3
+_EPILOG = (
+    "exit codes: 0 every rule met or not applicable; 1 a rule not met or not assessed; 2 input at fault; "
+    "3 verification disagrees; 70 a defect of calcpack"
+)
+
+
+class _Parser(argparse.ArgumentParser):
+    def error(self, message: str) -> NoReturn:
+        print(f"calcpack: {message}. See `calcpack --help`.", file=sys.stderr)
+        raise SystemExit(AT_FAULT)
+
+
+def _parser() -> argparse.ArgumentParser:
+    parser = _Parser(
+        "calcpack", description="A calculation package for a pump's suction side, from one input file.", epilog=_EPILOG
+    )
+    parser.add_argument("--version", action="version", version=f"calcpack {__version__}")
+    commands = parser.add_subparsers(dest="command", required=True, metavar="COMMAND", parser_class=_Parser)
+    drafting = commands.add_parser("draft", help="make the package (PDF) of an input file", epilog=_EPILOG)
+    drafting.add_argument("input", type=Path, metavar="INPUT", help="the input file (YAML)")
+    drafting.add_argument(
+        "-o",
+        "--output",
+        type=Path,
+        metavar="FILE.pdf",
+        help="where to write it; default: the input's name with .pdf, here",
+    )
+    assessing = commands.add_parser("assess", help="compute and check, without making pages", epilog=_EPILOG)
+    assessing.add_argument("input", type=Path, metavar="INPUT", help="the input file (YAML)")
+    assessing.add_argument("--json", action="store_true", help="print the record instead of the table")
+    verifying = commands.add_parser(
+        "verify", help="read a package back from its pages and recompute every line", epilog=_EPILOG
+    )
+    verifying.add_argument("package", type=Path, metavar="FILE.pdf", help="the package")
+    return parser
+
+
+def run(arguments: Sequence[str]) -> int:
+    """Run the command line ``arguments`` and return the exit code; messages go to standard error."""
+    try:
+        asked = _parser().parse_args(arguments)
+    except SystemExit as stop:
+        return int(stop.code or 0)
+    try:
+        if asked.command == "draft":
+            return _draft(asked.input, asked.output)
+        if asked.command == "assess":
+            return _assess(asked.input, asked.json)
+        return _verify(asked.package)
+    except InputFault as fault:
+        print(str(fault), file=sys.stderr)
+        count = len(fault.faults)
+        print(f"calcpack: {count} fault{'s' if count > 1 else ''} in the input; nothing was written.", file=sys.stderr)
+        return AT_FAULT
+
+
+def _passed(record: dict[str, Any]) -> int:
+    return PASSED if record["cover"]["verdict"] == "met" else NOT_MET
+
+
+def _draft(source: Path, output: Path | None) -> int:
+    target = output or Path(source.name).with_suffix(".pdf")
+    _check_target(target, source)
+    _progress("computing and setting the pages")
+    try:
+        package = draft(source)
+    except OSError as error:
+        if "cannot load library" not in str(error):
+            raise
+        raise InputFault([_missing_library(error)]) from None
+    finally:
+        _progress("")
+    _write(target, package.pdf)
+    print(_verdict(package.record))
+    print(target)
+    return _passed(package.record)
+
+
+def _assess(source: Path, as_json: bool) -> int:
+    record = assess(source)
+    if as_json:
+        from .record import canonical
+
+        sys.stdout.buffer.write(canonical(record) + b"\n")
+    else:
+        from .table import table
+
+        print(table(record))
+    return _passed(record)
+
+
+def _verify(package: Path) -> int:
+    from .reader import NotAPackage
+
+    try:
+        report = verify(package.read_bytes())
+    except (OSError, NotAPackage) as error:
+        reason = error.strerror if isinstance(error, OSError) else str(error)
+        raise InputFault(
+            [Fault(str(package), 0, 0, "", "a package made by calcpack", reason or "nothing readable")]
+        ) from None
+    print(report)
+    return PASSED if report.ok else DISAGREES
+
+
+def _verdict(record: dict[str, Any]) -> str:
+    cover = record["cover"]
+    rule = next(r for r in record["checks"] if r["address"] == cover["governing"])
+    margin = rule["margin"]
+    amount = f", margin {margin['headline']['text']} {margin['headline']['unit']}" if margin else f": {rule['reason']}"
+    percent = f" ({margin['percent']} %)" if margin and margin["percent"] else ""
+    about = f" ({rule['about']})" if rule["about"] else ""
+    return f"Verdict: {cover['verdict']}. Governing: rule {rule['address']}, {rule['title']}{about}: {rule['verdict']}{amount}{percent}."
+
+
+def _progress(words: str) -> None:
+    """One line on a terminal, overwritten; nothing where the output goes elsewhere."""
+    if sys.stderr.isatty():
+        print(f"\r\033[K{words}{' …' if words else ''}", end="", file=sys.stderr, flush=True)
+
+
+def _check_target(target: Path, source: Path) -> None:
+    """Refuse a target that cannot be written before the pages are set, not after."""
+    found = ""
+    if target.is_dir():
+        found = "a folder"
+    elif not target.parent.is_dir():
+        found = f"no folder {target.parent}"
+    elif target.exists() and target.samefile(source):
+        found = "the input file itself"
+    elif not os.access(target if target.exists() else target.parent, os.W_OK):
+        found = "no permission to write there"
+    if found:
+        raise InputFault(
+            [Fault(str(target), 0, 0, "-o", "a file that can be written", found, "name another path with -o")]
+        )
+
+
+def _write(target: Path, content: bytes) -> None:
+    """Write all of it or nothing: a crash in the middle leaves the old file."""
+    try:
+        handle, name = tempfile.mkstemp(dir=target.parent, prefix=f".{target.name}.")
+    except OSError as error:
+        raise _unwritable(target, error) from None
+    temporary = Path(name)
+    try:
+        with os.fdopen(handle, "wb") as stream:
+            stream.write(content)
+            stream.flush()
+            os.fsync(stream.fileno())
+        mask = os.umask(0)
+        os.umask(mask)
+        temporary.chmod(0o666 & ~mask)
+        temporary.replace(target)
+    except OSError as error:
+        temporary.unlink(missing_ok=True)
+        raise _unwritable(target, error) from None
+    except BaseException:
+        temporary.unlink(missing_ok=True)
+        raise
+
+
+def _unwritable(target: Path, error: OSError) -> InputFault:
+    return InputFault(
+        [
+            Fault(
+                str(target),
+                0,
+                0,
+                "-o",
+                "a file that can be written",
+                error.strerror or str(error),
+                "name another path with -o",
+            )
+        ]
+    )
+
+
+def _missing_library(error: OSError) -> Fault:
+    return Fault(
+        "this machine", 0, 0, "", "the library Pango, which sets the pages", str(error).splitlines()[0],
+        "Debian, Ubuntu: `apt install libpango-1.0-0 libpangoft2-1.0-0`; Fedora: `dnf install pango`; macOS: `brew install pango`; "
+        "Windows: install GTK's runtime through MSYS2, `pacman -S mingw-w64-x86_64-pango`",
+    )  # fmt: skip

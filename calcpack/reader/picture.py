@@ -1,0 +1,134 @@
+"""A formula picture: its rows, its relation signs, and the forms they begin."""
+
+from __future__ import annotations
+
+from collections.abc import Sequence
+from dataclasses import dataclass
+
+from .glyphs import Bar, Glyph
+from .notation import Marks, Root, Unread, baseline, items, read
+from .tree import Symbol, Tree, symbols
+
+RELATIONS = "=≥≤><"
+#: Clear space that separates two rows, less what the ink of a curved glyph takes of it (points).
+CLEAR = 1.8
+
+
+@dataclass(frozen=True)
+class Form:
+    """One form of a formula: left side, relation sign, right side.  ``left`` is None where the sign begins the form."""
+
+    left: Tree | None
+    relation: str
+    right: Tree
+
+
+@dataclass(frozen=True)
+class _Part:
+    """What belongs to one relation sign: marks to its left, and to its right row by row."""
+
+    sign: Glyph
+    left: Marks
+    rows: list[Marks]
+
+
+def forms(marks: Marks) -> list[Form]:
+    """The forms of a picture in the order of print.  Raises :class:`~calcpack.reader.notation.Unread`."""
+    signs = [g for g in marks.glyphs if g.char in RELATIONS]
+    if not signs:
+        raise Unread("no relation sign")
+    body = signs[0].size
+    if any(abs(g.size - body) > 0.02 * body for g in signs):
+        raise Unread("relation signs of different sizes")
+    parts: list[_Part] = []
+    for row in rows(marks):
+        parts += _parts(row, parts)
+    return [_form(part, body) for part in parts]
+
+
+def rows(marks: Marks) -> list[Marks]:
+    """The rows of a picture from the top, parted by clear space.
+
+    Space beside the bar of a fraction parts its terms, not rows.
+    """
+    roots = [i.bar for i in _all_roots(marks)]
+    bars = [b for b in marks.bars if b not in roots]
+    reach = sorted([(p.top, p.bottom) for p in (*marks.glyphs, *marks.bars)], reverse=True)
+    cuts, low = [], reach[0][1]
+    for top, bottom in reach:
+        if low - top > CLEAR and not any(abs(b.bottom - low) < 0.01 or abs(b.top - top) < 0.01 for b in bars):
+            cuts.append((low + top) / 2)
+        low = min(low, bottom)
+    found = []
+    for high, deep in zip([float("inf"), *cuts], [*cuts, float("-inf")], strict=True):
+        glyphs = tuple(g for g in marks.glyphs if deep < g.top <= high)
+        found.append(Marks(glyphs, tuple(b for b in marks.bars if deep < b.top <= high)))
+    return found
+
+
+def _all_roots(marks: Marks) -> list[Root]:
+    """Every root of a picture of any number of rows."""
+    signs = [g for g in marks.glyphs if g.char == "√"]
+    found = []
+    for sign in signs:
+        near = 0.12 * sign.size
+        bar = next((b for b in marks.bars if abs(sign.top - b.top) < near and abs(sign.right - b.left) < near), None)
+        if bar is not None:
+            found.append(Root(sign, bar, Marks(())))
+    return found
+
+
+def _parts(row: Marks, before: Sequence[_Part]) -> list[_Part]:
+    """The forms that begin in ``row``; a row without a relation sign goes on with the last form ``before``."""
+    signs = sorted((g for g in row.glyphs if g.char in RELATIONS), key=lambda g: g.x)
+    if not signs:
+        if not before:
+            raise Unread("a row before the first relation sign")
+        before[-1].rows.append(row)
+        return []
+    if any(abs(g.y - signs[0].y) > 0.5 for g in signs):
+        raise Unread("two rows that cannot be parted")
+    found, start = [], float("-inf")
+    for sign, after in zip(signs, [*signs[1:], None], strict=True):
+        end = after.x if after else float("inf")
+        left = _between(row, start, sign.x) if start < 0 else Marks(())
+        found.append(_Part(sign, left, [_between(row, sign.end - 0.01, end)]))
+        start = sign.end
+    return found
+
+
+def _between(row: Marks, left: float, right: float) -> Marks:
+    glyphs = tuple(g for g in row.glyphs if left <= g.x < right)
+    return Marks(glyphs, tuple(b for b in row.bars if left <= b.left < right))
+
+
+def _form(part: _Part, body: float) -> Form:
+    right = Marks((), ())
+    for row in part.rows:
+        right = _joined(right, row, part.sign.y, body)
+    left = read(part.left, body) if part.left.glyphs else None
+    numeric = left is None or not isinstance(left, Symbol)
+    tree = read(right, body)
+    if numeric and not any(symbols(tree)):
+        tree = read(right, body, numeric=True)
+    return Form(left, part.sign.char, tree)
+
+
+def _joined(before: Marks, row: Marks, y: float, body: float) -> Marks:
+    """``row`` set behind ``before`` on the baseline ``y``."""
+    if not row.glyphs:
+        raise Unread("an empty row")
+    if not before.glyphs:
+        return row
+    dy = y - baseline(items(row), body)
+    edge = max(p.right for p in (*before.glyphs, *before.bars))
+    dx = edge + 0.3 * body - min(g.x for g in row.glyphs)
+    glyphs = tuple(
+        g._replace(x=g.x + dx, end=g.end + dx, left=g.left + dx, right=g.right + dx, y=g.y + dy, bottom=g.bottom + dy,
+                   top=g.top + dy)
+        for g in row.glyphs
+    )
+    bars = tuple(
+        b._replace(left=b.left + dx, right=b.right + dx, bottom=b.bottom + dy, top=b.top + dy) for b in row.bars
+    )
+    return Marks(before.glyphs + glyphs, before.bars + bars)
