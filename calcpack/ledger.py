@@ -7,114 +7,26 @@ tree in double precision SI from the exact inputs.  What is printed is what was 
 
 from __future__ import annotations
 
-import hashlib
 from collections import Counter
 from collections.abc import Mapping, Sequence
-from dataclasses import dataclass, field
 from decimal import Decimal
-from fractions import Fraction
 from typing import Any, Literal
 
-from . import formula, lookup, root
+from . import lookup, root
 from .arithmetic import InDecimal, InFloat, evaluate
 from .catalog import EQUATION
+from .conversion import conversion_tree
 from .equations import Equation
-from .formula import Cmp, Node
-from .number import decimal, headline, of_record
+from .formula import Cmp
+from .number import headline, of_record
 from .quantity import COHERENT, PLANT, Quantity, Unit, parse
 from .references import DEFINITION, Cite
 from .symbols import NOMENCLATURE
+from .value import Kind, Line, Losses, Part, Provenance, Row, Value, in_unit
 
-Kind = Literal["given", "constant", "conversion", "equation", "lookup", "root"]
 Operands = Mapping[str, "Value | Sequence[Value]"]
 #: Sections of the package that hold addressed values.
 INPUTS, COMPUTATION = 4, 8
-
-
-@dataclass(frozen=True)
-class Value:
-    """A number with its address: ``record`` in ``unit``, ``shadow`` in SI."""
-
-    address: str
-    symbol: str
-    record: Decimal
-    shadow: float
-    unit: Unit
-    title: str
-
-
-@dataclass(frozen=True)
-class Provenance:
-    """Where an input comes from: source id and place in it, status and note, as the file states them."""
-
-    source: str = ""
-    place: str = ""
-    status: str = ""
-    note: str = ""
-    confirm: str = ""
-
-
-@dataclass(frozen=True)
-class Line:
-    """One printed line; see ``record`` for how it is written down."""
-
-    kind: Kind
-    value: Value
-    tree: Node | None = None
-    operands: tuple[tuple[str, Value], ...] = ()
-    cite: Cite = DEFINITION
-    validity: str = ""
-    given: str = ""
-    key: str = ""
-    file_line: int = 0
-    provenance: Provenance | None = None
-    function: str = ""
-    library: str = ""
-    residuals: tuple[tuple[Decimal, Decimal], ...] = ()
-    key_result: bool = False
-
-    @property
-    def fingerprint(self) -> str:
-        """Changes when the formula, an operand or the result changes; not when the line moves."""
-        parts = [
-            self.kind,
-            formula.text(self.tree) if self.tree else self.given or self.function,
-            str(self.value.record),
-            self.value.unit.name,
-        ]
-        parts += [f"{name}={v.record} {v.unit.name}" for name, v in self.operands]
-        return hashlib.sha256("\n".join(parts).encode()).hexdigest()[:12]
-
-
-@dataclass(frozen=True)
-class Row:
-    """A row of a loss table: its label, the element's words, and the line that holds its loss."""
-
-    label: str
-    element: str
-    line: Line
-
-
-@dataclass(frozen=True)
-class Losses:
-    """A loss table with its total and the row worked in full."""
-
-    title: str
-    rows: tuple[Row, ...]
-    total: Line
-    worked: str
-
-
-Block = str | Line | Losses
-
-
-@dataclass
-class Part:
-    """A run of the computation for one state; a block is a group's title, a line or a loss table."""
-
-    title: str
-    scope: str
-    blocks: list[Block] = field(default_factory=list)
 
 
 class Ledger:
@@ -122,23 +34,23 @@ class Ledger:
 
     def __init__(self, system: str) -> None:
         self.system = system
-        self.inputs: list[Line] = []
         self.used: dict[str, Value] = {}
         self.parts: list[Part] = []
+        self._lines: dict[str, Line] = {}
         self._count: Counter[int] = Counter()
         self._made: dict[tuple[object, ...], Value] = {}
-        self._group = ""
+        self._group = self._placed = ""
 
     # --- order on the page
 
     def part(self, title: str, scope: str) -> None:
         """Begin a part of the computation."""
         self.parts.append(Part(title, scope))
-        self._group = ""
+        self._group = self._placed = ""
 
     def group(self, title: str) -> None:
-        """Name the lines that follow; a group without lines leaves no heading."""
-        self._group = title
+        """Name the lines that follow; a group without lines leaves no heading, and none is repeated."""
+        self._group = "" if title == self._placed else title
 
     def _address(self, section: int) -> str:
         self._count[section] += 1
@@ -148,24 +60,29 @@ class Ledger:
         blocks = self.parts[-1].blocks
         if self._group:
             blocks.append(self._group)
-            self._group = ""
+            self._placed, self._group = self._group, ""
         blocks.append(block)
 
+    def _register(self, line: Line) -> Line:
+        self._lines[line.value.address] = line
+        return line
+
     def _write(self, line: Line) -> Value:
-        self._place(line)
+        self._place(self._register(line))
         return line.value
+
+    @property
+    def inputs(self) -> list[Line]:
+        """Inputs and constants, in the order of their addresses."""
+        return [line for line in self._lines.values() if line.kind in ("given", "constant")]
 
     def lines(self) -> list[Line]:
         """Every line with an address, inputs first, rows of loss tables included."""
-        found = list(self.inputs)
-        for part in self.parts:
-            for block in part.blocks:
-                if isinstance(block, Line):
-                    found.append(block)
-                elif isinstance(block, Losses):
-                    found += [row.line for row in block.rows if row.line.operands and "K" in dict(row.line.operands)]
-                    found.append(block.total)
-        return found
+        return self.inputs + [line for line in self._lines.values() if line.kind not in ("given", "constant")]
+
+    def line_of(self, value: Value) -> Line:
+        """The line that made ``value``."""
+        return self._lines[value.address]
 
     # --- values
 
@@ -190,7 +107,7 @@ class Ledger:
         identity = ("given", symbol, key or title, quantity.text, quantity.unit.name)
         if identity not in self._made:
             value = Value(self._address(INPUTS), symbol, quantity.number, float(quantity.si()), quantity.unit, title)
-            self.inputs.append(
+            self._register(
                 Line(
                     kind,
                     value,
@@ -318,56 +235,32 @@ class Ledger:
                 element,
                 self.line_of(content)
                 if isinstance(content, Value)
-                else self._line(EQUATION["row_loss" if "n" in content else "row_loss_single"], content, element),
+                else self._register(
+                    self._line(EQUATION["row_loss" if "n" in content else "row_loss_single"], content, element)
+                ),
             )
             for label, element, content in rows
         ]
-        sum_line = self._line(EQUATION[total], {"h": [row.line.value for row in made]}, "")
+        sum_line = self._register(self._line(EQUATION[total], {"h": [row.line.value for row in made]}, ""))
         worked = next(
             (row.label for row, (_, _, content) in zip(made, rows, strict=True) if not isinstance(content, Value)), ""
         )
         self._place(Losses(title, tuple(made), sum_line, worked))
         return sum_line.value
 
-    def line_of(self, value: Value) -> Line:
-        """The line that made ``value``."""
-        return next(line for line in self.lines() if line.value is value)
-
     def headline(self, value: Value) -> tuple[Decimal, Unit]:
         """``value`` in plant units at the decimals usual there."""
         plant, decimals = PLANT[self.system][NOMENCLATURE[value.symbol].kind]
         return headline(in_unit(value, plant), decimals), plant
 
+    def shown(self, value: Value) -> str:
+        """``value`` in plant units, for a sentence."""
+        x, unit = self.headline(value)
+        return f"{x} {unit.name}"
+
 
 #: Range searched for each symbol found as a root: Darcy factors of any pipe lie well inside.
 ROOT_RANGES: Mapping[str, tuple[float, float]] = {"f": (1e-3, 10.0)}
-
-
-def in_unit(value: Value, to: Unit) -> Decimal:
-    """The record of ``value`` in another unit of the same dimension, unrounded."""
-    si = (Fraction(value.record) + value.unit.offset) * value.unit.factor
-    return decimal(si / to.factor - to.offset)
-
-
-def drift(value: Value) -> Decimal:
-    """How far the record is from the shadow, in the plant-size coherent unit of the record (m or ft for a head)."""
-    return abs(value.record - decimal(Fraction(value.shadow) / value.unit.factor - value.unit.offset))
-
-
-def conversion_tree(symbol: str, frm: Unit, to: Unit) -> Node:
-    """The conversion as a formula with exact whole numbers: ``Q * (77 / 34560)``, ``(T + 459.67) * (5 / 9)``."""
-    factor = frm.factor / to.factor
-    text = symbol
-    if frm.offset:
-        text = f"{symbol} + {decimal(frm.offset)}"
-    if factor != 1:
-        inner = f"({text})" if frm.offset else text
-        text = (
-            f"{inner} * {factor.numerator}"
-            if factor.denominator == 1
-            else f"{inner} * ({factor.numerator} / {factor.denominator})"
-        )
-    return formula.parse(text)
 
 
 def _each(x: Value | Sequence[Value]) -> Sequence[Value]:

@@ -80,7 +80,7 @@ def parse(text: str, kind: str) -> Quantity:
     sign, digits = match.groups()
     typed = ("-" if sign in _MINUS else "") + digits if sign and Decimal(digits) else digits
     rest = text[match.end() :].strip(" \t")
-    if rest[:1].isdigit():
+    if rest[:1].isdigit() and rest not in SPELLINGS:
         raise unreadable(text, wanted, kind)
     name, reference = _split_reference(rest, text, wanted)
     if kind in BARE and not rest:

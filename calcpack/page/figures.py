@@ -7,16 +7,19 @@ from __future__ import annotations
 
 from collections.abc import Mapping, Sequence
 from dataclasses import dataclass
+from decimal import Decimal
 from typing import Any
 
+from ..number import rounded
 from .drawing import ACCENT, INK, PALE, SECOND, TINT, Drawing, text_width
 from .numerals import SANS_GAP, numeral
 
 WIDTH = 136.0
-TALLEST = 128.0  # room for the vertical scale, mm
+TALLEST = 122.0  # room for the heads, mm
 SCALES = (5, 10, 20, 25, 40, 50, 80, 100, 150, 200, 250, 400, 500, 800, 1000, 2000)
 MILLIMETRES = {"ft": 304.8, "m": 1000.0}
 LEFT, TANK, PIPE, PUMP, BARS = 13.0, 18.0, 42.0, 79.0, 94.0
+HEIGHTS = ("static head", "gauge height")  # drawn first, so that they end at the height they mean
 LOSSES = ("losses", "vapour pressure")
 
 
@@ -41,14 +44,14 @@ class Scale:
 
 
 def _number(value: str, signed: bool = False) -> str:
-    n = numeral(value)
+    n = numeral(str(rounded(Decimal(value), 3)) if len(value.partition(".")[2]) > 3 else value)
     return ("+" if signed and not n.negative else "") + n.text(SANS_GAP)
 
 
 def _steps(sketch: Mapping[str, Any]) -> list[tuple[str, str, float, float]]:
     """Name, value, start and end of each head, one standing on the other above the pump's datum."""
     at, out = float(sketch["pump"]["elevation"]), []
-    for head in sketch["heads"]:
+    for head in sorted(sketch["heads"], key=lambda h: h["name"] not in HEIGHTS):
         end = at + float(head["value"])
         out.append((head["name"], head["value"], at, end))
         at = end
@@ -63,7 +66,7 @@ def _scale(sketch: Mapping[str, Any]) -> Scale:
     points += [base + float(sketch[k]) for k in ("available", "limit") if sketch[k]]
     unit = sketch["unit"]
     span = (max(points) - min(points)) * MILLIMETRES[unit]
-    ratio = next((s for s in SCALES if span / s <= TALLEST - 16.0), SCALES[-1])
+    ratio = next((s for s in SCALES if span / s <= TALLEST), SCALES[-1])
     below = 9.0 * ratio / MILLIMETRES[unit]
     return Scale(ratio, unit, max(points) + below * 0.25, min(points) - below)
 
@@ -203,7 +206,7 @@ def _heads(d: Drawing, scale: Scale, sketch: Mapping[str, Any]) -> None:
     wide = min(6.0, pitch - 0.8)
     for i, (name, value, start, end) in enumerate(steps):
         x, top, tall = BARS + pitch * i, scale.y(max(start, end)), abs(scale.y(start) - scale.y(end))
-        d.area(x, top, wide, tall, PALE if name == "level" else "#FFFFFF", 0.2)
+        d.area(x, top, wide, tall, PALE if name in HEIGHTS else "#FFFFFF", 0.2)
         if name in LOSSES:
             d.hatch(x, top, wide, tall, 0.9 if name == "vapour pressure" else 1.4, name == "losses")
         if i + 1 < len(steps) or ends:
@@ -225,7 +228,7 @@ def _bar_label(d: Drawing, x: float, top: float, tall: float, words: str, scale:
     length = text_width(words, bold)
     if tall > length + 3 and not hatched:
         d.label(x + 0.95, top + tall / 2, words, "middle", bold, upright=True)
-    elif hatched and top + tall + length + 2 < scale.bottom:
+    elif top + tall + length + 2 < scale.bottom:
         d.label(x + 0.95, top + tall + 1.2, words, "end", bold, upright=True)
     else:
         d.label(x + 0.95, top - 1.2, words, "start", bold, upright=True)

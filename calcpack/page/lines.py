@@ -25,6 +25,7 @@ RESULT_WIDTH, RESULT_EDGE = 27.0, 9.4  # result column, and where its decimal po
 VALUE_ROOM = 19.0  # operand's value and unit beside its address (mm)
 SYMBOL_ROOM = 7.5
 HEADLINE, RECORD, OPERAND = 10.5, 7.8, 8.0
+LONG_FACTOR = 17  # characters; a longer factor stands in the formula beside it and in the list of conversions
 _FUNCTION = re.compile(r"(\w+)\((\w+(?:, ?\w+)*)\)")
 _ROOT_LABELS = ("f − ½ unit", "root f", "f + ½ unit")
 
@@ -88,6 +89,11 @@ def _function(line: Mapping[str, Any], names: Mapping[str, Display]) -> Setting 
     return layout.picture([*parts, boxes.text(")", REGULAR, SIZE)], f"{line['symbol']} = {line['function']}")
 
 
+def _entry(line: Mapping[str, Any], context: Context) -> Markup:
+    """A number read from a table: its symbol and the place in the table."""
+    return Markup('<div>{} <span class="s">from {}</span></div>').format(text.symbol(context.names[line["symbol"]]), line.get("function", ""))
+
+
 def operand(o: Mapping[str, str], context: Context) -> dict[str, Any]:
     """One row of the column 'rests on'."""
     shown, name = context.names[o["symbol"]], text.unit(o["unit"])
@@ -127,13 +133,11 @@ def sources(line: Mapping[str, Any], context: Context) -> list[Markup]:
     rows: list[Markup] = []
     if line["kind"] == "conversion":
         row = context.factors.get((line["from"], line["to"]), "")
-        rows.append(Markup("{} exact{}").format(fraction(line["factor"]), Markup(', <a href="#{}">{}</a>').format(row, row) if row else ""))
-        return rows
+        short = line["factor"] != "1" and len(line["factor"]) < LONG_FACTOR
+        factor = fraction(line["factor"]) + " " if short else "factor "
+        rows.append(Markup("{}exact{}").format(factor, Markup(', <a href="#{}">{}</a>').format(row, row) if row else ""))
     if line["kind"] == "lookup":
-        parts = (line.get("library", ""), line.get("formulation", ""))
-        rows.append(Markup.escape("; ".join(p for p in parts if p)))
-        if not _FUNCTION.fullmatch(line["function"]):
-            rows.append(Markup.escape(line["function"]))
+        rows.append(Markup.escape(line["library"]))
     return [r for r in (*rows, Markup.escape(line["source"]), Markup.escape(line["note"])) if r]
 
 
@@ -157,7 +161,7 @@ def view(line: Mapping[str, Any], context: Context) -> dict[str, Any]:
     setting = formula_picture(line, context.names)
     return {
         "address": line["address"], "kind": line["kind"], "title": line["title"],
-        "picture": picture(setting) if setting else text.symbol(context.names[line["symbol"]]),
+        "picture": picture(setting) if setting else _entry(line, context),
         "operands": [operand(o, context) for o in line["operands"]],
         "sources": sources(line, context), "result": result(line), "residuals": residuals(line),
     }

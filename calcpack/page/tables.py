@@ -5,14 +5,18 @@ from __future__ import annotations
 from collections.abc import Mapping
 from typing import Any
 
+from markupsafe import Markup
+
 from .. import formula
 from . import glyphs, layout, metrics, text
 from .lines import POINT, Context, picture, result, values
 from .numerals import numeral
 
 STATUS_WORDS = {"verified": "verified", "maker": "maker’s, unconfirmed", "preliminary": "preliminary", "assumed": "assumed"}
+#: A row of this form stands in the table alone; any other is a line printed in full above it.
+ROW_FORMULAS = ("n * K * h_V", "K * h_V")
 VERDICTS = ("met", "not met", "not applicable", "not assessed")
-POINT_EDGE = 11.0  # decimal points in the columns 'as given' and 'as used' of the inputs (mm)
+POINT_EDGE = 9.0  # decimal points in the columns 'as given' and 'as used' of the inputs (mm)
 
 
 def _aligned(value: str) -> str:
@@ -35,18 +39,24 @@ def input_row(line: Mapping[str, Any], context: Context) -> dict[str, Any]:
     number, words = _split(line["given"])
     unit, _, reference = words.partition(" ")
     status = p.get("status", "") if line["kind"] == "given" else "constant"
-    source = " ".join(x for x in (p.get("source", ""), p.get("place", "")) if x)
-    if line["kind"] == "constant":
-        source = line["source"]
     return {
         "address": line["address"], "symbol": text.symbol(context.names[line["symbol"]]), "title": line["title"],
-        "source": source, "note": "; ".join(x for x in (p.get("note", ""), line["note"]) if x), "confirm": p.get("confirm", ""),
+        "source": _origin(line),
         "number": text.number(number) if number else "", "unit": unit if number else "", "words": reference if number else words,
         "indent": _aligned(number) if number else "0",
         "used": text.number(used["value"]), "used_unit": text.unit(used["unit"]), "used_indent": _aligned(used["value"]),
         "link": context.link(used["address"]) if used["address"] != line["address"] else "",
         "mark": glyphs.status(status) if status != "constant" else "", "status": STATUS_WORDS.get(status, status or "not stated"),
     }
+
+
+def _origin(line: Mapping[str, Any]) -> str:
+    """Source with its place, note, and who confirms, in one run of words."""
+    p = line.get("provenance") or {}
+    cited = f"[{p['source']}] {p['place']}".strip() if p.get("source") else ""
+    first = line["source"] if line["kind"] == "constant" else cited or "no source"
+    confirm = f"to be confirmed: {p['confirm']}" if p.get("confirm") else ""
+    return "; ".join(x for x in (first, p.get("note", ""), line["note"], confirm) if x)
 
 
 def losses(table: Mapping[str, Any], context: Context) -> dict[str, Any]:
@@ -67,7 +77,8 @@ def _cells(line: Mapping[str, Any], context: Context) -> dict[str, Any]:
 def _loss_row(row: Mapping[str, Any], context: Context) -> dict[str, Any]:
     line = row["line"]
     operands = {o["symbol"]: (text.number(o["value"]), context.link(o["address"])) for o in line["operands"]}
-    inside = line["formula"] == "n * K * h_V"
+    inside = line["formula"] in ROW_FORMULAS
+    operands.setdefault("n", (Markup("1"), Markup("")))
     return {
         "row": row["row"], "element": row["element"], "inside": inside, "address": line["address"], "source": line["source"],
         "factors": [operands[s] for s in ("n", "K", "h_V")] if inside else [], **_cells(line, context),
@@ -117,7 +128,7 @@ def rule(r: Mapping[str, Any], context: Context) -> dict[str, Any]:
         inequality = picture(layout.line(None, formula.parse(r["formula"]), record, context.names, measure=60 * POINT))
     return {
         "address": r["address"], "title": r["title"], "verdict": r["verdict"], "glyph": glyphs.verdict(r["verdict"]),
-        "word": capital(r["verdict"]), "reason": r["reason"], "criterion": r["criterion"], "source": r["source"], "sides": sides,
+        "word": capital(r["verdict"]), "about": r["about"], "reason": r["reason"], "criterion": r["criterion"], "source": r["source"], "sides": sides,
         "relation": r["relation"], "inequality": inequality,
         "margin": signed(margin["headline"]["text"], margin["headline"]["unit"]) if margin else "",
         "percent": signed(margin["percent"], "%") if margin and margin["percent"] else "",

@@ -28,6 +28,7 @@ def context(record: Mapping[str, Any]) -> dict[str, Any]:
         "r": r, "c": r["calculation"], "sections": SECTIONS, "link": shared.link, "check": glyphs.check(),
         "page": {"size": paper[0], "left": paper[1], "right": paper[2], "paper": r["calculation"]["paper"]},
         "cover": _cover(r, shared), "inputs": [tables.input_row(line, shared) for line in r["inputs"]],
+        "unused": [{**u, "given": text.given(u["given"])} for u in r["unused"]],
         "parts": [_part(p, shared) for p in r["computation"]],
         "rules": [tables.rule(rule, shared) for rule in r["checks"]],
         "verdicts": [(glyphs.verdict(word), word) for word in tables.VERDICTS],
@@ -37,7 +38,7 @@ def context(record: Mapping[str, Any]) -> dict[str, Any]:
         "rounding": [_rounding(row, shared) for row in r["rounding"]],
         "conversions": [{**row, "id": f"C{i}", "factor": fraction(row["factor"])} for i, row in enumerate(r["conversions"], 1)],
         "nomenclature": [{**n, "symbol": text.symbol(shared.names[n["name"]]), "unit": text.unit(n["unit"]) or "–"} for n in r["nomenclature"]],
-        "listing": listing(r["input_file"]["text"]), "fingerprint": fours(r["fingerprint"]), "input_fingerprint": fours(r["input_file"]["sha256"]),
+        "strip_title": cut(r["calculation"]["title"], 57 / 25.4 * 72, 8.5), "listing": listing(r["input_file"]["text"]), "fingerprint": fours(r["fingerprint"]), "input_fingerprint": fours(r["input_file"]["sha256"]),
     }
 
 
@@ -113,12 +114,25 @@ def listing(source: str) -> str:
 
 
 def _wrapped(body: str, room: float) -> list[str]:
-    rows, pen = [""], 0.0
+    """Rows no wider than ``room``, broken after a space where there is one in the last third."""
+    rows, row, pen = [], "", 0.0
     for character in body:
         advance = metrics.width(metrics.SANS_REGULAR, LISTING_SIZE, character)
         if pen + advance > max(room, 60.0):
-            rows.append("")
-            pen = 0.0
-        rows[-1] += character
+            at = row.rfind(" ") + 1
+            at = at if at > 2 * len(row) // 3 else len(row)
+            rows.append(row[:at])
+            row = row[at:]
+            pen = metrics.width(metrics.SANS_REGULAR, LISTING_SIZE, row)
+        row += character
         pen += advance
-    return rows
+    return [*rows, row]
+
+
+def cut(words: str, room: float, size: float) -> str:
+    """``words`` shortened to ``room`` points, with an ellipsis where something is left out."""
+    if metrics.width(metrics.SANS_REGULAR, size, words) <= room:
+        return words
+    while words and metrics.width(metrics.SANS_REGULAR, size, words + "…") > room:
+        words = words[:-1]
+    return words.rstrip() + "…"

@@ -18,7 +18,8 @@ SCALES = (1.0, 0.7, 0.55)
 AXIS = 0.328  # height of a fraction's bar over its baseline (em)
 LEVEL = 0.06  # how far two baselines may lie apart and still be one (em)
 DIGIT_GAP = 0.25  # widest gap inside a number (em)
-TIGHT = 0.07  # widest gap before the × of a power of ten, and inside a name (em)
+TIGHT = 0.07  # widest gap before the × of a power of ten (em)
+NAME_GAP = 0.01  # widest gap inside a name (em): an italic f leans over all of a thin gap but 0.02
 NAMES = {"ln", "exp", "max", "min", "log"}
 
 
@@ -55,12 +56,9 @@ class Marks:
 Item = Glyph | Fraction | Root
 
 
-def read(marks: Marks, body: float, depth: int = 0, numeric: bool = False) -> Tree:
-    """The tree that ``marks`` print, at ``depth`` raisings under ``body`` size.
-
-    ``numeric`` says that every product shows its sign.  Raises :class:`Unread`.
-    """
-    return _read(items(marks), body, depth, numeric)
+def read(marks: Marks, body: float, depth: int = 0) -> Tree:
+    """The tree that ``marks`` print, at ``depth`` raisings under ``body`` size.  Raises :class:`Unread`."""
+    return _read(items(marks), body, depth)
 
 
 def items(marks: Marks) -> list[Item]:
@@ -126,17 +124,17 @@ class Token:
     name: str = ""
 
 
-def _read(parts: Sequence[Item], body: float, depth: int, numeric: bool) -> Tree:
+def _read(parts: Sequence[Item], body: float, depth: int) -> Tree:
     if not parts:
         raise Unread("nothing printed where a term belongs")
-    return Parser(_Row(parts, body, depth, numeric).tokens(), numeric).whole()
+    return Parser(_Row(parts, body, depth).tokens()).whole()
 
 
 class _Row:
     """One row of items at one depth, cut into tokens."""
 
-    def __init__(self, parts: Sequence[Item], body: float, depth: int, numeric: bool) -> None:
-        self.parts, self.body, self.depth, self.numeric = parts, body, depth, numeric
+    def __init__(self, parts: Sequence[Item], body: float, depth: int) -> None:
+        self.parts, self.body, self.depth = parts, body, depth
         self.size = body * SCALES[min(depth, 2)]
         self.y = baseline(parts, self.size)
         self.at = 0
@@ -176,7 +174,7 @@ class _Row:
 
     def token(self) -> Token:
         if self.peek(1) is not None:
-            return Token("power", _read(self.taken(1), self.body, self.depth + 1, self.numeric))
+            return Token("power", _read(self.taken(1), self.body, self.depth + 1))
         item = self.peek()
         if item is None:
             raise Unread("a lowered mark without a symbol before it")
@@ -186,10 +184,10 @@ class _Row:
             return self.word()
         self.at += 1
         if isinstance(item, Fraction):
-            over = read(item.over, self.body, self.depth, self.numeric)
-            return Token("tree", Op("/", (over, read(item.under, self.body, self.depth, self.numeric))))
+            over = read(item.over, self.body, self.depth)
+            return Token("tree", Op("/", (over, read(item.under, self.body, self.depth))))
         if isinstance(item, Root):
-            return Token("tree", Op("sqrt", (read(item.inside, self.body, self.depth, self.numeric),)))
+            return Token("tree", Op("sqrt", (read(item.inside, self.body, self.depth),)))
         if item.char not in "+−×(),":
             raise Unread(f"the sign {item.char!r} is outside the notation")
         return Token(item.char)
@@ -225,7 +223,7 @@ class _Row:
     def word(self) -> Token:
         """A symbol with its subscript, or the name of a function before its bracket."""
         letters: list[Glyph] = []
-        while (g := self.glyph()) and g.char.isalpha() and (not letters or g.x - letters[-1].end < TIGHT * self.size):
+        while (g := self.glyph()) and g.char.isalpha() and (not letters or g.x - letters[-1].end < NAME_GAP * self.size):
             letters.append(g)
             self.at += 1
         base = "".join(g.char for g in letters)
@@ -250,10 +248,13 @@ def decimal(digits: str) -> Decimal:
 
 
 class Parser:
-    """Tokens to a tree: products bind closer than sums, powers closer than products, all from the left."""
+    """Tokens to a tree: products bind closer than sums, powers closer than products, all from the left.
 
-    def __init__(self, tokens: Sequence[Token], numeric: bool) -> None:
-        self.tokens, self.numeric, self.at = tokens, numeric, 0
+    Two factors side by side are a product, unless the second is a number: numbers always show their sign.
+    """
+
+    def __init__(self, tokens: Sequence[Token]) -> None:
+        self.tokens, self.at = tokens, 0
 
     @property
     def next(self) -> str:
@@ -287,8 +288,6 @@ class Parser:
         while self.next == "×" or self.next in ("symbol", "function", "tree", "sum", "("):
             if self.next == "×":
                 self.take()
-            elif self.numeric:
-                raise Unread("two factors without a sign between them")
             tree = Op("*", (tree, self.power()))
         return tree
 

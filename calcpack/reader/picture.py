@@ -7,7 +7,7 @@ from dataclasses import dataclass
 
 from .glyphs import Bar, Glyph
 from .notation import Marks, Root, Unread, baseline, items, read
-from .tree import Symbol, Tree, symbols
+from .tree import Tree
 
 RELATIONS = "=≥≤><"
 #: Clear space that separates two rows, less what the ink of a curved glyph takes of it (points).
@@ -107,11 +107,7 @@ def _form(part: _Part, body: float) -> Form:
     for row in part.rows:
         right = _joined(right, row, part.sign.y, body)
     left = read(part.left, body) if part.left.glyphs else None
-    numeric = left is None or not isinstance(left, Symbol)
-    tree = read(right, body)
-    if numeric and not any(symbols(tree)):
-        tree = read(right, body, numeric=True)
-    return Form(left, part.sign.char, tree)
+    return Form(left, part.sign.char, read(right, body))
 
 
 def _joined(before: Marks, row: Marks, y: float, body: float) -> Marks:

@@ -9,12 +9,12 @@ from collections import Counter
 from collections.abc import Iterator
 
 from .. import __version__, formula
-from ..ledger import Value, drift
 from ..lookup import library
 from ..rules import LARGEST_DRIFT
 from ..source.inputs import Given
 from ..study import Study
 from ..symbols import NOMENCLATURE
+from ..value import Value, drift
 from . import words
 from .cover import checks, cover
 from .lines import Json, References, conversions, line, number, part, short

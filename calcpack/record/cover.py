@@ -6,12 +6,13 @@ from collections import Counter
 from decimal import Decimal
 
 from .. import formula
-from ..ledger import Ledger, Value, drift, in_unit
+from ..ledger import Ledger
 from ..number import rounded
 from ..quantity import PLANT
 from ..rules import LARGEST_DRIFT, REPORTED_DECIMALS, Check
 from ..study import Study
 from ..symbols import NOMENCLATURE
+from ..value import Value, drift, in_unit
 from .lines import Json, References, number, value
 
 _RELATION = {">=": "≥", "<=": "≤", ">": ">", "<": "<", "==": "="}
@@ -138,4 +139,5 @@ def _rounding(study: Study) -> str:
     if not sides:
         return ""
     worst = max(sides, key=drift)
-    return f"largest effect of line rounding on a result: {drift(worst):.1E} {worst.unit.name} (line {worst.address}); limit {LARGEST_DRIFT} {worst.unit.name}"
+    unit = worst.unit.name
+    return f"largest effect of line rounding on a result: {drift(worst):.6f} {unit} (line {worst.address}); limit {LARGEST_DRIFT} {unit}"

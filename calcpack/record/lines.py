@@ -6,9 +6,11 @@ from decimal import Decimal
 from typing import Any
 
 from .. import formula
-from ..ledger import Ledger, Line, Losses, Part, Value, conversion_tree
+from ..conversion import conversion_tree, factor_text
+from ..ledger import Ledger
 from ..number import DIGITS
 from ..references import REFERENCES, Cite
+from ..value import Line, Losses, Part, Value
 
 Json = dict[str, Any]
 
@@ -93,7 +95,7 @@ def line(ledger: Ledger, of: Line, references: References) -> Json:
     if of.kind == "conversion":
         before = of.operands[0][1].unit
         factor = before.factor / v.unit.factor
-        found |= {"from": before.name, "to": v.unit.name, "factor": str(factor), "source": before.source}
+        found |= {"from": before.name, "to": v.unit.name, "factor": factor_text(factor), "source": before.source}
     if of.kind == "lookup":
         found |= {"function": of.function, "library": of.library}
     if of.kind == "root":
@@ -126,7 +128,7 @@ def conversions(lines: list[Line]) -> list[Json]:
         if of.kind == "conversion":
             before, after = of.operands[0][1].unit, of.value.unit
             seen.setdefault((before.name, after.name), {
-                "from": before.name, "to": after.name, "factor": str(before.factor / after.factor),
+                "from": before.name, "to": after.name, "factor": factor_text(before.factor / after.factor),
                 "formula": formula.text(conversion_tree("x", before, after)), "source": before.source,
             })  # fmt: skip
     return list(seen.values())

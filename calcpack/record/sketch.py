@@ -2,11 +2,11 @@
 
 from __future__ import annotations
 
-from ..ledger import Line, Value
 from ..number import decimal, rounded
 from ..quantity import Unit
 from ..source.inputs import Given
 from ..study import Study
+from ..value import Line, Value
 from .lines import Json, number
 
 

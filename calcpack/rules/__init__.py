@@ -9,10 +9,10 @@ from typing import Literal
 from .. import formula
 from ..arithmetic import InDecimal, InFloat, evaluate
 from ..formula import Bin, Cmp, FormulaError
-from ..ledger import Value, drift
 from ..number import of_record
 from ..references import Cite
 from ..symbols import DIMENSIONS, NOMENCLATURE
+from ..value import Value, drift
 
 Verdict = Literal["met", "not met", "not applicable", "not assessed"]
 #: The verdicts that let a package pass.

@@ -2,8 +2,8 @@
 
 from __future__ import annotations
 
-from ..ledger import Value
 from ..references import Cite
+from ..value import Value
 from . import Check, Rule, compare, without_numbers
 
 SUBMERGENCE = Rule("submergence", "Submergence against surface vortices", "S >= S_m", Cite("hi98"))

@@ -2,8 +2,8 @@
 
 from __future__ import annotations
 
-from ..ledger import Value
 from ..references import PRACTICE
+from ..value import Value
 from . import Check, Rule, compare, without_numbers
 
 HIGHEST_TEMPERATURE = Rule("highest_temperature", "Highest temperature expected was used", "T >= T_h", PRACTICE)

@@ -1,8 +1,8 @@
 """From bytes to a tree of text: YAML without its surprises.
 
 Only mappings, lists and text pass.  What YAML would quietly turn into something else (``12:30`` into 750,
-``010`` into 8, ``on`` into true) is refused unless quoted.  Anchors, aliases, tags, merge keys and repeated keys
-are refused.
+``010`` into 8, ``on`` into true) is refused unless quoted.  Anchors, aliases, tags, merge keys and repeated
+keys are refused.
 """
 
 from __future__ import annotations
@@ -174,9 +174,10 @@ class _Builder:
         mark = (at.line + 1, at.column + 1) if at else (1, 1)
         problem = error.problem or "it cannot be read"
         hints = {
-            "mapping values are not allowed": "put a value that holds a colon and a space in quotation marks, "
+            "mapping values are not allowed": "put a value with a colon and a space in quotation marks, "
             "and indent the keys of one mapping alike",
             r"'\t'": "indent with spaces, not with tabs",
+            "tab character": "indent with spaces, not with tabs",
             "cannot start any token": "put the value in quotation marks",
             "',' or '}'": "close the braces, with a comma between the entries",
             "',' or ']'": "close the brackets, with a comma between the items",
@@ -215,13 +216,18 @@ def _oddity(event: Any) -> str:
         return f"the alias *{event.anchor}"
     if event.anchor:
         return f"the anchor &{event.anchor}"
-    return f"the tag {event.tag}" if getattr(event, "tag", None) else ""
+    tag = getattr(event, "tag", None)
+    return f"the tag {tag.replace('tag:yaml.org,2002:', '!!')}" if tag else ""
 
 
 def _notation(root: Mapping, name: str) -> Iterator[Fault]:
     """Notation that is YAML and that we refuse."""
+    told: set[str] = set()
     for key, node in walk(root):
+        if node.oddity in told:
+            continue
         if node.oddity:
+            told.add(node.oddity)
             hint = "write the value out where it stands"
             yield Fault(name, *node.mark, key, "plain text", shown(node.oddity), hint, "notation")
         elif isinstance(node, Scalar):

@@ -244,7 +244,7 @@ class Reading:
 class Calculation:
     """A whole input file.
 
-    ``line`` with ``supply.level`` gives the design route, ``readings`` the measured one; one at least is there.
+    ``line`` with ``supply.level`` gives the design route, ``readings`` the measured one, and one is there.
     ``path`` is the file's name without its folder, ``raw`` its bytes, ``sha256`` their digest in hexadecimal.
     """
 

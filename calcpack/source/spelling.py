@@ -30,7 +30,9 @@ def _correct(node: Node, part: Schema, key: str, file: str, faults: list[Fault])
         return node
     entries = []
     for name, value in node.entries:
-        if name.text != "<<" and "properties" in part and name.text not in allowed(node, part):
+        if name.text == "<<":
+            continue  # reported as notation
+        if "properties" in part and name.text not in allowed(node, part):
             meant = _meant(name.text, node, part)
             faults.append(_fault(name, meant, node, part, key, file))
             if not meant:

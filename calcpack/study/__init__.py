@@ -4,10 +4,11 @@ from __future__ import annotations
 
 from dataclasses import dataclass
 
-from ..ledger import Ledger, Value
+from ..ledger import Ledger
 from ..lookup import CONSTANTS
 from ..rules import Check, margin, submergence, temperature
 from ..source.inputs import Calculation, Provenance
+from ..value import Value
 from . import need, npsh
 from .entry import Entry
 from .npsh import Available
@@ -111,8 +112,7 @@ def _temperature(entry: Entry, judged: list[Available], worst: State) -> Check:
     if highest is None or used.record < highest.record:
         lost = need.cost_of_temperature(entry, worst)
         if lost is not None:
-            x, unit = entry.ledger.headline(lost)
-            cost = f"Each {CONSTANTS['dT'].text} warmer would take {x} {unit.name} from NPSH available (line {lost.address})"
+            cost = f"Each {CONSTANTS['dT'].text} warmer would take {entry.ledger.shown(lost)} from NPSH available (line {lost.address})"
     return temperature.check(used, highest, given_as=extreme, cost=cost, source=_cited(given))
 
 

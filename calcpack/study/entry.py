@@ -6,11 +6,12 @@ from collections.abc import Callable
 from typing import NoReturn, Protocol
 
 from ..faults import Fault, InputFault
-from ..ledger import Ledger, Provenance, Value
+from ..ledger import Ledger
 from ..lookup import OutOfRange
 from ..quantity import parse
 from ..source.inputs import Calculation, Element, Given
 from ..source.inputs import Provenance as Origin
+from ..value import Provenance, Value
 
 
 class Place(Protocol):

@@ -7,11 +7,11 @@ from dataclasses import dataclass
 
 from .. import lookup
 from ..fitting_set import SET_NAMES, SETS, coefficient
-from ..ledger import Value
 from ..lookup import OutOfRange
 from ..quantity import parse
 from ..references import Cite
 from ..source.inputs import Element, Pipe, Section
+from ..value import Value
 from .entry import Entry, Place
 from .liquid import Liquid, viscosity
 from .state import State

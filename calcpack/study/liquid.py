@@ -4,8 +4,8 @@ from __future__ import annotations
 
 from dataclasses import dataclass
 
-from ..ledger import Value
 from ..source.inputs import Given
+from ..value import Value
 from .entry import Entry
 from .state import State, warmest
 

@@ -4,8 +4,8 @@ from __future__ import annotations
 
 from dataclasses import dataclass
 
-from ..ledger import Value
 from ..source.inputs import Intake
+from ..value import Value
 from .entry import Entry
 from .liquid import temperature_of
 from .npsh import Available

@@ -4,8 +4,8 @@ from __future__ import annotations
 
 from dataclasses import dataclass
 
-from ..ledger import Value
 from ..source.inputs import Reading
+from ..value import Value
 from .entry import Entry
 from .line import bore_of, flow_in, losses
 from .liquid import Liquid, at
@@ -58,7 +58,7 @@ def surface(entry: Entry, state: State) -> Surface:
         entry.refuse(
             state.pressure or state.temperature,
             "a surface pressure above the vapour pressure",
-            f"{p_s.record} {p_s.unit.name} on the surface, {liquid.vapour_pressure.record} {p_s.unit.name} vapour pressure "
+            f"{ledger.shown(p_s)} absolute on the surface and {ledger.shown(liquid.vapour_pressure)} vapour pressure "
             f"at {state.temperature.text}: the liquid boils at the surface",
             "check the temperature, and whether the pressure is gauge or absolute",
         )

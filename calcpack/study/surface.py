@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from ..ledger import Value
+from ..value import Value
 from .entry import Entry
 from .state import State
 
