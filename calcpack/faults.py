@@ -36,7 +36,8 @@ class InputFault(Exception):
 def format_fault(fault: Fault) -> str:
     """The fault in one line: ``file:line:column: key: wanted …; found …. Suggestion: …``."""
     place = fault.file if fault.line == 0 else f"{fault.file}:{fault.line}:{fault.column}"
-    parts = [place, fault.key, f"wanted {fault.wanted}; found {fault.found}."]
+    key = "".join(c if c.isprintable() else " " for c in fault.key[:120])
+    parts = [place, key, f"wanted {fault.wanted}; found {fault.found}."]
     text = ": ".join(part for part in parts if part)
     end = "" if fault.suggestion.endswith("?") else "."
     return f"{text} Suggestion: {fault.suggestion}{end}" if fault.suggestion else text
@@ -44,6 +45,8 @@ def format_fault(fault: Fault) -> str:
 
 def nearest(word: str, choices: Iterable[str]) -> str:
     """The choice most like ``word``, or an empty text; the same letters in another case come first."""
+    if len(word) > 40:
+        return ""
     known = list(choices)
     folded = {choice.casefold(): choice for choice in reversed(known)}
     if word.casefold() in folded:

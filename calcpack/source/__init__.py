@@ -12,14 +12,11 @@ from .document import parse, read_bytes
 from .inputs import Calculation
 from .plant import check_plant
 from .schema import quantities
-from .spelling import correct
+from .spelling import MAX_FAULTS, correct
 from .validate import validate
 from .view import View
 
-__all__ = ["Calculation", "load", "loads"]
-
-#: More faults than this are counted, not shown.
-MAX_FAULTS = 100
+__all__ = ["MAX_FAULTS", "Calculation", "load", "loads"]
 
 
 def load(path: str | Path) -> Calculation:

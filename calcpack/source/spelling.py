@@ -5,9 +5,12 @@ Reading on under the corrected key keeps one slip from being two faults (``flwo`
 
 from __future__ import annotations
 
-from ..faults import Fault, listed, nearest
+from ..faults import Fault, listed, nearest, shown
 from .nodes import Mapping, Node, Scalar, Sequence, below, label
 from .schema import PROVENANCE, Schema, allowed, below_key, definition, own_kind, schema
+
+#: More faults than this are counted, not shown, and no longer guessed at.
+MAX_FAULTS = 100
 
 
 def correct(root: Mapping, file: str) -> tuple[Mapping, list[Fault]]:
@@ -29,11 +32,12 @@ def _correct(node: Node, part: Schema, key: str, file: str, faults: list[Fault])
     if not isinstance(node, Mapping) or "properties" not in part and "additionalProperties" not in part:
         return node
     entries = []
+    known = frozenset(allowed(node, part))
     for name, value in node.entries:
         if name.text == "<<":
             continue  # reported as notation
-        if "properties" in part and name.text not in allowed(node, part):
-            meant = _meant(name.text, node, part)
+        if "properties" in part and name.text not in known:
+            meant = _meant(name.text, node, part) if len(faults) < MAX_FAULTS else ""
             faults.append(_fault(name, meant, node, part, key, file))
             if not meant:
                 continue
@@ -56,7 +60,7 @@ def _fault(name: Scalar, meant: str, node: Mapping, part: Schema, key: str, file
     scope = f" for kind {kind}" if kind else ""
     plain = [each for each in allowed(node, part) if each not in PROVENANCE]
     wanted = f"the key `{meant}`" if meant else f"one of the keys {listed(plain)}{scope}"
-    found = f"`{name.text[:60]}`, which is no key here"
+    found = f"{shown(name.text)}, which is no key here"
     hint = (
         f"write `{meant}`"
         if meant
