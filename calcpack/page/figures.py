@@ -14,7 +14,7 @@ from ..number import rounded
 from .drawing import ACCENT, INK, PALE, SECOND, TINT, Drawing, text_width
 from .numerals import SANS_GAP, numeral
 
-WIDTH = 136.0
+WIDTH = 132.0
 TALLEST = 122.0  # room for the heads, mm
 SCALES = (5, 10, 20, 25, 40, 50, 80, 100, 150, 200, 250, 400, 500, 800, 1000, 2000)
 MILLIMETRES = {"ft": 304.8, "m": 1000.0}
@@ -122,7 +122,7 @@ def _supply(d: Drawing, scale: Scale, sketch: Mapping[str, Any]) -> None:
     for level, at in zip(levels, heights, strict=True):
         y, low = scale.y(float(level["value"])), level is levels[-1]
         d.between(TANK, y, right, y, 0.3 if low else 0.15, ACCENT if low else SECOND, "" if low else "1.2 0.8")
-        d.label(right + 1.2, at + 0.9, f"{level['name']} {_number(level['value'], signed=True)}", bold=low, colour=INK if low else SECOND)
+        d.label(right + 1.2, at + 0.9, f"{level['name'].rpartition(', ')[2]} {_number(level['value'], signed=True)}", bold=low, colour=INK if low else SECOND)
         if low:
             x = TANK + 4
             d.line(f"M{x - 1.2} {y - 2.1:.2f}H{x + 1.2}L{x} {y:.2f}Z", 0.2)
@@ -172,7 +172,7 @@ def _pipe(d: Drawing, scale: Scale, sketch: Mapping[str, Any]) -> None:
         d.between(x, end - half if y < end else end + half, x, y, 0.2)
         d.circle(x, y, 1.9, 0.3, "#FFFFFF")
         d.label(x, y + 0.9, "G", "middle", size=2.5)
-        d.label(x + 2.6, y - 1.2, _number(gauge["elevation"], signed=True), colour=SECOND)
+        d.label(PUMP, end + 9.6, f"gauge {_number(gauge['elevation'], signed=True)}", "middle", colour=SECOND)
 
 
 def _element(d: Drawing, kind: str, x: float, y: float, half: float) -> None:

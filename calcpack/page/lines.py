@@ -22,10 +22,9 @@ from .typeset import SIZE, Display, Setter
 
 POINT = 72 / 25.4  # points in a millimetre
 RESULT_WIDTH, RESULT_EDGE = 27.0, 9.4  # result column, and where its decimal points stand (mm)
-VALUE_ROOM = 19.0  # operand's value and unit beside its address (mm)
-SYMBOL_ROOM = 7.5
-HEADLINE, RECORD, OPERAND = 10.5, 7.8, 8.0
-LONG_FACTOR = 17  # characters; a longer factor stands in the formula beside it and in the list of conversions
+VALUE_ROOM = 19.7  # operand's value and unit beside its address (mm)
+SYMBOL_ROOM = 6.6
+HEADLINE, RECORD, OPERAND = 10.5, 7.8, 7.8
 _FUNCTION = re.compile(r"(\w+)\((\w+(?:, ?\w+)*)\)")
 _ROOT_LABELS = ("f − ½ unit", "root f", "f + ½ unit")
 
@@ -75,10 +74,9 @@ def formula_picture(line: Mapping[str, Any], names: Mapping[str, Display]) -> Se
 
 
 def _function(line: Mapping[str, Any], names: Mapping[str, Display]) -> Setting | None:
-    matched = _FUNCTION.fullmatch(line["function"])
-    setter = Setter(names)
-    if not matched or line["symbol"] not in names:
-        return None
+    matched, setter = _FUNCTION.fullmatch(line["function"]), Setter(names)
+    if not matched:
+        return _entry(line, setter)
     name, _, sub = matched[1].partition("_")
     base = names[name].base if name in names else name
     head = Setter({"": Display(base, sub or (names[name].sub if name in names else ""), len(base) > 2)}).symbol("")
@@ -89,9 +87,12 @@ def _function(line: Mapping[str, Any], names: Mapping[str, Display]) -> Setting 
     return layout.picture([*parts, boxes.text(")", REGULAR, SIZE)], f"{line['symbol']} = {line['function']}")
 
 
-def _entry(line: Mapping[str, Any], context: Context) -> Markup:
-    """A number read from a table: its symbol and the place in the table."""
-    return Markup('<div>{} <span class="s">from {}</span></div>').format(text.symbol(context.names[line["symbol"]]), line.get("function", ""))
+def _entry(line: Mapping[str, Any], setter: Setter) -> Setting:
+    """A number that stands in a table: symbol = value."""
+    unit = text.unit(line["unit"])
+    parts = [setter.symbol(line["symbol"]), setter.relation("=="), setter.tree(formula.Num(line["value"]))]
+    parts += [boxes.gap(0.25 * SIZE), boxes.text(unit, REGULAR, SIZE)] if unit else []
+    return layout.picture(parts, f"{line['symbol']} = {line['value']} {unit}".strip())
 
 
 def operand(o: Mapping[str, str], context: Context) -> dict[str, Any]:
@@ -133,17 +134,11 @@ def sources(line: Mapping[str, Any], context: Context) -> list[Markup]:
     rows: list[Markup] = []
     if line["kind"] == "conversion":
         row = context.factors.get((line["from"], line["to"]), "")
-        short = line["factor"] != "1" and len(line["factor"]) < LONG_FACTOR
-        factor = fraction(line["factor"]) + " " if short else "factor "
+        factor = text.linear(line["factor"]) + " " if line["factor"] != "1" else ""
         rows.append(Markup("{}exact{}").format(factor, Markup(', <a href="#{}">{}</a>').format(row, row) if row else ""))
     if line["kind"] == "lookup":
         rows.append(Markup.escape(line["library"]))
     return [r for r in (*rows, Markup.escape(line["source"]), Markup.escape(line["note"])) if r]
-
-
-def fraction(factor: str) -> Markup:
-    """An exact factor such as ``77/34560`` with its digits grouped."""
-    return Markup("/").join(text.number(part.strip()) for part in factor.split("/"))
 
 
 def residuals(line: Mapping[str, Any]) -> list[dict[str, Any]]:
@@ -161,7 +156,7 @@ def view(line: Mapping[str, Any], context: Context) -> dict[str, Any]:
     setting = formula_picture(line, context.names)
     return {
         "address": line["address"], "kind": line["kind"], "title": line["title"],
-        "picture": picture(setting) if setting else _entry(line, context),
+        "picture": picture(setting) if setting else "", "place": line["function"] if line["kind"] == "lookup" and not line["operands"] else "",
         "operands": [operand(o, context) for o in line["operands"]],
         "sources": sources(line, context), "result": result(line), "residuals": residuals(line),
     }

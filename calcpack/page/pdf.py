@@ -7,6 +7,7 @@ from __future__ import annotations
 
 import gc
 import logging
+import os
 from collections.abc import Iterator, Mapping, Sequence
 from contextlib import contextmanager
 from datetime import UTC, datetime
@@ -44,13 +45,12 @@ def render(record: Mapping[str, Any], attachments: Sequence[Attached]) -> bytes:
         for name, content, description, relationship in attachments
     ]
     base = find_resource("templates", "package.html").as_uri()
-    with _strict(), _uncollected():
-        document = weasyprint.HTML(
-            string=html, base_url=base, url_fetcher=URLFetcher(allowed_protocols=("file", "data"), fail_on_errors=True)
-        ).render(font_config=FontConfiguration(), attachments=files, pdf_variant="pdf/a-3u",
-                 pdf_identifier=bytes.fromhex(record["fingerprint"])[:16])
-        written = document.write_pdf(finisher=_finish, attachments=files, pdf_variant="pdf/a-3u",
-                                     pdf_identifier=bytes.fromhex(record["fingerprint"])[:16])
+    fetcher = URLFetcher(allowed_protocols=("file", "data"), fail_on_errors=True)
+    with _strict(), _uncollected(), _dated(issued):
+        written = weasyprint.HTML(string=html, base_url=base, url_fetcher=fetcher).write_pdf(
+            finisher=_finish, font_config=FontConfiguration(), attachments=files, pdf_variant="pdf/a-3u",
+            pdf_identifier=bytes.fromhex(record["fingerprint"])[:16],
+        )  # fmt: skip
     return bytes(written)
 
 
@@ -124,6 +124,19 @@ def _uncollected() -> Iterator[None]:
     finally:
         if enabled:
             gc.enable()
+
+
+@contextmanager
+def _dated(issued: datetime) -> Iterator[None]:
+    """fontTools writes the time of day into the fonts it cuts down, unless this variable says otherwise."""
+    before = os.environ.get("SOURCE_DATE_EPOCH")
+    os.environ["SOURCE_DATE_EPOCH"] = str(int(issued.timestamp()))
+    try:
+        yield
+    finally:
+        del os.environ["SOURCE_DATE_EPOCH"]
+        if before is not None:
+            os.environ["SOURCE_DATE_EPOCH"] = before
 
 
 def _finish(document: Any, pdf: Any) -> None:

@@ -6,6 +6,7 @@ steps in.
 
 from __future__ import annotations
 
+import re
 import unicodedata
 from collections.abc import Mapping
 from functools import cache
@@ -13,7 +14,7 @@ from typing import Any
 
 from markupsafe import Markup, escape
 
-from ..formula import Name, Node
+from ..number import MINUS
 from . import metrics
 from .numerals import SANS_GAP, SERIF_GAP, numeral
 from .typeset import Display, runs
@@ -74,6 +75,25 @@ def quantity(value: str, name: str) -> Markup:
     return Markup("{}{}{}").format(number(value), SANS_GAP if shown else "", shown)
 
 
+_TOKEN = re.compile(r"\*\* ?(\d+)|\*|/|[-+()]|[\d.]+(?:E[-+]?\d+)?|[a-z]\w*")
+
+
+def linear(formula: str) -> Markup:
+    """A formula of numbers in one row: ``0.3048**2 / (2 * 3)`` as 0.304 8², a slash, brackets and ``×``."""
+    out = Markup("")
+    for match in _TOKEN.finditer(formula):
+        token = match[0]
+        if match[1]:
+            out += Markup("<sup>{}</sup>").format(match[1])
+        elif token in "+*-":
+            out += Markup(" {} ").format({"*": "×", "-": MINUS}.get(token, token))
+        elif token in "/()":
+            out += token
+        else:
+            out += number(token) if token[0].isdigit() else Markup("<i>{}</i>").format(token)
+    return out
+
+
 def given(text: str) -> Markup:
     """A value as typed, with its number grouped where it begins with one; the word after the unit may wrap."""
     first, _, rest = text.partition(" ")
@@ -102,8 +122,3 @@ def symbol_width(shown: Display, size: float) -> float:
 def display(nomenclature: list[dict[str, Any]]) -> dict[str, Display]:
     """How each symbol of the record's nomenclature is written."""
     return {n["name"]: Display(n["base"], n["sub"], n["upright"]) for n in nomenclature}
-
-
-def is_name(node: Node) -> bool:
-    """Whether a formula is a symbol alone."""
-    return isinstance(node, Name)

@@ -6,7 +6,7 @@ from collections.abc import Mapping
 from typing import Any
 
 from . import figures, glyphs, metrics, tables, text
-from .lines import Context, fraction, view
+from .lines import Context, view
 from .text import all_printable
 
 PAPERS = {"A4": ("210mm 297mm", "20mm", "14mm"), "Letter": ("215.9mm 279.4mm", "22mm", "17.9mm")}
@@ -36,7 +36,7 @@ def context(record: Mapping[str, Any]) -> dict[str, Any]:
         "margin_key": glyphs.margin_bar("6"),
         "elevation": glyphs.data_uri(figures.elevation(r["sketch"])) if r["sketch"] else "",
         "rounding": [_rounding(row, shared) for row in r["rounding"]],
-        "conversions": [{**row, "id": f"C{i}", "factor": fraction(row["factor"])} for i, row in enumerate(r["conversions"], 1)],
+        "conversions": [{**row, "id": f"C{i}", "factor": text.linear(row["factor"]), "formula": text.linear(row["formula"]) if "+" in row["formula"] else ""} for i, row in enumerate(r["conversions"], 1)],
         "nomenclature": [{**n, "symbol": text.symbol(shared.names[n["name"]]), "unit": text.unit(n["unit"]) or "–"} for n in r["nomenclature"]],
         "strip_title": cut(r["calculation"]["title"], 57 / 25.4 * 72, 8.5), "listing": listing(r["input_file"]["text"]), "fingerprint": fours(r["fingerprint"]), "input_fingerprint": fours(r["input_file"]["sha256"]),
     }
@@ -71,8 +71,18 @@ def _cover(r: Mapping[str, Any], shared: Context) -> dict[str, Any]:
         "counts": [(counts[k], words) for k, words in (("verified", "verified"), ("maker", "unconfirmed"), ("preliminary", "preliminary"),
                                                        ("assumed", "assumed"), ("without source", "without source"))],
         "unverified": [{**u, "link": shared.link(u["address"]), "status": tables.STATUS_WORDS.get(u["status"], u["status"])} for u in cover["unverified"]],
-        "confirm": [{**c, "link": shared.link(c["address"])} for c in cover.get("confirm", [])], "rounding": cover["rounding"],
+        "confirm": _confirmations(r, shared), "rounding": cover["rounding"],
     }
+
+
+def _confirmations(r: Mapping[str, Any], shared: Context) -> list[dict[str, Any]]:
+    """Who has to confirm what: assumptions, and inputs that are not among the assumptions already."""
+    asked = [(a["address"], a["text"], a["confirm"]) for a in r["assumptions"]]
+    for line in r["inputs"]:
+        p = line.get("provenance") or {}
+        if p.get("status") != "assumed":
+            asked.append((line["address"], line["title"], p.get("confirm", "")))
+    return [{"link": shared.link(address), "what": what, "who": who} for address, what, who in asked if who]
 
 
 def _part(part: Mapping[str, Any], shared: Context) -> dict[str, Any]:
@@ -80,7 +90,9 @@ def _part(part: Mapping[str, Any], shared: Context) -> dict[str, Any]:
     runs: list[dict[str, Any]] = []
     for block in part["blocks"]:
         if "losses" in block:
-            runs.append({"losses": tables.losses(block["losses"], shared)})
+            rows = runs[-1]["rows"] if runs and "rows" in runs[-1] else []
+            group = rows.pop()["group"] if rows and "group" in rows[-1] else ""
+            runs.append({"losses": {"group": group, **tables.losses(block["losses"], shared)}})
             continue
         if not runs or "rows" not in runs[-1]:
             runs.append({"rows": []})

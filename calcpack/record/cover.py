@@ -92,7 +92,7 @@ def cover(study: Study, judged: list[Json], inputs: list[Json]) -> Json:
     ]
     return {
         "verdict": verdict,
-        "statement": " ".join(_sentence(r) for r in judged if r["verdict"] != "not applicable") + _found(study),
+        "statement": _statement(study, judged),
         "tally": {word: tally[word] for word in _RANK},
         "governing": governing(judged)["address"],
         "counts": {word: counts[word] for word in ("verified", "maker", "preliminary", "assumed")}
@@ -121,15 +121,17 @@ def _sentence(r: Json) -> str:
     return f"{subject}{about} is {left['text']} {left['unit']} and needs {right['text']} {right['unit']}: {words} {amount} {margin['unit']}."
 
 
-def _found(study: Study) -> str:
-    words = []
-    for d in study.differences:
-        x, unit = study.ledger.headline(d.value)
-        more = "more" if x >= 0 else "less"
-        words.append(
-            f" At the state of the reading {d.name}, the model shows {abs(x)} {unit.name} {more} than the reading."
-        )
-    return "".join(words)
+def _statement(study: Study, judged: list[Json]) -> str:
+    """A few sentences in plant units: what decides, everything that fails, and where model and reading differ."""
+    first = governing(judged)
+    told = [first] + [r for r in judged if r["verdict"] in ("not met", "not assessed") and r is not first]
+    if first["id"] != "npsh_margin":
+        told += [r for r in judged if r["id"] == "npsh_margin" and r not in told]
+    words = [_sentence(r) for r in told]
+    if study.differences:
+        apart = ", ".join(f"{study.ledger.shown(d.value)} ({d.name})" for d in study.differences)
+        words.append(f"Model less reading, at the state of the reading: {apart}.")
+    return " ".join(words)
 
 
 def _rounding(study: Study) -> str:

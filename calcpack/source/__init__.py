@@ -36,7 +36,7 @@ def loads(raw: bytes, name: str) -> Calculation:
     faults = [*notation, *spelling, *validate(root, name), *unread, *check_document(view), *check_plant(view)]
     if faults:
         raise InputFault(_once(faults, name))
-    return build(root, read, raw, Path(name).name)
+    return build(root, read, raw, name)
 
 
 def _once(faults: Iterable[Fault], name: str) -> list[Fault]:

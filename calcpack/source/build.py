@@ -6,6 +6,7 @@ from collections.abc import Callable, Iterator
 from dataclasses import dataclass
 from datetime import date
 from hashlib import sha256
+from pathlib import PurePath
 from typing import Any, TypeVar
 
 from ..quantity import Quantity
@@ -147,7 +148,8 @@ def build(root: Mapping, read: dict[Mark, Quantity], raw: bytes, name: str) -> C
         intake=top.maybe("intake", _intake),
         criteria=_criteria(top.branch("criteria")),
         readings=tuple(map(_reading, top.each("readings"))),
-        path=name,
+        path=PurePath(name).name,
+        named=name,
         raw=raw,
         sha256=sha256(raw).hexdigest(),
     )

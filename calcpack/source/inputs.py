@@ -245,7 +245,7 @@ class Calculation:
     """A whole input file.
 
     ``line`` with ``supply.level`` gives the design route, ``readings`` the measured one, and one is there.
-    ``path`` is the file's name without its folder, ``raw`` its bytes, ``sha256`` their digest in hexadecimal.
+    ``path`` is the file's name without its folder, ``named`` the path as it was asked for (faults say it), ``raw`` its bytes, ``sha256`` their digest in hexadecimal.
     """
 
     number: str
@@ -270,5 +270,6 @@ class Calculation:
     criteria: Criteria
     readings: tuple[Reading, ...]
     path: str
+    named: str
     raw: bytes
     sha256: str

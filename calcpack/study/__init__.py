@@ -64,6 +64,12 @@ def run(calculation: Calculation) -> Study:
                 "difference", {"NPSHA_d": model.npsh, "NPSHA_m": found.npsh}, reading.name, key_result=True
             )
             differences.append(Difference(reading.name, value))
+            word = "less" if value.record > 0 else "more"
+            entry.find(
+                f"{reading.name}: the reading shows {ledger.shown(value).lstrip('-')} {word} NPSH than the model at its state (line {value.address})",
+                "a loss the model does not hold, or an error of level, gauge, elevation, flow, bore or datum; the lower result "
+                "governs while the cause is open",
+            )
         if state.level is None or worst.level is None:
             entry.find(
                 f"The reading {reading.name} is judged at its own state only",

@@ -64,7 +64,7 @@ class Entry:
 
     def refuse(self, at: Place, wanted: str, found: str, suggestion: str = "") -> NoReturn:
         """Raise :class:`InputFault` at a place in the file."""
-        raise InputFault([Fault(self.calculation.path, at.line, at.column, at.key, wanted, found, suggestion)])
+        raise InputFault([Fault(self.calculation.named, at.line, at.column, at.key, wanted, found, suggestion)])
 
     def look_up(self, name: str, temperature: Value, given: Given) -> Value:
         """A property of water; outside its range the fault stands at the temperature's place in the file."""
