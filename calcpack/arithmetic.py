@@ -111,6 +111,8 @@ class InFloat:
         return math.pi if text == "pi" else _literal(text)
 
     def binary(self, op: str, a: float, b: float) -> Any:
+        if op == "**" and a == 0 and b == 0:
+            raise FormulaError("0 to the power 0 has no value")
         return _operate(op, a, b)
 
     def call(self, fn: str, args: Sequence[Any]) -> float:
@@ -152,21 +154,28 @@ def _literal(text: str) -> float | int:
 def evaluate(node: Node, values: Mapping[str, Any], arithmetic: Arithmetic) -> Any:
     """Evaluate a tree on ``values`` (symbol -> number, or a sequence where ``sum`` takes it).
 
-    Raises :class:`FormulaError` where a function leaves its domain or a result is not finite; never returns a
-    non-finite scalar.
+    Raises :class:`FormulaError` where a value is not finite or a function leaves its domain; never returns a
+    non-finite scalar, and never a verdict on one.  Arrays pass unchecked.
     """
     try:
+        for value in values.values():
+            _check(value, node)
+        if isinstance(node, Cmp):
+            a, b = evaluate(node.a, values, arithmetic), evaluate(node.b, values, arithmetic)
+            return arithmetic.binary(node.op, a, b)
         result = _evaluate(node, values, arithmetic)
-    except (DecimalException, ArithmeticError, ValueError) as error:
-        if isinstance(error, FormulaError):
-            raise
+    except FormulaError:
+        raise
+    except (DecimalException, ArithmeticError, ValueError):
         raise FormulaError(f"{text(node)} has no finite value here") from None
-    finite = (
-        result.is_finite() if isinstance(result, Decimal) else not isinstance(result, float) or math.isfinite(result)
-    )
-    if not finite or isinstance(result, complex):
-        raise FormulaError(f"{text(node)} has no finite value here")
+    _check(result, node)
     return result
+
+
+def _check(x: Any, node: Node) -> None:
+    finite = x.is_finite() if isinstance(x, Decimal) else not isinstance(x, float) or math.isfinite(x)
+    if not finite or isinstance(x, complex):
+        raise FormulaError(f"{text(node)} has no finite value here")
 
 
 def _evaluate(node: Node, values: Mapping[str, Any], on: Arithmetic) -> Any:
@@ -177,7 +186,7 @@ def _evaluate(node: Node, values: Mapping[str, Any], on: Arithmetic) -> Any:
             return on.number("pi") if name == "pi" else values[name]
         case Neg(x):
             return on.binary("-", 0, _evaluate(x, values, on))
-        case Bin(op, a, b) | Cmp(op, a, b):
+        case Bin(op, a, b):
             return on.binary(op, _evaluate(a, values, on), _evaluate(b, values, on))
         case Call(fn, args):
             return on.call(fn, [_evaluate(x, values, on) for x in args])

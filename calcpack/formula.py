@@ -10,6 +10,7 @@ from __future__ import annotations
 
 import ast
 import hashlib
+import re
 from collections.abc import Iterator, Mapping
 from dataclasses import dataclass
 from decimal import Decimal
@@ -69,7 +70,10 @@ class Cmp:
 
 Node = Num | Name | Neg | Bin | Call | Cmp
 
-#: Function name -> number of arguments (0: one or more; ``sum`` takes one symbol that stands for a list).
+#: Longest formula read, in characters.
+LONGEST = 500
+_DECIMAL = re.compile(r"[0-9]+(\.[0-9]+)?")
+#: Function name -> number of arguments (0: two or more; ``sum`` takes one symbol that stands for a list).
 FUNCTIONS = {"sqrt": 1, "log10": 1, "ln": 1, "exp": 1, "max": 0, "min": 0, "sum": 1}
 _BINARY: dict[type[ast.AST], str] = {ast.Add: "+", ast.Sub: "-", ast.Mult: "*", ast.Div: "/", ast.Pow: "**"}
 _COMPARE: dict[type[ast.AST], str] = {ast.GtE: ">=", ast.LtE: "<=", ast.Gt: ">", ast.Lt: "<", ast.Eq: "=="}
@@ -77,6 +81,8 @@ _COMPARE: dict[type[ast.AST], str] = {ast.GtE: ">=", ast.LtE: "<=", ast.Gt: ">",
 
 def parse(text: str) -> Node:
     """Parse ``text`` into a tree.  Raises :class:`FormulaError` for anything outside the language."""
+    if len(text) > LONGEST or not text.isascii() or "#" in text:
+        raise FormulaError(f"{text[:40]!r} is not a formula: at most {LONGEST} plain characters, without comments")
     try:
         body = ast.parse(text, mode="eval").body
     except SyntaxError as error:
@@ -87,7 +93,9 @@ def parse(text: str) -> Node:
 def _convert(node: ast.AST, text: str, top: bool = False) -> Node:
     match node:
         case ast.Constant(value=int() | float()) if not isinstance(node.value, bool):
-            written = ast.get_source_segment(text, node) or str(node.value)
+            written = ast.get_source_segment(text, node) or ""
+            if not _DECIMAL.fullmatch(written):
+                raise FormulaError(f"{text!r}: {written!r} is not a plain decimal number")
             return Num(str(Decimal(written)))
         case ast.Name(id=name):
             return Name(name)
@@ -97,8 +105,10 @@ def _convert(node: ast.AST, text: str, top: bool = False) -> Node:
             return Bin(_BINARY[type(op)], _convert(a, text), _convert(b, text))
         case ast.Call(func=ast.Name(id=fn), args=args, keywords=[]) if fn in FUNCTIONS:
             wanted = FUNCTIONS[fn]
-            if (wanted and len(args) != wanted) or not args:
-                raise FormulaError(f"{text!r}: {fn} takes {wanted or 'one or more'} argument(s), {len(args)} given")
+            if len(args) != wanted if wanted else len(args) < 2:
+                raise FormulaError(f"{text!r}: {fn} takes {wanted or 'two or more'} argument(s), {len(args)} given")
+            if fn == "sum" and not isinstance(args[0], ast.Name):
+                raise FormulaError(f"{text!r}: sum takes one symbol")
             return Call(fn, tuple(_convert(x, text) for x in args))
         case ast.Compare(left=a, ops=[op], comparators=[b]) if top and type(op) in _COMPARE:
             return Cmp(_COMPARE[type(op)], _convert(a, text), _convert(b, text))
@@ -140,14 +150,14 @@ def _text(node: Node, level: int) -> str:
             return n
         case Neg(x):
             inner = "-" + _text(x, 3)
-            return f"({inner})" if level > 1 else inner
+            return f"({inner})" if level > 3 else inner
         case Call(fn, args):
             return f"{fn}({', '.join(_text(x, 0) for x in args)})"
         case Bin(op, a, b) | Cmp(op, a, b):
             own = _LEVEL[op]
             right_associative = op == "**"
             left = _text(a, own + right_associative)
-            right = _text(b, own + (not right_associative))
+            right = _text(b, 5 if isinstance(b, Neg) else own + (not right_associative))
             inner = f"{left}**{right}" if op == "**" else f"{left} {op} {right}"
             return f"({inner})" if own < level else inner
     raise AssertionError(node)

@@ -88,7 +88,7 @@ def bore(size: str, schedule: str) -> Bore:
     system, _, number = size.partition(" ")
     try:
         nps = DN_TO_NPS[number] if system == "DN" else _inches(number)
-    except (KeyError, ValueError):
+    except (KeyError, ValueError, ZeroDivisionError):
         raise OutOfRange(f"{size} is not a nominal size of the table") from None
     from fluids.piping import nearest_pipe
 

@@ -147,8 +147,14 @@ def _check_reference(value: Quantity, asked: Kind, wanted: str, text: str) -> No
 _COUNTS = {"gauge": "the barometer", "absolute": "zero pressure", "vacuum": "the barometer downwards"}
 
 
+#: Powers of ten beyond which a number is a slip of the hand.
+_LARGEST_POWER = 12
+
+
 def _check_range(value: Quantity, asked: Kind, wanted: str, text: str) -> None:
     """Refuse what cannot exist."""
+    if value.number and abs(value.number.adjusted()) > _LARGEST_POWER:
+        raise QuantityFault("range", wanted, f"{shown(text)}, which is no size met in practice")
     si = value.si()
     if value.unit.kind == "temperature" and si < 0:
         raise QuantityFault(

@@ -172,7 +172,7 @@ def _pipe(d: Drawing, scale: Scale, sketch: Mapping[str, Any]) -> None:
         d.between(x, end - half if y < end else end + half, x, y, 0.2)
         d.circle(x, y, 1.9, 0.3, "#FFFFFF")
         d.label(x, y + 0.9, "G", "middle", size=2.5)
-        d.label(PUMP, end + 9.6, f"gauge {_number(gauge['elevation'], signed=True)}", "middle", colour=SECOND)
+        d.label(PUMP - 4.0, end + 9.6, f"gauge {_number(gauge['elevation'], signed=True)}", colour=SECOND)
 
 
 def _element(d: Drawing, kind: str, x: float, y: float, half: float) -> None:

@@ -147,9 +147,8 @@ def _finish(document: Any, pdf: Any) -> None:
             name = str(item["BaseFont"]).partition("+")[2]
             if _plain(name).removesuffix("regular") not in bundled:
                 raise PageError(f"a font that is not bundled was used: {name}")
-    if "AF" in pdf.catalog:
-        references = str(pdf.catalog["AF"].data.decode() if isinstance(pdf.catalog["AF"].data, bytes) else pdf.catalog["AF"].data)
-        del references
+    if "AF" in pdf.catalog:  # the engine enters every attachment twice
+        pdf.catalog["AF"][:] = dict.fromkeys(pdf.catalog["AF"])
 
 
 def _plain(name: str) -> str:

@@ -131,6 +131,7 @@ def rule(r: Mapping[str, Any], context: Context) -> dict[str, Any]:
         "word": capital(r["verdict"]), "about": r["about"], "reason": r["reason"], "criterion": r["criterion"], "source": r["source"], "sides": sides,
         "relation": r["relation"], "inequality": inequality,
         "margin": signed(margin["headline"]["text"], margin["headline"]["unit"]) if margin else "",
+        "margin_record": signed(margin["value"], margin["unit"]) if margin else "",
         "percent": signed(margin["percent"], "%") if margin and margin["percent"] else "",
         "bar": glyphs.margin_bar(margin["percent"]) if margin and margin["percent"] else "",
     }

@@ -65,8 +65,10 @@ def number_width(value: str, face: metrics.Face, size: float) -> float:
 
 
 def unit(name: str) -> str:
-    """A unit as printed: nothing for a pure number."""
-    return "" if name in ("1", "") else name
+    """A unit as printed: nothing for a pure number, and never a digit first, which would run on from the number."""
+    if name.startswith("1/"):
+        return Markup("{}<sup>{}1</sup>").format(name[2:], MINUS)
+    return "" if name == "1" else name
 
 
 def quantity(value: str, name: str) -> Markup:

@@ -6,12 +6,12 @@ from collections.abc import Mapping
 from typing import Any
 
 from . import figures, glyphs, metrics, tables, text
-from .lines import Context, view
+from .lines import POINT, Context, view
 from .text import all_printable
 
 PAPERS = {"A4": ("210mm 297mm", "20mm", "14mm"), "Letter": ("215.9mm 279.4mm", "22mm", "17.9mm")}
 #: The input file as read: size, and width of a line before it is wrapped (points).
-LISTING_SIZE, LISTING_WIDTH = 7.8, 128 / 25.4 * 72
+LISTING_SIZE, LISTING_WIDTH = 7.8, 128 * POINT
 FIGURE_SPACE = "\u2007"
 SECTIONS = (
     "Purpose and scope", "Criteria", "Method", "Inputs", "Assumptions", "References", "System as modelled", "Computation",
@@ -38,7 +38,7 @@ def context(record: Mapping[str, Any]) -> dict[str, Any]:
         "rounding": [_rounding(row, shared) for row in r["rounding"]],
         "conversions": [{**row, "id": f"C{i}", "factor": text.linear(row["factor"]), "formula": text.linear(row["formula"]) if "+" in row["formula"] else ""} for i, row in enumerate(r["conversions"], 1)],
         "nomenclature": [{**n, "symbol": text.symbol(shared.names[n["name"]]), "unit": text.unit(n["unit"]) or "–"} for n in r["nomenclature"]],
-        "strip_title": cut(r["calculation"]["title"], 57 / 25.4 * 72, 8.5), "listing": listing(r["input_file"]["text"]), "fingerprint": fours(r["fingerprint"]), "input_fingerprint": fours(r["input_file"]["sha256"]),
+        "strip_title": cut(r["calculation"]["title"], 57 * POINT, 8.5), "listing": listing(r["input_file"]["text"]), "fingerprint": fours(r["fingerprint"]), "input_fingerprint": fours(r["input_file"]["sha256"]),
     }
 
 
@@ -72,6 +72,8 @@ def _cover(r: Mapping[str, Any], shared: Context) -> dict[str, Any]:
                                                        ("assumed", "assumed"), ("without source", "without source"))],
         "unverified": [{**u, "link": shared.link(u["address"]), "status": tables.STATUS_WORDS.get(u["status"], u["status"])} for u in cover["unverified"]],
         "confirm": _confirmations(r, shared), "rounding": cover["rounding"],
+        "owner": cut(r["calculation"]["owner"], 75 * POINT, 8.8), "project": cut(r["calculation"]["project"], 75 * POINT, 8.8),
+        "title": cut(r["calculation"]["title"], 120 * POINT, 8.8),
     }
 
 

@@ -10,7 +10,7 @@ from collections.abc import Iterator
 
 from .. import __version__, formula
 from ..lookup import library
-from ..rules import LARGEST_DRIFT
+from ..rules import largest_drift
 from ..source.inputs import Given
 from ..study import Study
 from ..symbols import NOMENCLATURE
@@ -191,7 +191,7 @@ def _rounding(study: Study) -> list[Json]:
         shadow = float(v.shadow / v.unit.factor)
         rows.append({
             "address": v.address, "what": title, "record": number(v.record), "shadow": short(shadow), "unit": v.unit.name,
-            "drift": f"{drift(v):.1E}", "limit": str(LARGEST_DRIFT),
+            "drift": f"{drift(v):.1E}", "limit": f"{largest_drift(v.record):f}",
         })  # fmt: skip
     return rows
 

@@ -9,7 +9,7 @@ from .. import formula
 from ..ledger import Ledger
 from ..number import rounded
 from ..quantity import PLANT
-from ..rules import LARGEST_DRIFT, REPORTED_DECIMALS, Check
+from ..rules import Check, largest_drift, reported_decimals
 from ..study import Study
 from ..symbols import NOMENCLATURE
 from ..value import Value, drift, in_unit
@@ -34,7 +34,8 @@ def _check(ledger: Ledger, c: Check, address: str, references: References) -> Js
         kind = NOMENCLATURE[names[0]].kind
         plant = PLANT[ledger.system][_STEP.get(kind, kind)][0]
         step = Value(address, names[0], c.margin, 0.0, ledger.coherent(names[0]), "")
-        x = rounded(in_unit(step, plant) if kind not in _STEP else c.margin, REPORTED_DECIMALS, "down")
+        shown = in_unit(step, plant) if kind not in _STEP else c.margin
+        x = rounded(shown, reported_decimals(shown), "down")
         margin = {
             "value": number(c.margin), "unit": ledger.coherent(names[0]).name, "headline": {"text": str(x), "unit": plant.name},
             "percent": None if c.percent is None else str(rounded(c.percent, 1, "down")),
@@ -66,7 +67,8 @@ def _side(ledger: Ledger, v: Value | None, symbol: str, toward: str) -> Json | N
         headline = {"text": text, "unit": unit}
     else:
         plant = PLANT[ledger.system][NOMENCLATURE[v.symbol].kind][0]
-        headline = {"text": str(rounded(in_unit(v, plant), REPORTED_DECIMALS, toward)), "unit": plant.name}
+        shown = in_unit(v, plant)
+        headline = {"text": str(rounded(shown, reported_decimals(shown), toward)), "unit": plant.name}
     return {"symbol": symbol, "name": v.title, **value(v), "headline": headline}
 
 
@@ -142,4 +144,5 @@ def _rounding(study: Study) -> str:
         return ""
     worst = max(sides, key=drift)
     unit = worst.unit.name
-    return f"largest effect of line rounding on a result: {drift(worst):.6f} {unit} (line {worst.address}); limit {LARGEST_DRIFT} {unit}"
+    limit = largest_drift(worst.record)
+    return f"largest effect of line rounding on a result: {drift(worst):.6f} {unit} (line {worst.address}); limit {limit:f} {unit}"

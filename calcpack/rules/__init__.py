@@ -9,7 +9,7 @@ from typing import Literal
 from .. import formula
 from ..arithmetic import InDecimal, InFloat, evaluate
 from ..formula import Bin, Cmp, FormulaError
-from ..number import of_record
+from ..number import last_unit, of_record
 from ..references import Cite
 from ..symbols import DIMENSIONS, NOMENCLATURE
 from ..value import Value, drift
@@ -53,9 +53,14 @@ class Check:
     percent: Decimal | None = None
 
 
-#: Decimals of the two sides as reported, and the drift they allow: a tenth of the last digit shown.
-REPORTED_DECIMALS = 2
-LARGEST_DRIFT = Decimal(1).scaleb(-REPORTED_DECIMALS - 1)
+def reported_decimals(x: Decimal) -> int:
+    """Decimals at which a side is reported: two, and fewer where that would be more than five digits."""
+    return max(0, min(2, 4 - x.adjusted())) if x else 2
+
+
+def largest_drift(x: Decimal) -> Decimal:
+    """How far line rounding may move a side: a tenth of the last digit reported."""
+    return max(Decimal("0.001"), last_unit(x)) if x else Decimal("0.001")
 
 
 def compare(
@@ -80,7 +85,7 @@ def compare(
         if not right.record or NOMENCLATURE[b].kind == "temperature"
         else evaluate(_PERCENT, {"M": margin, "N_L": abs(right.record)}, InDecimal())
     )
-    worst = max(drift(left), drift(right))
+    drifted = any(drift(v) > largest_drift(v.record) for v in (left, right))
     verdict: Verdict = "met" if record else "not met"
     reason = met if record else not_met
     if record != shadow:
@@ -88,7 +93,7 @@ def compare(
             "not assessed",
             "within rounding: the verdict turns between the record and the full-precision run",
         )
-    elif worst > LARGEST_DRIFT:
+    elif drifted:
         verdict, reason = (
             "not assessed",
             "within rounding: line rounding moves a side by more than a tenth of its last digit reported",

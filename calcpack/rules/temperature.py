@@ -13,12 +13,12 @@ _CRITERION = "Vapour pressure is taken at the highest temperature expected, not 
 def check(used: Value, highest: Value | None, *, given_as: str, cost: str, source: str) -> Check:
     """Judge the temperature ``used`` against the ``highest`` expected; ``given_as`` names the extreme where that is missing.
 
-    ``cost`` says what a warmer liquid would take from NPSH available.
+    ``cost``, empty or beginning with a full stop, says what a warmer liquid would take from NPSH available.
     """
     if highest is None:
-        reason = f"the file gives only the {given_as} temperature; state the highest expected. {cost}"
+        reason = f"the file gives only the {given_as} temperature; state the highest expected{cost}"
         return without_numbers(HIGHEST_TEMPERATURE, "not met", reason, criterion=_CRITERION, source=source, left=used)
     return compare(
         HIGHEST_TEMPERATURE, used, highest, criterion=_CRITERION, source=source, met="the highest temperature was used",
-        not_met=f"a result stands at a lower temperature. {cost}",
+        not_met=f"a result stands at a lower temperature{cost}",
     )  # fmt: skip

@@ -118,7 +118,7 @@ def _temperature(entry: Entry, judged: list[Available], worst: State) -> Check:
     if highest is None or used.record < highest.record:
         lost = need.cost_of_temperature(entry, worst)
         if lost is not None:
-            cost = f"Each {CONSTANTS['dT'].text} warmer would take {entry.ledger.shown(lost)} from NPSH available (line {lost.address})"
+            cost = f". Each {CONSTANTS['dT'].text} warmer would take {entry.ledger.shown(lost)} from NPSH available (line {lost.address})"
     return temperature.check(used, highest, given_as=extreme, cost=cost, source=_cited(given))
 
 

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 from collections.abc import Mapping
 from dataclasses import dataclass
+from decimal import Decimal
 
 from .. import lookup
 from ..fitting_set import SET_NAMES, SETS, coefficient
@@ -18,6 +19,8 @@ from .state import State
 
 #: Reynolds numbers between which flow is neither laminar nor fully turbulent.
 LAMINAR_BELOW, TURBULENT_ABOVE = 2000, 4000
+#: Relative roughness where charts of the friction factor end (recalled, not re-read).
+ROUGHEST = Decimal("0.05")
 
 
 @dataclass(frozen=True)
@@ -120,6 +123,13 @@ def _pipe(
         friction = ledger.apply("laminar_friction", {"Re": reynolds}, about)
     else:
         relative = ledger.apply("relative_roughness", {"eps": _roughness(entry, section), "D": pipe.bore}, about)
+        if relative.record > ROUGHEST:
+            entry.refuse(
+                section.roughness or section,
+                "a roughness below a twentieth of the bore, where the friction factor is known",
+                f"a roughness of {ledger.shown(_roughness(entry, section))} in a bore of {ledger.shown(pipe.bore)}",
+                "check the unit of the roughness and of the bore",
+            )
         turbulent = reynolds.record > TURBULENT_ABOVE
         friction = ledger.apply(
             "colebrook" if turbulent else "colebrook_transition", {"r": relative, "Re": reynolds}, about

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 from dataclasses import dataclass
 
+from ..lookup import WATER_RANGE
 from ..source.inputs import Intake
 from ..value import Value
 from .entry import Entry
@@ -86,6 +87,10 @@ def submergence(entry: Entry, state: State, flow: Value) -> Submergence:
     return Submergence(there_is, least)
 
 
+#: Above this temperature, K, a step warmer would leave the range of the look-up.
+WARMEST_WITH_COST = WATER_RANGE[1] - 10
+
+
 def cost_of_temperature(entry: Entry, state: State) -> Value | None:
     """Head that one step of temperature above the one used would take, where the liquid can be looked up there."""
     liquid = entry.calculation.liquid
@@ -94,6 +99,8 @@ def cost_of_temperature(entry: Entry, state: State) -> Value | None:
     ledger = entry.ledger
     ledger.group("What a warmer liquid would cost")
     temperature = temperature_of(entry, state)
+    if temperature.record > WARMEST_WITH_COST:
+        return None
     warmer = ledger.apply("warmer_temperature", {"T": temperature, "dT": ledger.constant("dT")})
     p_v = entry.look_up("vapour_pressure", temperature, state.temperature)
     p_x = entry.look_up("vapour_pressure", warmer, state.temperature)

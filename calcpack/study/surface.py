@@ -6,6 +6,9 @@ from ..value import Value
 from .entry import Entry
 from .state import State
 
+#: Elevations, m, between which the formula of the lowest layer of the U.S. Standard Atmosphere 1976 holds.
+LOWEST_SITE, HIGHEST_SITE = -5000, 11_000
+
 
 def barometer(entry: Entry, state: State) -> Value:
     """The absolute barometer of ``state``: as read there, else the site's lowest."""
@@ -14,12 +17,27 @@ def barometer(entry: Entry, state: State) -> Value:
     site, ledger = entry.calculation.site, entry.ledger
     station = site.barometer and (site.barometer.lowest or site.barometer.normal)
     if station:
-        word = "Lowest" if site.barometer and site.barometer.lowest else "Normal"
+        lowest = site.barometer is not None and site.barometer.lowest is not None
+        word = "Lowest" if lowest else "Normal"
+        if site.weather_allowance is None and not lowest:
+            entry.refuse(
+                station,
+                "the lowest station barometer, or a weather_allowance beside the normal one",
+                f"the normal one, {station.text}, alone",
+                "an allowance of half an inch of mercury, 1.7 kPa, is in print; the site's own record is better",
+            )
         if site.weather_allowance is None:
             return entry.value(station, "p_b", f"{word} station barometer, absolute")
         read = entry.value(station, "p_r", f"{word} station barometer, absolute")
         return ledger.apply("barometer_station", {"p_r": read, "dp_w": _allowance(entry)})
     assert site.elevation is not None, "source asks for an elevation where no barometer is given"
+    if not LOWEST_SITE <= site.elevation.quantity.si() <= HIGHEST_SITE:
+        entry.refuse(
+            site.elevation,
+            "a site between 5 km below and 11 km above sea level, where the standard atmosphere's formula holds",
+            site.elevation.text,
+            "check the unit, or state the station barometer",
+        )
     height = ledger.apply("geopotential_height", {
         "Z": entry.value(site.elevation, "Z", "Site elevation above sea level"), "r_0": ledger.constant("r_0"),
     })  # fmt: skip
