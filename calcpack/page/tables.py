@@ -16,7 +16,7 @@ STATUS_WORDS = {"verified": "verified", "maker": "maker’s, unconfirmed", "prel
 #: A row of this form stands in the table alone; any other is a line printed in full above it.
 ROW_FORMULAS = ("n * K * h_V", "K * h_V")
 VERDICTS = ("met", "not met", "not applicable", "not assessed")
-POINT_EDGE = 9.0  # decimal points in the columns 'as given' and 'as used' of the inputs (mm)
+POINT_EDGE = 8.0  # decimal points in the columns 'as given' and 'as used' of the inputs (mm)
 
 
 def _aligned(value: str) -> str:

@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 from collections.abc import Mapping
+from decimal import Decimal
 from typing import Any
 
 from . import figures, glyphs, metrics, tables, text
@@ -12,6 +13,8 @@ from .text import all_printable
 PAPERS = {"A4": ("210mm 297mm", "20mm", "14mm"), "Letter": ("215.9mm 279.4mm", "22mm", "17.9mm")}
 #: The input file as read: size, and width of a line before it is wrapped (points).
 LISTING_SIZE, LISTING_WIDTH = 7.8, 128 * POINT
+#: A longer statement leaves its place beside the verdict and runs over the whole width under it.
+LONG_STATEMENT = 230
 FIGURE_SPACE = "\u2007"
 SECTIONS = (
     "Purpose and scope", "Criteria", "Method", "Inputs", "Assumptions", "References", "System as modelled", "Computation",
@@ -60,12 +63,12 @@ def _factors(r: Mapping[str, Any]) -> dict[tuple[str, str], str]:
 def _cover(r: Mapping[str, Any], shared: Context) -> dict[str, Any]:
     cover = r["cover"]
     governing = next((c for c in r["checks"] if c["address"] == cover["governing"]), None)
-    shown = sorted(
-        (c for c in r["checks"] if c["margin"]), key=lambda c: (c["address"] != cover["governing"], c["verdict"] != "not met")
-    )
+    measured = [c for c in r["checks"] if c["margin"] and c["margin"]["percent"]]
+    shown = sorted(measured, key=lambda c: (c["address"] != cover["governing"], Decimal(c["margin"]["percent"])))
     counts = cover["counts"]
     return {
         "glyph": glyphs.verdict(cover["verdict"], 14.0), "word": tables.capital(cover["verdict"]), "statement": cover["statement"],
+        "long": len(cover["statement"]) > LONG_STATEMENT,
         "tally": [(n, word) for word, n in cover["tally"].items() if n], "governs": tables.rule(governing, shared) if governing else None,
         "rules": [tables.rule(c, shared) for c in shown[:2]],
         "counts": [(counts[k], words) for k, words in (("verified", "verified"), ("maker", "unconfirmed"), ("preliminary", "preliminary"),

@@ -93,9 +93,7 @@ def line(ledger: Ledger, of: Line, references: References) -> Json:
                 "confirm": p.confirm,
             }
     if of.kind == "conversion":
-        before = of.operands[0][1].unit
-        factor = before.factor / v.unit.factor
-        found |= {"from": before.name, "to": v.unit.name, "factor": factor_text(factor), "source": before.source}
+        found |= _conversion(of)
     if of.kind == "lookup":
         found |= {"function": of.function, "library": of.library}
     if of.kind == "root":
@@ -127,8 +125,16 @@ def conversions(lines: list[Line]) -> list[Json]:
     for of in lines:
         if of.kind == "conversion":
             before, after = of.operands[0][1].unit, of.value.unit
-            seen.setdefault((before.name, after.name), {
-                "from": before.name, "to": after.name, "factor": factor_text(before.factor / after.factor),
-                "formula": formula.text(conversion_tree("x", before, after)), "source": before.source,
-            })  # fmt: skip
+            tree = formula.text(conversion_tree("x", before, after))
+            seen.setdefault((before.name, after.name), {**_conversion(of), "formula": tree})
     return list(seen.values())
+
+
+def _conversion(of: Line) -> Json:
+    """From, to, exact factor and the sources of the definitions behind it; SI's own powers of ten need none."""
+    before, after = of.operands[0][1].unit, of.value.unit
+    sources = dict.fromkeys(unit.source for unit in (before, after) if unit.source != "SI")
+    return {
+        "from": before.name, "to": after.name, "factor": factor_text(before.factor / after.factor),
+        "source": "; ".join(sources) or "SI",
+    }  # fmt: skip

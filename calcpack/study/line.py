@@ -178,6 +178,13 @@ def _fitting(entry: Entry, pipe: Flow, element: Element) -> tuple[str, Value]:
             "state its K with its source",
         )
     words = element.name or found.title
+    if element.kind == "valve" and ("check" in element.type or "foot" in element.type):
+        entry.assume(
+            f"open {element.id}",
+            f"The {found.title[0].lower()}{found.title[1:]} is fully open (element {element.id})",
+            "below 15 ft/s a check or foot valve may be only partly open and loses more "
+            "(Hydraulic Institute, Engineering Data Library); ask its maker",
+        )
     set_name = SET_NAMES[line.fitting_set]
     if found.K:
         return words, ledger.tabulated(
@@ -185,7 +192,11 @@ def _fitting(entry: Entry, pipe: Flow, element: Element) -> tuple[str, Value]:
         )
     rough = ledger.apply("fully_rough_friction", {"eps_c": ledger.constant("eps_c"), "D": pipe.bore})
     multiple = ledger.tabulated(
-        "m", f"{found.title}: multiple of f_T", parse(found.m, "ratio"), f"{set_name}: {found.title}", found.cite
+        "m",
+        f"{found.title}: multiple of the fully rough factor",
+        parse(found.m, "ratio"),
+        f"{set_name}: {found.title}",
+        found.cite,
     )
     return words, ledger.apply("fitting_coefficient", {"m": multiple, "f_T": rough}, found.title)
 

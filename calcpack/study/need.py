@@ -28,6 +28,11 @@ def needed(entry: Entry) -> Needed:
     """NPSH required with its margin, ratio and difference, the greater governing."""
     ledger, pump, asked = entry.ledger, entry.calculation.pump, entry.calculation.criteria
     npsh = pump.npsh_required
+    if npsh.datum.casefold() != pump.datum.casefold():
+        entry.find(
+            f"NPSH required counts from “{npsh.datum}”, NPSH available from “{pump.datum}”",
+            "they are compared as if both were one elevation; where they differ, NPSH required needs a shift",
+        )
     ledger.group("NPSH needed")
     required = entry.value(npsh.value, "NPSHR", f"NPSH required, {npsh.basis}")
     at_flow = entry.value(npsh.at_flow, "Q_r", "Flow at which NPSH required is stated")

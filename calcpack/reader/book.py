@@ -1,0 +1,56 @@
+"""What has been read so far: the values each address may be cited with, and what was found wrong."""
+
+from __future__ import annotations
+
+from collections.abc import Iterable
+from dataclasses import dataclass, field
+from typing import Literal
+
+from .units import Quantity
+
+Class = Literal["recomputed", "bracketed", "looked up", "tabulated"]
+
+
+@dataclass(frozen=True)
+class Finding:
+    """A disagreement, or something that could not be read: where, what, as printed and as found."""
+
+    sheet: int
+    address: str
+    what: str
+    printed: str = ""
+    found: str = ""
+
+    def __str__(self) -> str:
+        shown = f": printed {self.printed}, found {self.found}" if self.printed or self.found else ""
+        return f"sheet {self.sheet}, line {self.address or '-'}: {self.what}{shown}"
+
+
+@dataclass
+class Book:
+    """Addresses in order of reading with the values another line may take from them."""
+
+    values: dict[str, tuple[Quantity, ...]] = field(default_factory=dict)
+    classes: dict[str, Class] = field(default_factory=dict)
+    findings: list[Finding] = field(default_factory=list)
+    unread: list[Finding] = field(default_factory=list)
+
+    def citation(self, quantity: Quantity, address: str) -> tuple[str, str, str] | None:
+        """What is wrong with citing ``address`` for ``quantity``: what, printed, found; nothing if all is well.
+
+        Only lines read before are known, so a line that cites itself or a later one is found out here.
+        """
+        if address not in self.values:
+            return f"no earlier line is {address}", str(quantity), "nothing"
+        known = self.values[address]
+        if not any(quantity.value == q.value and quantity.unit == q.unit for q in known):
+            return f"differs from line {address}", str(quantity), " or ".join(map(str, known)) or "nothing readable"
+        return None
+
+    def enter(self, address: str, values: Iterable[Quantity]) -> None:
+        """Let later lines cite ``address``."""
+        self.values[address] = tuple(values)
+
+    def note(self, sheet: int, address: str, what: str, printed: object = "", found: object = "") -> None:
+        """Keep a disagreement."""
+        self.findings.append(Finding(sheet, address, what, str(printed), str(found)))
