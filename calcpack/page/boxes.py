@@ -76,7 +76,9 @@ def tall(character: str, face: Face, size: float, stretch: float, y: float) -> B
 
 def row(parts: Sequence[Box]) -> Box:
     """Boxes side by side on one baseline."""
-    pen, runs, bars = 0.0, [], []
+    pen = 0.0
+    runs: list[Run] = []
+    bars: list[Bar] = []
     for part in parts:
         placed = part.moved(pen, 0.0)
         runs += placed.runs

@@ -32,14 +32,18 @@ class Drawing:
     def area(self, x: float, y: float, width: float, height: float, fill: str, outline: float = 0.0) -> None:
         """A filled rectangle, optionally outlined in ink."""
         stroke = f' stroke="{INK}" stroke-width="{outline}"' if outline else ""
-        self.fills.append(f'<rect x="{_n(x)}" y="{_n(y)}" width="{_n(width)}" height="{_n(height)}" fill="{fill}"{stroke}/>')
+        self.fills.append(
+            f'<rect x="{_n(x)}" y="{_n(y)}" width="{_n(width)}" height="{_n(height)}" fill="{fill}"{stroke}/>'
+        )
 
     def line(self, d: str, width: float = 0.2, colour: str = INK, dash: str = "", fill: str = "none") -> None:
         """A path; ``dash`` as in SVG."""
         dashed = f' stroke-dasharray="{dash}"' if dash else ""
         self.lines.append(f'<path d="{d}" fill="{fill}" stroke="{colour}" stroke-width="{width}"{dashed}/>')
 
-    def between(self, x1: float, y1: float, x2: float, y2: float, width: float = 0.2, colour: str = INK, dash: str = "") -> None:
+    def between(
+        self, x1: float, y1: float, x2: float, y2: float, width: float = 0.2, colour: str = INK, dash: str = ""
+    ) -> None:
         """A straight line."""
         self.line(f"M{_n(x1)} {_n(y1)}L{_n(x2)} {_n(y2)}", width, colour, dash)
 
@@ -60,8 +64,17 @@ class Drawing:
                 self.between(x + left, y + height - offset + left, x + right, y + height - offset + right, 0.12)
             offset += step
 
-    def label(self, x: float, y: float, words: str, anchor: Anchor = "start", bold: bool = False, colour: str = INK,
-              upright: bool = False, size: float = TEXT) -> None:
+    def label(
+        self,
+        x: float,
+        y: float,
+        words: str,
+        anchor: Anchor = "start",
+        bold: bool = False,
+        colour: str = INK,
+        upright: bool = False,
+        size: float = TEXT,
+    ) -> None:
         """Words on a baseline; ``upright`` turns them to read upwards from the point."""
         face = metrics.SANS_SEMIBOLD if bold else metrics.SANS_REGULAR
         shift = {"start": 0.0, "middle": 0.5, "end": 1.0}[anchor] * metrics.width(face, size, words)

@@ -95,7 +95,14 @@ def _axis(d: Drawing, scale: Scale) -> None:
         y = scale.y(k * step)
         d.between(LEFT - 1.4, y, LEFT, y, 0.18)
         d.label(LEFT - 2.0, y + 0.95, _number(f"{k * step:g}"), "end")
-    d.label(3.2, (scale.y(scale.high) + scale.bottom) / 2, f"elevation and head above the datum, {scale.unit}", "middle", colour=SECOND, upright=True)
+    d.label(
+        3.2,
+        (scale.y(scale.high) + scale.bottom) / 2,
+        f"elevation and head above the datum, {scale.unit}",
+        "middle",
+        colour=SECOND,
+        upright=True,
+    )
 
 
 def _spread(wanted: Sequence[float], pitch: float) -> list[float]:
@@ -117,12 +124,22 @@ def _supply(d: Drawing, scale: Scale, sketch: Mapping[str, Any]) -> None:
     lowest, floor = float(levels[-1]["value"]), _pipe_start(sketch) - 3.5 * scale.ratio / MILLIMETRES[scale.unit]
     right, bottom, top = PIPE - 6, scale.y(floor), scale.y(float(levels[0]["value"])) - 5.0
     d.area(TANK, scale.y(lowest), right - TANK, bottom - scale.y(lowest), PALE)
-    d.line(f"M{TANK} {top:.2f}V{bottom:.2f}H{right}V{top:.2f}" + ("Z" if sketch["supply"]["kind"] == "gas_blanketed" else ""), 0.4)
+    d.line(
+        f"M{TANK} {top:.2f}V{bottom:.2f}H{right}V{top:.2f}"
+        + ("Z" if sketch["supply"]["kind"] == "gas_blanketed" else ""),
+        0.4,
+    )
     heights = _spread([scale.y(float(level["value"])) for level in levels], 3.4)
     for level, at in zip(levels, heights, strict=True):
         y, low = scale.y(float(level["value"])), level is levels[-1]
         d.between(TANK, y, right, y, 0.3 if low else 0.15, ACCENT if low else SECOND, "" if low else "1.2 0.8")
-        d.label(right + 1.2, at + 0.9, f"{level['name'].rpartition(', ')[2]} {_number(level['value'], signed=True)}", bold=low, colour=INK if low else SECOND)
+        d.label(
+            right + 1.2,
+            at + 0.9,
+            f"{level['name'].rpartition(', ')[2]} {_number(level['value'], signed=True)}",
+            bold=low,
+            colour=INK if low else SECOND,
+        )
         if low:
             x = TANK + 4
             d.line(f"M{x - 1.2} {y - 2.1:.2f}H{x + 1.2}L{x} {y:.2f}Z", 0.2)
@@ -153,7 +170,10 @@ def _pipe(d: Drawing, scale: Scale, sketch: Mapping[str, Any]) -> None:
         d.between(first, start + side, last, end + side, 0.35)
     d.between(first, start, last, end, 0.15, SECOND, "3 0.8 0.6 0.8")
     if sketch["intake"] and sketch["intake"]["reference"] == "bell_lip":
-        d.line(f"M{first} {start - half:.2f}L{first - 1.6} {start - 2.4:.2f}V{start + 2.4:.2f}L{first} {start + half:.2f}", 0.35)
+        d.line(
+            f"M{first} {start - half:.2f}L{first - 1.6} {start - 2.4:.2f}V{start + 2.4:.2f}L{first} {start + half:.2f}",
+            0.35,
+        )
     elements = sketch["elements"]
     pitch = (last - first - 4) / max(len(elements), 1)
     for i, element in enumerate(elements):
@@ -178,7 +198,11 @@ def _pipe(d: Drawing, scale: Scale, sketch: Mapping[str, Any]) -> None:
 def _element(d: Drawing, kind: str, x: float, y: float, half: float) -> None:
     match kind:
         case "valve":
-            d.line(f"M{x - 1.3} {y - half:.2f}V{y + half:.2f}L{x + 1.3} {y - half:.2f}V{y + half:.2f}Z", 0.3, fill="#FFFFFF")
+            d.line(
+                f"M{x - 1.3} {y - half:.2f}V{y + half:.2f}L{x + 1.3} {y - half:.2f}V{y + half:.2f}Z",
+                0.3,
+                fill="#FFFFFF",
+            )
         case "strainer":
             d.area(x - 1.1, y - half, 2.2, 2 * half, TINT, 0.25)
             d.hatch(x - 1.1, y - half, 2.2, 2 * half, 0.7, True)
@@ -189,7 +213,10 @@ def _element(d: Drawing, kind: str, x: float, y: float, half: float) -> None:
         case "entrance" | "pipe":
             pass
         case _:
-            d.line(f"M{x - 0.5} {y - half - 0.7:.2f}V{y + half + 0.7:.2f}M{x + 0.5} {y - half - 0.7:.2f}V{y + half + 0.7:.2f}", 0.3)
+            d.line(
+                f"M{x - 0.5} {y - half - 0.7:.2f}V{y + half + 0.7:.2f}M{x + 0.5} {y - half - 0.7:.2f}V{y + half + 0.7:.2f}",
+                0.3,
+            )
 
 
 def _datum(d: Drawing, scale: Scale, sketch: Mapping[str, Any]) -> None:
@@ -215,7 +242,14 @@ def _heads(d: Drawing, scale: Scale, sketch: Mapping[str, Any]) -> None:
     for i, key in enumerate(ends, len(steps)):
         x, top = BARS + pitch * i, scale.y(base + float(sketch[key]))
         tall = scale.y(base) - top
-        d.area(x, min(top, top + tall), wide, abs(tall), TINT if key == "available" else "#FFFFFF", 0.35 if key == "available" else 0.2)
+        d.area(
+            x,
+            min(top, top + tall),
+            wide,
+            abs(tall),
+            TINT if key == "available" else "#FFFFFF",
+            0.35 if key == "available" else 0.2,
+        )
         words = "NPSH available" if key == "available" else "needed"
         _bar_label(d, x + wide / 2, top, tall, f"{words} {_number(sketch[key])}", scale, bold=key == "available")
     if sketch["limit"]:
@@ -223,7 +257,9 @@ def _heads(d: Drawing, scale: Scale, sketch: Mapping[str, Any]) -> None:
         d.between(BARS + pitch * (len(steps) - 0.2), y, WIDTH, y, 0.3, INK, "0.8 0.6")
 
 
-def _bar_label(d: Drawing, x: float, top: float, tall: float, words: str, scale: Scale, bold: bool = False, hatched: bool = False) -> None:
+def _bar_label(
+    d: Drawing, x: float, top: float, tall: float, words: str, scale: Scale, bold: bool = False, hatched: bool = False
+) -> None:
     """The words inside the bar where they fit, else under it or above it."""
     length = text_width(words, bold)
     if tall > length + 3 and not hatched:

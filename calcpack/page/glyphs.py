@@ -91,7 +91,10 @@ def margin_bar(percent: str) -> str:
     shown = Decimal(percent)
     ends = max(Decimal(-10), min(Decimal(10), shown))
     x = 11 + float(ends) * 0.95
-    body = "".join(f'<path d="M{11 + tick * 0.95:.2f} 3.4V4.6" stroke-width="0.15" stroke="{SECOND}"/>' for tick in (-10, -5, 5, 10))
+    body = "".join(
+        f'<path d="M{11 + tick * 0.95:.2f} 3.4V4.6" stroke-width="0.15" stroke="{SECOND}"/>'
+        for tick in (-10, -5, 5, 10)
+    )
     body += f'<path d="M1.5 4H20.5" stroke-width="0.15" stroke="{SECOND}"/>'
     if x >= 11:
         body += f'<rect x="11" y="1.3" width="{x - 11:.3f}" height="2" fill="{TINT}" stroke-width="0.2"/>'

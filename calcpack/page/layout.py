@@ -49,15 +49,22 @@ def with_numbers(node: Node, values: Values) -> Node:
         case Cmp(op, a, b):
             return Cmp(op, with_numbers(a, values), with_numbers(b, values))
         case Call("sum", (Name(name),)) if name in values:
-            terms = [values[name]] if isinstance(values[name], str) else values[name]
-            return reduce(lambda a, b: Bin("+", a, b), [Num(str(t)) for t in terms])
+            value = values[name]
+            terms: list[Node] = [Num(t) for t in ([value] if isinstance(value, str) else value)]
+            return reduce(lambda a, b: Bin("+", a, b), terms)
         case Call(fn, args):
             return Call(fn, tuple(with_numbers(x, values) for x in args))
     return node
 
 
-def line(symbol: str | None, tree: Node, values: Values | None, names: Mapping[str, Display],
-         symbolic: bool = True, measure: float = MEASURE) -> Setting:
+def line(
+    symbol: str | None,
+    tree: Node,
+    values: Values | None,
+    names: Mapping[str, Display],
+    symbolic: bool = True,
+    measure: float = MEASURE,
+) -> Setting:
     """Set ``symbol = tree`` and below or beside it ``= tree with numbers``.
 
     ``symbol`` is None where the tree is itself a comparison.  ``symbolic=False`` leaves the symbolic form out (a
@@ -88,8 +95,9 @@ def _linear(symbol: str | None, forms: Sequence[Node]) -> str:
     return " = ".join([symbol, *written])
 
 
-def _rows(symbol: str | None, forms: Sequence[tuple[Node, bool]], names: Mapping[str, Display], size: float,
-          measure: float) -> Box:
+def _rows(
+    symbol: str | None, forms: Sequence[tuple[Node, bool]], names: Mapping[str, Display], size: float, measure: float
+) -> Box:
     """All rows of a line at one body size; may come out wider than ``measure``."""
     sides = []
     for tree, numeric in forms:

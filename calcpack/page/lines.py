@@ -17,14 +17,14 @@ from . import boxes, layout, metrics, text
 from .glyphs import data_uri
 from .layout import Setting
 from .metrics import REGULAR, SANS_REGULAR, SEMIBOLD
-from .numerals import numeral
+from .numerals import SANS_GAP, numeral
 from .typeset import SIZE, Display, Setter
 
 POINT = 72 / 25.4  # points in a millimetre
 RESULT_WIDTH, RESULT_EDGE = 27.0, 9.4  # result column, and where its decimal points stand (mm)
 VALUE_ROOM = 19.7  # operand's value and unit beside its address (mm)
 SYMBOL_ROOM = 6.6
-HEADLINE, RECORD, OPERAND = 10.5, 7.8, 7.8
+HEADLINE, RECORD, OPERAND, SYMBOL = 10.5, 7.8, 7.8, 8.5
 _FUNCTION = re.compile(r"(\w+)\((\w+(?:, ?\w+)*)\)")
 _ROOT_LABELS = ("f − ½ unit", "root f", "f + ½ unit")
 
@@ -95,16 +95,22 @@ def _entry(line: Mapping[str, Any], setter: Setter) -> Setting:
     return layout.picture(parts, f"{line['symbol']} = {line['value']} {unit}".strip())
 
 
-def operand(o: Mapping[str, str], context: Context) -> dict[str, Any]:
-    """One row of the column 'rests on'."""
-    shown, name = context.names[o["symbol"]], text.unit(o["unit"])
-    wide = text.symbol_width(shown, 8.5) / POINT > SYMBOL_ROOM - 0.8
-    room = VALUE_ROOM - (max(0.0, text.symbol_width(shown, 8.5) / POINT - SYMBOL_ROOM) + 1.0 if wide else 0.0)
-    needed = text.number_width(o["value"], SANS_REGULAR, OPERAND) + metrics.width(SANS_REGULAR, OPERAND, " " + name)
-    return {
-        "symbol": text.symbol(shown), "wide": wide, "value": text.number(o["value"]), "unit": name,
-        "below": bool(name) and needed / POINT > room, "link": context.link(o["address"]),
-    }
+def operands(line: Mapping[str, Any], context: Context) -> dict[str, Any]:
+    """The column 'rests on' as three blocks side by side: symbols, values with units, addresses; row by row.
+
+    A unit that does not fit beside its number takes a row of its own.
+    """
+    listed = [(context.names[o["symbol"]], o["value"], text.unit(o["unit"]), o["address"]) for o in line["operands"]]
+    edge = max([SYMBOL_ROOM, *(text.symbol_width(shown, SYMBOL) / POINT + 1.0 for shown, *_ in listed)])
+    symbols, numbers, links = Markup(""), Markup(""), Markup("")
+    for shown, value, unit, address in listed:
+        needed = text.number_width(value, SANS_REGULAR, OPERAND) + metrics.width(SANS_REGULAR, OPERAND, " " + unit)
+        below = bool(unit) and needed / POINT > SYMBOL_ROOM + VALUE_ROOM - edge
+        end = Markup("<br><br>") if below else Markup("<br>")
+        symbols += text.symbol(shown) + end
+        links += context.link(address) + end
+        numbers += text.number(value) + (Markup("<br>") if below else SANS_GAP if unit else "") + unit + Markup("<br>")
+    return {"symbols": symbols, "numbers": numbers, "links": links, "edge": f"{edge:.1f}mm" if edge > SYMBOL_ROOM else ""}
 
 
 def _indent(value: str, face: metrics.Face, size: float) -> float:
@@ -118,13 +124,24 @@ def result(line: Mapping[str, Any]) -> dict[str, Any]:
     head, value, record_unit = line["headline"], line["value"], text.unit(line["unit"])
     name = text.unit(head["unit"])
     head_indent, record_indent = _indent(head["text"], SEMIBOLD, HEADLINE), _indent(value, SANS_REGULAR, RECORD)
-    head_end = head_indent + text.number_width(head["text"], SEMIBOLD, HEADLINE) + metrics.width(SANS_REGULAR, 8, " " + name)
+    head_end = (
+        head_indent + text.number_width(head["text"], SEMIBOLD, HEADLINE) + metrics.width(SANS_REGULAR, 8, " " + name)
+    )
     differs = record_unit if record_unit != name else ""
-    record_end = record_indent + text.number_width(value, SANS_REGULAR, RECORD) + metrics.width(SANS_REGULAR, RECORD, " " + differs)
+    record_end = (
+        record_indent
+        + text.number_width(value, SANS_REGULAR, RECORD)
+        + metrics.width(SANS_REGULAR, RECORD, " " + differs)
+    )
     return {
-        "head": text.number(head["text"], serif=True), "unit": name, "indent": f"{head_indent:.1f}pt",
-        "below": head_end > RESULT_WIDTH * POINT, "record": text.number(value), "record_unit": differs,
-        "record_indent": f"{record_indent:.1f}pt", "record_below": record_end > RESULT_WIDTH * POINT,
+        "head": text.number(head["text"], serif=True),
+        "unit": name,
+        "indent": f"{head_indent:.1f}pt",
+        "below": head_end > RESULT_WIDTH * POINT,
+        "record": text.number(value),
+        "record_unit": differs,
+        "record_indent": f"{record_indent:.1f}pt",
+        "record_below": record_end > RESULT_WIDTH * POINT,
         "key": line["key_result"],
     }
 
@@ -135,7 +152,9 @@ def sources(line: Mapping[str, Any], context: Context) -> list[Markup]:
     if line["kind"] == "conversion":
         row = context.factors.get((line["from"], line["to"]), "")
         factor = text.linear(line["factor"]) + " " if line["factor"] != "1" else ""
-        rows.append(Markup("{}exact{}").format(factor, Markup(', <a href="#{}">{}</a>').format(row, row) if row else ""))
+        rows.append(
+            Markup("{}exact{}").format(factor, Markup(', <a href="#{}">{}</a>').format(row, row) if row else "")
+        )
     if line["kind"] == "lookup":
         rows.append(Markup.escape(line["library"]))
     return [r for r in (*rows, Markup.escape(line["source"]), Markup.escape(line["note"])) if r]
@@ -145,8 +164,13 @@ def residuals(line: Mapping[str, Any]) -> list[dict[str, Any]]:
     """The three rows of a root; the middle one is the root as printed."""
     rows = zip(_ROOT_LABELS, line.get("residuals", []), strict=False)
     return [
-        {"label": label, "value": text.number(value), "sign": "" if residual.startswith("-") else "+", "residual": text.number(residual),
-         "root": label == _ROOT_LABELS[1]}
+        {
+            "label": label,
+            "value": text.number(value),
+            "sign": "" if residual.startswith("-") else "+",
+            "residual": text.number(residual),
+            "root": label == _ROOT_LABELS[1],
+        }
         for label, (value, residual) in rows
     ]
 
@@ -155,8 +179,13 @@ def view(line: Mapping[str, Any], context: Context) -> dict[str, Any]:
     """Everything the template prints of a computed line."""
     setting = formula_picture(line, context.names)
     return {
-        "address": line["address"], "kind": line["kind"], "title": line["title"],
-        "picture": picture(setting) if setting else "", "place": line["function"] if line["kind"] == "lookup" and not line["operands"] else "",
-        "operands": [operand(o, context) for o in line["operands"]],
-        "sources": sources(line, context), "result": result(line), "residuals": residuals(line),
+        "address": line["address"],
+        "kind": line["kind"],
+        "title": line["title"],
+        "picture": picture(setting) if setting else "",
+        "place": line["function"] if line["kind"] == "lookup" and not line["operands"] else "",
+        "rests": operands(line, context) if line["operands"] else None,
+        "sources": Markup("<br>").join(sources(line, context)),
+        "result": result(line),
+        "residuals": residuals(line),
     }

@@ -41,7 +41,14 @@ def render(record: Mapping[str, Any], attachments: Sequence[Attached]) -> bytes:
     _only_known_characters(html)
     issued = datetime.fromisoformat(record["calculation"]["date"]).replace(tzinfo=UTC)
     files = [
-        weasyprint.Attachment(string=content, name=name, description=description, created=issued, modified=issued, relationship=relationship)
+        weasyprint.Attachment(
+            string=content,
+            name=name,
+            description=description,
+            created=issued,
+            modified=issued,
+            relationship=relationship,
+        )
         for name, content, description, relationship in attachments
     ]
     base = find_resource("templates", "package.html").as_uri()
@@ -59,7 +66,9 @@ def fill(record: Mapping[str, Any]) -> str:
     from jinja2 import Environment, FileSystemLoader, StrictUndefined
 
     folder = find_resource("templates", "package.html").parent
-    environment = Environment(loader=FileSystemLoader(folder), autoescape=True, undefined=StrictUndefined, trim_blocks=True)
+    environment = Environment(
+        loader=FileSystemLoader(folder), autoescape=True, undefined=StrictUndefined, trim_blocks=True
+    )
     return environment.get_template("package.html").render(context(record), faces=metrics.FACES)
 
 
@@ -141,7 +150,10 @@ def _dated(issued: datetime) -> Iterator[None]:
 
 def _finish(document: Any, pdf: Any) -> None:
     """Refuse foreign fonts; list each attachment once."""
-    bundled = {_plain(f"{face.family} {'' if face.weight == 400 else 'SemiBold'} {'' if face.style == 'normal' else 'Italic'}") for face in metrics.FACES}
+    bundled = {
+        _plain(f"{face.family} {'' if face.weight == 400 else 'SemiBold'} {'' if face.style == 'normal' else 'Italic'}")
+        for face in metrics.FACES
+    }
     for item in pdf.objects:
         if isinstance(item, dict) and item.get("Type") == "/Font" and "BaseFont" in item:
             name = str(item["BaseFont"]).partition("+")[2]

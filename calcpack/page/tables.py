@@ -12,7 +12,12 @@ from . import glyphs, layout, metrics, text
 from .lines import POINT, Context, picture, result, values
 from .numerals import numeral
 
-STATUS_WORDS = {"verified": "verified", "maker": "maker’s, unconfirmed", "preliminary": "preliminary", "assumed": "assumed"}
+STATUS_WORDS = {
+    "verified": "verified",
+    "maker": "maker’s, unconfirmed",
+    "preliminary": "preliminary",
+    "assumed": "assumed",
+}
 #: A row of this form stands in the table alone; any other is a line printed in full above it.
 ROW_FORMULAS = ("n * K * h_V", "K * h_V")
 VERDICTS = ("met", "not met", "not applicable", "not assessed")
@@ -40,13 +45,20 @@ def input_row(line: Mapping[str, Any], context: Context) -> dict[str, Any]:
     unit, _, reference = words.partition(" ")
     status = p.get("status", "") if line["kind"] == "given" else "constant"
     return {
-        "address": line["address"], "symbol": text.symbol(context.names[line["symbol"]]), "title": line["title"],
+        "address": line["address"],
+        "symbol": text.symbol(context.names[line["symbol"]]),
+        "title": line["title"],
         "source": _origin(line),
-        "number": text.number(number) if number else "", "unit": unit if number else "", "words": reference if number else words,
+        "number": text.number(number) if number else "",
+        "unit": unit if number else "",
+        "words": reference if number else words,
         "indent": _aligned(number) if number else "0",
-        "used": text.number(used["value"]), "used_unit": text.unit(used["unit"]), "used_indent": _aligned(used["value"]),
+        "used": text.number(used["value"]),
+        "used_unit": text.unit(used["unit"]),
+        "used_indent": _aligned(used["value"]),
         "link": context.link(used["address"]) if used["address"] != line["address"] else "",
-        "mark": glyphs.status(status) if status != "constant" else "", "status": STATUS_WORDS.get(status, status or "not stated"),
+        "mark": glyphs.status(status) if status != "constant" else "",
+        "status": STATUS_WORDS.get(status, status or "not stated"),
     }
 
 
@@ -64,14 +76,22 @@ def losses(table: Mapping[str, Any], context: Context) -> dict[str, Any]:
     rows = [_loss_row(row, context) for row in table["rows"]]
     worked = next((row for row in table["rows"] if row["row"] == table["worked"]), None)
     return {
-        "title": table["title"], "rows": rows, "total": _total(table["total"], context),
-        "shares": _shares(table), "worked": _worked(worked, context) if worked else None,
+        "title": table["title"],
+        "rows": rows,
+        "total": _total(table["total"], context),
+        "shares": _shares(table),
+        "worked": _worked(worked, context) if worked else None,
     }
 
 
 def _cells(line: Mapping[str, Any], context: Context) -> dict[str, Any]:
     shown = result(line)
-    return {"loss": shown["head"], "record": shown["record"], "unit": shown["unit"], "link": context.link(line["address"])}
+    return {
+        "loss": shown["head"],
+        "record": shown["record"],
+        "unit": shown["unit"],
+        "link": context.link(line["address"]),
+    }
 
 
 def _loss_row(row: Mapping[str, Any], context: Context) -> dict[str, Any]:
@@ -80,20 +100,35 @@ def _loss_row(row: Mapping[str, Any], context: Context) -> dict[str, Any]:
     inside = line["formula"] in ROW_FORMULAS
     operands.setdefault("n", (Markup("1"), Markup("")))
     return {
-        "row": row["row"], "element": row["element"], "inside": inside, "address": line["address"], "source": line["source"],
-        "factors": [operands[s] for s in ("n", "K", "h_V")] if inside else [], **_cells(line, context),
+        "row": row["row"],
+        "element": row["element"],
+        "inside": inside,
+        "address": line["address"],
+        "source": line["source"],
+        "factors": [operands[s] for s in ("n", "K", "h_V")] if inside else [],
+        **_cells(line, context),
     }
 
 
 def _total(line: Mapping[str, Any], context: Context) -> dict[str, Any]:
-    setting = layout.line(line["symbol"], formula.parse(line["formula"]), values(line), context.names, measure=118 * POINT)
-    return {"address": line["address"], "title": line["title"], "key": line["key_result"], "picture": picture(setting), "source": line["source"],
-            **_cells(line, context)}
+    setting = layout.line(
+        line["symbol"], formula.parse(line["formula"]), values(line), context.names, measure=118 * POINT
+    )
+    return {
+        "address": line["address"],
+        "title": line["title"],
+        "key": line["key_result"],
+        "picture": picture(setting),
+        "source": line["source"],
+        **_cells(line, context),
+    }
 
 
 def _worked(row: Mapping[str, Any], context: Context) -> dict[str, Any]:
     line = row["line"]
-    setting = layout.line(line["symbol"], formula.parse(line["formula"]), values(line), context.names, measure=118 * POINT)
+    setting = layout.line(
+        line["symbol"], formula.parse(line["formula"]), values(line), context.names, measure=118 * POINT
+    )
     return {"row": row["row"], "picture": picture(setting), "value": text.quantity(line["value"], line["unit"])}
 
 
@@ -127,9 +162,18 @@ def rule(r: Mapping[str, Any], context: Context) -> dict[str, Any]:
         record = {r[s]["symbol"]: r[s]["value"] for s in ("left", "right")}
         inequality = picture(layout.line(None, formula.parse(r["formula"]), record, context.names, measure=60 * POINT))
     return {
-        "address": r["address"], "title": r["title"], "verdict": r["verdict"], "glyph": glyphs.verdict(r["verdict"]),
-        "word": capital(r["verdict"]), "about": r["about"], "reason": r["reason"], "criterion": r["criterion"], "source": r["source"], "sides": sides,
-        "relation": r["relation"], "inequality": inequality,
+        "address": r["address"],
+        "title": r["title"],
+        "verdict": r["verdict"],
+        "glyph": glyphs.verdict(r["verdict"]),
+        "word": capital(r["verdict"]),
+        "about": r["about"],
+        "reason": r["reason"],
+        "criterion": r["criterion"],
+        "source": r["source"],
+        "sides": sides,
+        "relation": r["relation"],
+        "inequality": inequality,
         "margin": signed(margin["headline"]["text"], margin["headline"]["unit"]) if margin else "",
         "margin_record": signed(margin["value"], margin["unit"]) if margin else "",
         "percent": signed(margin["percent"], "%") if margin and margin["percent"] else "",
@@ -138,8 +182,12 @@ def rule(r: Mapping[str, Any], context: Context) -> dict[str, Any]:
 
 
 def _side(side: Mapping[str, Any], context: Context) -> dict[str, Any]:
-    return {"number": text.number(side["headline"]["text"], serif=True), "unit": text.unit(side["headline"]["unit"]), "name": side["name"],
-            "link": context.link(side["address"])}
+    return {
+        "number": text.number(side["headline"]["text"], serif=True),
+        "unit": text.unit(side["headline"]["unit"]),
+        "name": side["name"],
+        "link": context.link(side["address"]),
+    }
 
 
 def signed(value: str, unit: str) -> Any:

@@ -20,7 +20,9 @@ from .numerals import SANS_GAP, SERIF_GAP, numeral
 from .typeset import Display, runs
 
 #: Characters with an exact equal among the bundled ones.
-EQUALS = str.maketrans({"\u2011": "-", "\u2010": "-", "\u00b5": "μ", "\u2126": "Ω", "\u212a": "K", "\t": "    ", "\r": None})
+EQUALS = str.maketrans(
+    {"\u2011": "-", "\u2010": "-", "\u00b5": "μ", "\u2126": "Ω", "\u212a": "K", "\t": "    ", "\r": None}
+)
 
 
 @cache

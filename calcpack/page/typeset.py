@@ -112,7 +112,11 @@ class Setter:
         parts = [boxes.text(n.text(SERIF_GAP), REGULAR, em)]
         if n.exponent:
             tight = boxes.gap(0.04 * em)
-            parts += [tight, boxes.text("×10", REGULAR, em), self._raised(boxes.text(n.power, REGULAR, self.em(depth + 1)), em)]
+            parts += [
+                tight,
+                boxes.text("×10", REGULAR, em),
+                self._raised(boxes.text(n.power, REGULAR, self.em(depth + 1)), em),
+            ]
         box = boxes.row(parts)
         weak = (n.negative and self.numeric) or (bool(n.exponent) and level >= _LEVEL["**"])
         return self.parenthesised(box, depth) if weak else box

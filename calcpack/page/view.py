@@ -17,8 +17,20 @@ LISTING_SIZE, LISTING_WIDTH = 7.8, 128 * POINT
 LONG_STATEMENT = 230
 FIGURE_SPACE = "\u2007"
 SECTIONS = (
-    "Purpose and scope", "Criteria", "Method", "Inputs", "Assumptions", "References", "System as modelled", "Computation",
-    "Checks against criteria", "Limits of use", "Cautions", "Software and rounding", "Nomenclature and conversions", "Input file as read",
+    "Purpose and scope",
+    "Criteria",
+    "Method",
+    "Inputs",
+    "Assumptions",
+    "References",
+    "System as modelled",
+    "Computation",
+    "Checks against criteria",
+    "Limits of use",
+    "Cautions",
+    "Software and rounding",
+    "Nomenclature and conversions",
+    "Input file as read",
 )
 
 
@@ -28,9 +40,14 @@ def context(record: Mapping[str, Any]) -> dict[str, Any]:
     shared = Context(text.display(r["nomenclature"]), _addresses(r), _factors(r))
     paper = PAPERS[r["calculation"]["paper"]]
     return {
-        "r": r, "c": r["calculation"], "sections": SECTIONS, "link": shared.link, "check": glyphs.check(),
+        "r": r,
+        "c": r["calculation"],
+        "sections": SECTIONS,
+        "link": shared.link,
+        "check": glyphs.check(),
         "page": {"size": paper[0], "left": paper[1], "right": paper[2], "paper": r["calculation"]["paper"]},
-        "cover": _cover(r, shared), "inputs": [tables.input_row(line, shared) for line in r["inputs"]],
+        "cover": _cover(r, shared),
+        "inputs": [tables.input_row(line, shared) for line in r["inputs"]],
         "unused": [{**u, "given": text.given(u["given"])} for u in r["unused"]],
         "parts": [_part(p, shared) for p in r["computation"]],
         "rules": [tables.rule(rule, shared) for rule in r["checks"]],
@@ -39,20 +56,40 @@ def context(record: Mapping[str, Any]) -> dict[str, Any]:
         "margin_key": glyphs.margin_bar("6"),
         "elevation": glyphs.data_uri(figures.elevation(r["sketch"])) if r["sketch"] else "",
         "rounding": [_rounding(row, shared) for row in r["rounding"]],
-        "conversions": [{**row, "id": f"C{i}", "factor": text.linear(row["factor"]), "formula": text.linear(row["formula"]) if "+" in row["formula"] else ""} for i, row in enumerate(r["conversions"], 1)],
-        "nomenclature": [{**n, "symbol": text.symbol(shared.names[n["name"]]), "unit": text.unit(n["unit"]) or "–"} for n in r["nomenclature"]],
-        "strip_title": cut(r["calculation"]["title"], 57 * POINT, 8.5), "listing": listing(r["input_file"]["text"]), "fingerprint": fours(r["fingerprint"]), "input_fingerprint": fours(r["input_file"]["sha256"]),
+        "conversions": [
+            {
+                **row,
+                "id": f"C{i}",
+                "factor": text.linear(row["factor"]),
+                "formula": text.linear(row["formula"]) if "+" in row["formula"] else "",
+            }
+            for i, row in enumerate(r["conversions"], 1)
+        ],
+        "nomenclature": [
+            {**n, "symbol": text.symbol(shared.names[n["name"]]), "unit": text.unit(n["unit"]) or "–"}
+            for n in r["nomenclature"]
+        ],
+        "strip_title": cut(r["calculation"]["title"], 57 * POINT, 8.5),
+        "listing": listing(r["input_file"]["text"]),
+        "fingerprint": fours(r["fingerprint"]),
+        "input_fingerprint": fours(r["input_file"]["sha256"]),
     }
 
 
 def _addresses(r: Mapping[str, Any]) -> frozenset[str]:
-    found = {line["address"] for line in r["inputs"]} | {a["address"] for a in r["assumptions"]} | {c["address"] for c in r["checks"]}
+    found = (
+        {line["address"] for line in r["inputs"]}
+        | {a["address"] for a in r["assumptions"]}
+        | {c["address"] for c in r["checks"]}
+    )
     for part in r["computation"]:
         for block in part["blocks"]:
             if "line" in block:
                 found.add(block["line"]["address"])
             elif "losses" in block:
-                found |= {row["line"]["address"] for row in block["losses"]["rows"]} | {block["losses"]["total"]["address"]}
+                found |= {row["line"]["address"] for row in block["losses"]["rows"]} | {
+                    block["losses"]["total"]["address"]
+                }
     return frozenset(found)
 
 
@@ -67,15 +104,31 @@ def _cover(r: Mapping[str, Any], shared: Context) -> dict[str, Any]:
     shown = sorted(measured, key=lambda c: (c["address"] != cover["governing"], Decimal(c["margin"]["percent"])))
     counts = cover["counts"]
     return {
-        "glyph": glyphs.verdict(cover["verdict"], 14.0), "word": tables.capital(cover["verdict"]), "statement": cover["statement"],
+        "glyph": glyphs.verdict(cover["verdict"], 14.0),
+        "word": tables.capital(cover["verdict"]),
+        "statement": cover["statement"],
         "long": len(cover["statement"]) > LONG_STATEMENT,
-        "tally": [(n, word) for word, n in cover["tally"].items() if n], "governs": tables.rule(governing, shared) if governing else None,
+        "tally": [(n, word) for word, n in cover["tally"].items() if n],
+        "governs": tables.rule(governing, shared) if governing else None,
         "rules": [tables.rule(c, shared) for c in shown[:2]],
-        "counts": [(counts[k], words) for k, words in (("verified", "verified"), ("maker", "unconfirmed"), ("preliminary", "preliminary"),
-                                                       ("assumed", "assumed"), ("without source", "without source"))],
-        "unverified": [{**u, "link": shared.link(u["address"]), "status": tables.STATUS_WORDS.get(u["status"], u["status"])} for u in cover["unverified"]],
-        "confirm": _confirmations(r, shared), "rounding": cover["rounding"],
-        "owner": cut(r["calculation"]["owner"], 75 * POINT, 8.8), "project": cut(r["calculation"]["project"], 75 * POINT, 8.8),
+        "counts": [
+            (counts[k], words)
+            for k, words in (
+                ("verified", "verified"),
+                ("maker", "unconfirmed"),
+                ("preliminary", "preliminary"),
+                ("assumed", "assumed"),
+                ("without source", "without source"),
+            )
+        ],
+        "unverified": [
+            {**u, "link": shared.link(u["address"]), "status": tables.STATUS_WORDS.get(u["status"], u["status"])}
+            for u in cover["unverified"]
+        ],
+        "confirm": _confirmations(r, shared),
+        "rounding": cover["rounding"],
+        "owner": cut(r["calculation"]["owner"], 75 * POINT, 8.8),
+        "project": cut(r["calculation"]["project"], 75 * POINT, 8.8),
         "title": cut(r["calculation"]["title"], 120 * POINT, 8.8),
     }
 
@@ -101,13 +154,17 @@ def _part(part: Mapping[str, Any], shared: Context) -> dict[str, Any]:
             continue
         if not runs or "rows" not in runs[-1]:
             runs.append({"rows": []})
-        runs[-1]["rows"].append({"group": block["group"]} if "group" in block else {"line": view(block["line"], shared)})
+        runs[-1]["rows"].append(
+            {"group": block["group"]} if "group" in block else {"line": view(block["line"], shared)}
+        )
     return {"title": part["title"], "scope": part["scope"], "runs": runs}
 
 
 def _rounding(row: Mapping[str, Any], shared: Context) -> dict[str, Any]:
     return {
-        "link": shared.link(row["address"]), "what": row["what"], "unit": text.unit(row["unit"]),
+        "link": shared.link(row["address"]),
+        "what": row["what"],
+        "unit": text.unit(row["unit"]),
         **{k: text.number(row[k]) for k in ("record", "shadow", "drift", "limit")},
     }
 

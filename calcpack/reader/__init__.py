@@ -2,3 +2,10 @@
 
 Imports nothing else of calcpack, so that an error in what writes the page cannot hide in what reads it.
 """
+
+from .book import Finding
+from .glyphs import NotAPackage
+from .reading import verify
+from .report import Report
+
+__all__ = ["Finding", "NotAPackage", "Report", "verify"]

@@ -77,7 +77,8 @@ def bands(sheets: Iterable[Sheet]) -> Iterator[Band]:
 
 def _head(band: Band) -> str:
     """The column heads at the foot of a band, if it holds any: they begin with ``line`` or ``rule``."""
+    found = ""
     for row in rows(g for g in band.glyphs if not g.serif and g.colour == SECOND):
         if row.glyphs[0].x < band.edge + NUMBER[1] * MM and str(row).split()[0] in ("line", "rule"):
-            return str(row)
-    return ""
+            found = str(row)
+    return found

@@ -31,6 +31,7 @@ class Book:
     """Addresses in order of reading with the values another line may take from them."""
 
     values: dict[str, tuple[Quantity, ...]] = field(default_factory=dict)
+    cites: dict[str, set[str]] = field(default_factory=dict)
     classes: dict[str, Class] = field(default_factory=dict)
     findings: list[Finding] = field(default_factory=list)
     unread: list[Finding] = field(default_factory=list)
@@ -46,6 +47,10 @@ class Book:
         if not any(quantity.value == q.value and quantity.unit == q.unit for q in known):
             return f"differs from line {address}", str(quantity), " or ".join(map(str, known)) or "nothing readable"
         return None
+
+    def cite(self, by: str, address: str) -> None:
+        """Remember that line ``by`` rests on ``address``."""
+        self.cites.setdefault(by, set()).add(address)
 
     def enter(self, address: str, values: Iterable[Quantity]) -> None:
         """Let later lines cite ``address``."""

@@ -1,62 +1,49 @@
-"""Exact factors of conversions as printed in running text: ``77/34 560``, ``0.304 8²/(0.453 592 37 × 9.806 65)``."""
+"""Exact factors of conversions as printed in running text: ``77/34 560``, ``0.304 8²/(0.453 592 37 × 9.8)``."""
 
 from __future__ import annotations
 
 import re
+from decimal import Decimal
 from fractions import Fraction
 
+from .arithmetic import Undefined, exact
 from .notation import Parser, Token, Unread
 from .text import THIN
-from .tree import Number, Op, Tree
-from .arithmetic import Undefined, exact
+from .tree import Number, Symbol, Tree
 from .units import factor
-from decimal import Decimal
 
 _SUPERSCRIPTS = str.maketrans("⁰¹²³⁴⁵⁶⁷⁸⁹⁻", "0123456789-")
-_TOKEN = re.compile(rf"\s*(?:(\d[\d{THIN}]*(?:\.[\d{THIN}]+)?)|([⁻⁰¹²³⁴⁵⁶⁷⁸⁹]+)|([×/()]))")
+_TOKEN = re.compile(rf"\s*(?:(\d[\d{THIN}]*(?:\.[\d{THIN}]+)?)|([⁻⁰¹²³⁴⁵⁶⁷⁸⁹]+)|(x)|([+−×/()]))\s*")
+
+
+def printed_tree(text: str) -> Tree:
+    """A form written in one row, its only symbol ``x``.  Raises ``Unread``."""
+    found, at = [], 0
+    while at < len(text):
+        match = _TOKEN.match(text, at)
+        if match is None:
+            raise Unread(f"{text!r} is no factor")
+        digits, power, unknown, sign = match.groups()
+        if digits:
+            found.append(Token("number", Number(Decimal(digits.replace(THIN, "")))))
+        elif power:
+            found.append(Token("power", Number(Decimal(power.translate(_SUPERSCRIPTS)))))
+        else:
+            found.append(Token("symbol", Symbol(unknown)) if unknown else Token(sign))
+        at = match.end()
+    return Parser(found).whole()
 
 
 def printed_factor(text: str) -> Fraction:
     """The value of a factor written in one row.  Raises ``Unread``."""
     try:
-        return exact(_product(_tokens(text.strip())))
+        return exact(printed_tree(text))
     except Undefined as error:
         raise Unread(f"{text!r}: {error}") from None
 
 
 def same_factor(source: str, before: str, after: str) -> tuple[str, str] | None:
     """The factor printed at the head of ``source`` and the exact one, where they differ."""
-    text = source.partition(" exact")[0]
+    text = source.partition("exact")[0].strip() or "1"  # a unit that differs by its zero alone prints no factor
     right = factor(before, after)
     return None if printed_factor(text) == right else (text, str(right))
-
-
-def _tokens(text: str) -> list[Token]:
-    found, at = [], 0
-    while at < len(text):
-        match = _TOKEN.match(text, at)
-        if match is None:
-            raise Unread(f"{text!r} is no factor")
-        digits, power, sign = match.groups()
-        if digits:
-            found.append(Token("number", Number(Decimal(digits.replace(THIN, "")))))
-        elif power:
-            found.append(Token("power", Number(Decimal(power.translate(_SUPERSCRIPTS)))))
-        else:
-            found.append(Token(sign))
-        at = match.end()
-    return found
-
-
-def _product(tokens: list[Token]) -> Tree:
-    """A product over a product: one ``/`` at the most outside brackets."""
-    depth, cut = 0, None
-    for i, token in enumerate(tokens):
-        depth += {"(": 1, ")": -1}.get(token.kind, 0)
-        if token.kind == "/" and depth == 0:
-            if cut is not None:
-                raise Unread("two slashes in one factor")
-            cut = i
-    if cut is None:
-        return Parser(tokens).whole()
-    return Op("/", (Parser(tokens[:cut]).whole(), Parser(tokens[cut + 1 :]).whole()))

@@ -58,7 +58,9 @@ def read_line(band: Band) -> Line:
 
 def picture(band: Band, left: float, right: float) -> Marks:
     """The formula between two distances from the block's edge (mm): the serif but for the title, and the bars."""
-    glyphs = tuple(g for g in band.column(left, right) if g.serif and not g.bold and not _title(g))
+    glyphs = tuple(
+        g for g in band.column(left, right) if g.serif and g.colour == INK and not g.bold and not _title(g)
+    )
     return Marks(glyphs, tuple(band.inner_bars(left, right)))
 
 

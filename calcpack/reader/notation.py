@@ -285,10 +285,11 @@ class Parser:
             self.take()
         tree = self.power()
         tree = negative(tree) if minus else tree
-        while self.next == "×" or self.next in ("symbol", "function", "tree", "sum", "("):
-            if self.next == "×":
+        while self.next in ("×", "/", "symbol", "function", "tree", "sum", "("):
+            op = "/" if self.next == "/" else "*"
+            if self.next in ("×", "/"):
                 self.take()
-            tree = Op("*", (tree, self.power()))
+            tree = Op(op, (tree, self.power()))
         return tree
 
     def power(self) -> Tree:

@@ -24,6 +24,7 @@ def recompute(line: Line, book: Book) -> Class:
     cannot be checked at all.
     """
     for operand in line.operands:
+        book.cite(line.address, operand.address)
         if wrong := book.citation(operand.quantity, operand.address):
             book.note(line.sheet, line.address, f"{operand.symbol} {wrong[0]}", *wrong[1:])
     _headline(line, book)

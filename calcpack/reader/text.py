@@ -76,6 +76,11 @@ def scalar(printed: str) -> tuple[Decimal, str]:
     return value.copy_negate() if sign in ("−", "-") else value, printed[match.end() :].strip()
 
 
+def is_number(printed: str) -> bool:
+    """Whether ``printed`` is one number and nothing else."""
+    return _NUMBER.fullmatch(printed) is not None
+
+
 def symbol(glyphs: Sequence[Glyph]) -> Symbol:
     """The symbol that serif ``glyphs`` print: letters of the full size are its base, smaller ones its subscript."""
     if not glyphs:

@@ -1,0 +1,53 @@
+"""Section 4: every input as given and as used, the latter by the line that converts it."""
+
+from __future__ import annotations
+
+from dataclasses import dataclass
+
+from .bands import ACCENT, INK, Band
+from .book import Book
+from .line import cited
+from .text import rows, scalar, words
+from .units import Quantity, named
+
+AS_GIVEN, AS_USED = (73.0, 98.0), (98.0, 129.0)
+
+
+@dataclass(frozen=True)
+class Input:
+    """A row of the inputs; ``by`` is the line that converts it, empty where it is used as given."""
+
+    sheet: int
+    address: str
+    given: Quantity
+    used: Quantity
+    by: str
+
+
+def read_input(band: Band) -> Input:
+    """The input that ``band`` holds.  Raises :class:`~calcpack.reader.notation.Unread`."""
+    used = band.column(*AS_USED)
+    by = cited(used) if any(g.colour == ACCENT for g in used) else ""
+    given = _quantity(words(band.column(*AS_GIVEN)))
+    own = rows(g for g in used if g.colour == INK)
+    return Input(band.sheet, band.address, given, _quantity(str(own[0]) if own else ""), by)
+
+
+def _quantity(printed: str) -> Quantity:
+    value, unit = scalar(printed)
+    return Quantity(value, named(unit))
+
+
+def enter(row: Input, book: Book) -> None:
+    """Let lines cite the input, and compare what is used with what is given where nothing converts it."""
+    book.enter(row.address, [row.given])
+    if not row.by and row.used != row.given:
+        book.note(row.sheet, row.address, "used otherwise than given, and no line converts it", row.used, row.given)
+
+
+def settle(row: Input, book: Book) -> None:
+    """Once every line is read: the value as used is the result of the line that converts the input."""
+    if row.by and (wrong := book.citation(row.used, row.by)):
+        book.note(row.sheet, row.address, f"as used: {wrong[0]}", *wrong[1:])
+    if row.by and row.address not in book.cites.get(row.by, ()):
+        book.note(row.sheet, row.address, f"line {row.by} does not convert this input")

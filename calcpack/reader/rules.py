@@ -1,0 +1,126 @@
+"""Section 9: rule checks.  Both sides are results cited, the inequality decides the verdict, the margin is their room."""
+
+from __future__ import annotations
+
+from collections.abc import Sequence
+from dataclasses import dataclass, replace
+from decimal import ROUND_CEILING, ROUND_FLOOR, Decimal
+from fractions import Fraction
+
+from .arithmetic import WIDE, of_record, rounded
+from .bands import ACCENT, INK, SECOND, Band
+from .book import Book
+from .glyphs import Glyph
+from .line import cited, picture
+from .notation import Unread
+from .picture import forms
+from .text import rows, scalar, words
+from .tree import Number
+from .units import Quantity, converted, factor, named
+
+LEFT, RELATION, RIGHT, MARGIN = (68.0, 95.0), (95.0, 100.0), (100.0, 127.0), (127.0, 150.0)
+TEXT = (20.0, 127.0)
+VERDICTS = ("met", "not met", "not applicable", "not assessed")
+#: Relation -> whether more on the left is better.
+_RISING = {"≥": True, ">": True, "≤": False, "<": False}
+
+
+@dataclass(frozen=True)
+class Side:
+    """One side as reported, and the line it is taken from."""
+
+    shown: Quantity
+    address: str
+
+
+def read_rule(band: Band, givens: dict[str, Quantity], book: Book) -> str:
+    """Check one rule and return its verdict; ``givens`` are inputs as given, by the line that holds them as used.
+
+    Raises :class:`~calcpack.reader.notation.Unread`.
+    """
+    verdict, upper = _verdict(band)
+    relation = words(upper.column(*RELATION))
+    if not relation:
+        if verdict == "met":
+            book.note(band.sheet, band.address, "met without two sides to compare")
+        return verdict
+    left, right = _side(upper.column(*LEFT)), _side(upper.column(*RIGHT))
+    if relation not in _RISING:
+        raise Unread(f"the relation {relation!r} is not known")
+    rising = _RISING[relation]
+    sides = _inequality(band, relation, left, right, book)
+    _reported(band, "left side", left, sides[0], ROUND_FLOOR if rising else ROUND_CEILING, givens, book)
+    _reported(band, "right side", right, sides[1], ROUND_CEILING if rising else ROUND_FLOOR, givens, book)
+    a, b = sides[0].value, sides[1].value
+    holds = {"≥": a >= b, ">": a > b, "≤": a <= b, "<": a < b}[relation]
+    if verdict == "not applicable" or (verdict != "not assessed" and (verdict == "met") != holds):
+        book.note(band.sheet, band.address, "the inequality gives another verdict", verdict, "met" if holds else "not met")
+    _margin(upper, WIDE.subtract(a, b) if rising else WIDE.subtract(b, a), sides[1], book)
+    return verdict
+
+
+def _verdict(band: Band) -> tuple[str, Band]:
+    """The verdict's word, and what stands above its row."""
+    for row in rows(g for g in band.column(*TEXT) if g.bold and not g.serif and g.colour == INK):
+        word = str(row).partition(":")[0].lower()
+        if word in VERDICTS:
+            return word, replace(band, glyphs=tuple(g for g in band.glyphs if g.y > row.y + 5))
+    raise Unread("no verdict")
+
+
+def _side(glyphs: Sequence[Glyph]) -> Side:
+    number, rest = scalar(words(g for g in glyphs if g.serif))
+    if rest:
+        raise Unread(f"{rest!r} after a side's number")
+    unit = named(words(g for g in glyphs if not g.serif and g.colour == INK))
+    return Side(Quantity(number, unit), cited(glyphs))
+
+
+def _inequality(band: Band, relation: str, left: Side, right: Side, book: Book) -> tuple[Quantity, Quantity]:
+    """The two numbers compared, each the result of the line its side cites."""
+    found = forms(picture(band, *TEXT))
+    if len(found) != 2 or any(form.relation != relation for form in found):
+        raise Unread("no inequality in symbols and in numbers")
+    sides = []
+    for printed, side in ((found[1].left, left), (found[1].right, right)):
+        if not isinstance(printed, Number):
+            raise Unread("an inequality of something else than two numbers")
+        known = book.values.get(side.address, ())
+        unit = known[0].unit if known else ""
+        if wrong := book.citation(Quantity(printed.value, unit), side.address):
+            book.note(band.sheet, band.address, f"the inequality {wrong[0]}", *wrong[1:])
+        sides.append(Quantity(printed.value, unit))
+    if sides[0].unit != sides[1].unit:
+        raise Unread("two sides in different units")
+    return sides[0], sides[1]
+
+
+def _reported(
+    band: Band, what: str, side: Side, record: Quantity, mode: str, givens: dict[str, Quantity], book: Book
+) -> None:
+    """A side is reported as its input was given, else rounded against the verdict."""
+    if givens.get(side.address) == side.shown:
+        return
+    there = converted(Fraction(record.value), record.unit, side.shown.unit)
+    found = rounded(there, side.shown.value, mode)
+    if found != side.shown.value:
+        shown = Quantity(found, side.shown.unit)
+        book.note(band.sheet, band.address, f"the {what} is not the result of record", side.shown, shown)
+
+
+def _margin(band: Band, room: Decimal, limit: Quantity, book: Book) -> None:
+    """The margin as shown, its per cent of the limit and its digits of record."""
+    cell = band.column(*MARGIN)
+    number, rest = scalar(words(g for g in cell if g.bold))
+    unit, margin = named(rest), of_record(room)
+    shown = rounded(Fraction(margin) * factor(limit.unit, unit), number, ROUND_FLOOR)
+    if shown != number:
+        book.note(band.sheet, band.address, "the margin is another", number, shown)
+    for row in rows(g for g in cell if g.colour == SECOND and not g.bold):
+        printed, name = scalar(str(row))
+        if name == "%":
+            per_cent = WIDE.divide(WIDE.multiply(margin, Decimal(100)), abs(limit.value))
+            if rounded(per_cent, printed, ROUND_FLOOR) != printed:
+                book.note(band.sheet, band.address, "the margin in per cent is another", printed, per_cent)
+        elif Quantity(printed, named(name)) != Quantity(margin, limit.unit):
+            book.note(band.sheet, band.address, "the margin of record is another", row, f"{margin} {limit.unit}")

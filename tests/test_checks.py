@@ -1,0 +1,133 @@
+"""Every check value of ``checks.yaml`` through our own equations and look-ups, in both display systems."""
+
+from __future__ import annotations
+
+from decimal import Decimal
+from fractions import Fraction
+from functools import cache
+from pathlib import Path
+from typing import Any
+
+import pint
+import pytest
+import yaml
+
+from calcpack import lookup
+from calcpack.catalog import EQUATION
+from calcpack.fitting_set import CRANE
+from calcpack.ledger import Ledger
+from calcpack.number import last_unit
+from calcpack.quantity import parse
+from calcpack.symbols import NOMENCLATURE
+from calcpack.value import Value
+
+Check = dict[str, Any]
+FILE: dict[str, Any] = yaml.safe_load((Path(__file__).parent / "checks.yaml").read_text("utf-8"))
+CHECKS: list[Check] = FILE["checks"]
+PROVENANCE = {"retrieved", "library", "derived", "memory"}
+#: Kinds of quantity under which the text of a symbol's kind is read.
+_TYPED = {"ratio": "coefficient", "pressure": "pressure", "length": "elevation", "bore": "roughness"}
+
+
+@cache
+def _pint() -> pint.UnitRegistry[Any]:
+    return pint.UnitRegistry(non_int_type=Fraction)
+
+
+def amount(text: str) -> Fraction:
+    """A text of the file in SI, by pint: independent of our own units."""
+    head, _, name = text.partition(" ")
+    number = Fraction(head)
+    return Fraction((_pint().Quantity(number, name)).to_base_units().magnitude) if name else number
+
+
+def allowed(tolerance: str, expected: str) -> Fraction:
+    """What a figure may differ by, in SI."""
+    if tolerance == "exact":
+        return Fraction(0)
+    if tolerance.endswith("%"):
+        return abs(amount(expected)) * Fraction(tolerance.rstrip(" %")) / 100
+    return amount(tolerance)
+
+
+def entered(ledger: Ledger, symbol: str, text: str, number: int = 0) -> Value:
+    kind = NOMENCLATURE[symbol].kind
+    if symbol == "p_g":
+        kind = "gauge_pressure"
+    return ledger.given(symbol, f"{symbol} {number}", parse(text, _TYPED.get(kind, kind)))
+
+
+def computed(check: Check, system: str) -> dict[str, Value]:
+    """Every value of a check's chain, by its symbol."""
+    ledger = Ledger(system)
+    ledger.part("check", "")
+    values: dict[str, Any] = {}
+    for symbol, text in check.get("inputs", {}).items():
+        many = isinstance(text, list)
+        read = [entered(ledger, symbol, each, n) for n, each in enumerate(text if many else [text])]
+        values[symbol] = read if many else read[0]
+    for symbol in check.get("constants", []):
+        values[symbol] = ledger.constant(symbol)
+    if "bore" in check:
+        found = lookup.bore(*check["bore"])
+        values["D"] = ledger.tabulated("D", "bore", parse(f"{found.millimetres} mm", "bore"), found.place, EQUATION["bore_area"].source)
+    for name in check.get("water", []):
+        values[lookup.PROPERTIES[name].symbol] = ledger.look_up(name, values["T"])
+    for step in check.get("steps", []):
+        name, handed = (step, {}) if isinstance(step, str) else (step["equation"], step["with"])
+        values[EQUATION[name].result] = ledger.apply(name, values | {a: values[b] for a, b in handed.items()})
+    return values
+
+
+CHAINS = [c for c in CHECKS if "quantity" not in c and "fitting" not in c]
+
+
+@pytest.mark.parametrize("system", ["SI", "US"])
+@pytest.mark.parametrize("check", CHAINS, ids=[c["id"] for c in CHAINS])
+def test_the_published_figure_is_found(check: Check, system: str) -> None:
+    values = computed(check, system)
+    for symbol, expected in check["expected"].items():
+        value, room = values[symbol], allowed(check["tolerance"][symbol], expected)
+        full = abs(Fraction(value.shadow) - amount(expected))
+        printed = abs((Fraction(value.record) + value.unit.offset) * value.unit.factor - amount(expected))
+        unit_of_last_digit = Fraction(last_unit(value.record or Decimal(1))) * value.unit.factor
+        assert full <= room + Fraction(1, 10**12), f"{symbol}: {float(value.shadow)} for {expected}"
+        assert printed <= room + 2 * unit_of_last_digit, f"{symbol}: {value.record} {value.unit.name} for {expected}"
+
+
+UNITS = [c for c in CHECKS if "quantity" in c]
+
+
+@pytest.mark.parametrize("check", UNITS, ids=[c["id"] for c in UNITS])
+def test_the_published_unit_is_read(check: Check) -> None:
+    kind, text = check["quantity"]
+    for expected in check["expected"]["all"]:
+        room = allowed(check["tolerance"]["all"], expected)
+        assert abs(parse(text, kind).si() - amount(expected)) <= room
+
+
+FITTINGS = [c for c in CHECKS if "fitting" in c]
+
+
+@pytest.mark.parametrize("check", FITTINGS, ids=[c["id"] for c in FITTINGS])
+def test_the_published_coefficient_is_tabulated(check: Check) -> None:
+    entry = CRANE[tuple(check["fitting"])]
+    assert {"m": entry.m, "K": entry.K} == {"m": "", "K": ""} | check["expected"]
+
+
+def test_the_file_says_where_each_figure_comes_from() -> None:
+    ids = [c["id"] for c in CHECKS]
+    assert len(ids) == len(set(ids)), "ids are unique"
+    assert not set(ids) & set(FILE["left_out"])
+    for check in CHECKS:
+        assert check["source"] and check["check"] and check["because"], check["id"]
+        assert check["provenance"] in PROVENANCE, check["id"]
+        expected = set(check["expected"])
+        assert expected == set(check["tolerance"]), f"{check['id']}: a tolerance for each figure"
+    assert all(FILE["left_out"].values()), "a reason for each check left out"
+
+
+def test_how_many_figures_were_seen_is_pinned() -> None:
+    """A check added or dropped is noticed, and a figure recalled stays marked as such."""
+    count = {p: sum(c["provenance"] == p for c in CHECKS) for p in sorted(PROVENANCE)}
+    assert count == {"derived": 24, "library": 43, "memory": 24, "retrieved": 26}
