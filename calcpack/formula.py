@@ -13,7 +13,6 @@ import hashlib
 import re
 from collections.abc import Iterator, Mapping
 from dataclasses import dataclass
-from decimal import Decimal
 from fractions import Fraction
 
 
@@ -96,7 +95,7 @@ def _convert(node: ast.AST, text: str, top: bool = False) -> Node:
             written = ast.get_source_segment(text, node) or ""
             if not _DECIMAL.fullmatch(written):
                 raise FormulaError(f"{text!r}: {written!r} is not a plain decimal number")
-            return Num(str(Decimal(written)))
+            return Num(written)
         case ast.Name(id=name):
             return Name(name)
         case ast.UnaryOp(op=ast.USub(), operand=x):
