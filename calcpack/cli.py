@@ -5,7 +5,6 @@ from __future__ import annotations
 import argparse
 import os
 import sys
-import tempfile
 from collections.abc import Sequence
 from pathlib import Path
 from typing import Any, NoReturn
@@ -154,6 +153,8 @@ def _check_target(target: Path, source: Path) -> None:
 
 def _write(target: Path, content: bytes) -> None:
     """Write all of it or nothing: a crash in the middle leaves the old file."""
+    import tempfile
+
     try:
         handle, name = tempfile.mkstemp(dir=target.parent, prefix=f".{target.name}.")
     except OSError as error:

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 from collections.abc import Mapping
 from fractions import Fraction
+from functools import cache
 from itertools import product
 from math import prod
 
@@ -27,6 +28,7 @@ def conversion_tree(symbol: str, frm: Unit, to: Unit) -> Node:
 _SHORT = 10**6
 
 
+@cache
 def factor_text(factor: Fraction) -> str:
     """An exact factor as a checker can type it: a short fraction, else the definitions it is made of."""
     if max(factor.numerator, factor.denominator) < _SHORT:

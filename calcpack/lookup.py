@@ -67,6 +67,7 @@ def water(name: str, kelvin: float) -> float:
     return float(PropsSI(PROPERTIES[name].output, "T", kelvin, "Q", 0, "Water"))
 
 
+@cache
 def library(name: str) -> str:
     """A library's name and the version that is installed."""
     return f"{name} {version(name)}"

@@ -9,7 +9,7 @@ from functools import cache
 from random import Random
 
 from calcpack import formula
-from calcpack.formula import Bin, Call, Cmp, Name, Neg, Node, Num
+from calcpack.formula import Bin, Call, Name, Neg, Node, Num
 from calcpack.page import metrics
 from calcpack.page.layout import Setting
 from calcpack.page.typeset import Display
@@ -17,9 +17,7 @@ from calcpack.reader import tree as read
 from calcpack.symbols import NOMENCLATURE
 
 #: Symbols that are told apart in print.
-DISPLAYS: dict[str, Display] = {
-    name: Display(s.base, s.sub, s.upright) for name, s in NOMENCLATURE.items()
-}
+DISPLAYS: dict[str, Display] = {name: Display(s.base, s.sub, s.upright) for name, s in NOMENCLATURE.items()}
 ROW = 120  # points a row
 
 
@@ -92,14 +90,18 @@ class Trees:
         r = self.random
         if depth <= 0 or r.random() < 0.12:
             return Num(self.number(False)) if r.random() < 0.3 else Name(r.choice([*self.names, "pi"]))
-        kind = r.choices(("+", "-", "*", "/", "**", "neg", "sqrt", "log10", "ln", "exp", "max", "min"),
-                         (5, 5, 8, 6, 3, 1, 2, 1, 1, 1, 1, 1))[0]
+        kind = r.choices(
+            ("+", "-", "*", "/", "**", "neg", "sqrt", "log10", "ln", "exp", "max", "min"),
+            (5, 5, 8, 6, 3, 1, 2, 1, 1, 1, 1, 1),
+        )[0]
         if kind == "neg":
             return Neg(self.tree(depth - 1, power))
         if kind == "**":
             if power == 2:
                 return self.tree(0)
-            exponent = Num(str(r.randrange(2, 12))) if r.random() < 0.5 else self.tree(min(depth - 1, 2), power + 1)
+            exponent = (
+                Num(str(r.randrange(2, 12))) if r.random() < 0.5 else self.tree(min(depth - 1, 2), power + 1)
+            )
             return Bin("**", self.tree(depth - 1, power), exponent)
         if kind in "+-*/":
             return Bin(kind, self.tree(depth - 1, power), self.tree(depth - 1, power))

@@ -22,7 +22,7 @@ from .typeset import SIZE, Display, Setter
 
 POINT = 72 / 25.4  # points in a millimetre
 RESULT_WIDTH, RESULT_EDGE = 27.0, 9.4  # result column, and where its decimal points stand (mm)
-VALUE_ROOM = 19.7  # operand's value and unit beside its address (mm)
+VALUE_ROOM = 19.4  # operand's value and unit beside its address (mm)
 SYMBOL_ROOM = 6.6
 HEADLINE, RECORD, OPERAND, SYMBOL = 10.5, 7.8, 7.8, 8.5
 _FUNCTION = re.compile(r"(\w+)\((\w+(?:, ?\w+)*)\)")
@@ -110,7 +110,14 @@ def operands(line: Mapping[str, Any], context: Context) -> dict[str, Any]:
         symbols += text.symbol(shown) + end
         links += context.link(address) + end
         numbers += text.number(value) + (Markup("<br>") if below else SANS_GAP if unit else "") + unit + Markup("<br>")
-    return {"symbols": symbols, "numbers": numbers, "links": links, "edge": f"{edge:.1f}mm" if edge > SYMBOL_ROOM else ""}
+    room = SYMBOL_ROOM + VALUE_ROOM - edge
+    return {
+        "symbols": symbols,
+        "numbers": numbers,
+        "links": links,
+        "edge": f"{edge:.1f}mm" if edge > SYMBOL_ROOM else "",
+        "room": f"{room:.1f}mm",
+    }
 
 
 def _indent(value: str, face: metrics.Face, size: float) -> float:

@@ -7,6 +7,7 @@ from __future__ import annotations
 
 from dataclasses import dataclass
 from functools import cache
+from io import BytesIO
 from pathlib import Path
 from typing import Any
 
@@ -54,7 +55,7 @@ def path(face: Face) -> Path:
 def _font(face: Face) -> tuple[dict[int, str], Any, Any, float]:
     from fontTools.ttLib import TTFont  # only a page needs it
 
-    font = TTFont(path(face), lazy=True)
+    font = TTFont(BytesIO(path(face).read_bytes()), lazy=True)
     return font.getBestCmap(), font["hmtx"], font["glyf"], font["head"].unitsPerEm
 
 

@@ -4,7 +4,7 @@ Imports nothing else of calcpack, so that an error in what writes the page canno
 """
 
 from .book import Finding
-from .glyphs import NotAPackage
+from .failures import NotAPackage
 from .reading import verify
 from .report import Report
 

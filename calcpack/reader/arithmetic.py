@@ -6,9 +6,18 @@ The rule: compute to at least 12 digits, round to 12, then half to even to 6.
 from __future__ import annotations
 
 from collections.abc import Mapping
-from decimal import ROUND_HALF_EVEN, Context, Decimal, DecimalException, DivisionByZero, InvalidOperation, Overflow
+from decimal import (
+    ROUND_HALF_EVEN,
+    Context,
+    Decimal,
+    DecimalException,
+    DivisionByZero,
+    InvalidOperation,
+    Overflow,
+)
 from fractions import Fraction
 
+from .failures import Undefined
 from .tree import PI, Number, Op, Symbol, Tree
 
 WIDE = Context(prec=40, traps=[DivisionByZero, InvalidOperation, Overflow])
@@ -16,10 +25,6 @@ _TWELVE = Context(prec=12, rounding=ROUND_HALF_EVEN)
 _SIX = Context(prec=6, rounding=ROUND_HALF_EVEN)
 #: The circle constant to 40 digits (OEIS A000796).
 _PI = Decimal("3.141592653589793238462643383279502884197")
-
-
-class Undefined(ValueError):
-    """A form without a finite value."""
 
 
 def of_record(x: Decimal) -> Decimal:
@@ -98,7 +103,10 @@ def _apply(name: str, args: list[Decimal]) -> Decimal:
 
 
 def exact(tree: Tree) -> Fraction:
-    """The value of a tree of numbers, sums, products, quotients and small whole powers.  Raises :class:`Undefined`."""
+    """The value of a tree of numbers, sums, products, quotients and small whole powers, as a ratio.
+
+    Raises :class:`~calcpack.reader.failures.Undefined` for any other.
+    """
     match tree:
         case Number(x) if abs(x.adjusted()) < 50:
             return Fraction(x)

@@ -1,6 +1,7 @@
 """Sheets cut into bands by the rules across them, and bands into columns.
 
-The working block is 176 mm wide; its left edge, from which every column counts, is 20 mm in on A4 and 22 mm on Letter.
+The working block is 176 mm wide; its left edge, from which every column counts, is 20 mm in on
+A4 and 22 mm in on Letter.
 """
 
 from __future__ import annotations
@@ -9,7 +10,8 @@ import re
 from collections.abc import Iterable, Iterator
 from dataclasses import dataclass
 
-from .glyphs import Bar, Colour, Glyph, NotAPackage, Sheet
+from .failures import NotAPackage
+from .glyphs import Bar, Colour, Glyph, Sheet
 from .text import rows, words
 
 MM = 72 / 25.4
@@ -25,7 +27,7 @@ _SLACK = 0.3  # a column begins this much before its edge (mm)
 
 @dataclass(frozen=True)
 class Band:
-    """What stands between two rules of a sheet; ``head`` is the text of the column heads last seen above it."""
+    """What stands between two rules of a sheet; ``head`` is the text of the last column heads above it."""
 
     sheet: int
     edge: float
@@ -63,7 +65,9 @@ def bands(sheets: Iterable[Sheet]) -> Iterator[Band]:
     """Every band of every sheet in order of reading."""
     for sheet in sheets:
         edge, head = paper_edge(sheet), ""
-        rules = sorted((b for b in sheet.bars if b.width > 120 * MM and b.height < 1.0), key=lambda b: -b.axis)
+        rules = sorted(
+            (b for b in sheet.bars if b.width > 120 * MM and b.height < 1.0), key=lambda b: -b.axis
+        )
         for above, below in zip((None, *rules), (*rules, None), strict=True):
             high = above.axis if above else float("inf")
             low = below.axis if below else float("-inf")

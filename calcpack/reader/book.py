@@ -37,7 +37,7 @@ class Book:
     unread: list[Finding] = field(default_factory=list)
 
     def citation(self, quantity: Quantity, address: str) -> tuple[str, str, str] | None:
-        """What is wrong with citing ``address`` for ``quantity``: what, printed, found; nothing if all is well.
+        """What is wrong with citing ``address`` for ``quantity``: what, printed, found; or nothing.
 
         Only lines read before are known, so a line that cites itself or a later one is found out here.
         """
@@ -45,7 +45,11 @@ class Book:
             return f"no earlier line is {address}", str(quantity), "nothing"
         known = self.values[address]
         if not any(quantity.value == q.value and quantity.unit == q.unit for q in known):
-            return f"differs from line {address}", str(quantity), " or ".join(map(str, known)) or "nothing readable"
+            return (
+                f"differs from line {address}",
+                str(quantity),
+                " or ".join(map(str, known)) or "nothing readable",
+            )
         return None
 
     def cite(self, by: str, address: str) -> None:

@@ -4,17 +4,16 @@ from __future__ import annotations
 
 import re
 from dataclasses import dataclass
+from decimal import Decimal
 from fractions import Fraction
 
+from .arithmetic import exact
 from .bands import INK, MM, Band
 from .book import Book
 from .factors import printed_factor, printed_tree
-from .notation import Unread
-from .text import Row, rows, text
-from .arithmetic import Undefined, exact
-from .tree import Number, Symbol, substituted
+from .text import rows, text
+from .tree import Symbol, substituted
 from .units import converted, factor, named
-from decimal import Decimal
 
 COLUMNS = (14.0, 23.0, 41.0, 61.0, 109.0)
 _LABEL = re.compile(r"C[1-9]\d*")
@@ -35,7 +34,10 @@ def listed(band: Band, book: Book) -> list[Conversion]:
     edges = [band.edge + (x - 0.3) * MM for x in COLUMNS]
     found: list[Conversion] = []
     for row in rows(g for g in band.glyphs if edges[0] <= g.x < edges[-1]):
-        cells = [text([g for g in row.glyphs if low <= g.x < high]) for low, high in zip(edges, edges[1:], strict=False)]
+        cells = [
+            text([g for g in row.glyphs if low <= g.x < high])
+            for low, high in zip(edges, edges[1:], strict=False)
+        ]
         if _LABEL.fullmatch(cells[0]) and not row.glyphs[0].serif and row.glyphs[0].colour == INK:
             found.append(_checked(band, cells, book))
         elif found and cells[3].startswith(_IN_FULL):
@@ -57,5 +59,11 @@ def _in_full(band: Band, conversion: Conversion, printed: str, book: Book) -> No
     for x in (Decimal(0), Decimal(1)):
         right = converted(Fraction(x), conversion.before, conversion.after)
         if exact(substituted(tree, {Symbol("x"): [x]})) != right:
-            book.note(band.sheet, conversion.label, "the conversion in full is not exact", printed, f"{right} at {x}")
+            book.note(
+                band.sheet,
+                conversion.label,
+                "the conversion in full is not exact",
+                printed,
+                f"{right} at {x}",
+            )
             return

@@ -1,4 +1,4 @@
-"""Exact factors of conversions as printed in running text: ``77/34 560``, ``0.304 8²/(0.453 592 37 × 9.8)``."""
+"""Exact factors of conversions in running text: ``77/34 560``, ``0.304 8²/(0.453 592 37 × 9.806 65)``."""
 
 from __future__ import annotations
 
@@ -6,8 +6,9 @@ import re
 from decimal import Decimal
 from fractions import Fraction
 
-from .arithmetic import Undefined, exact
-from .notation import Parser, Token, Unread
+from .arithmetic import exact
+from .failures import Undefined, Unread
+from .grammar import Parser, Token
 from .text import THIN
 from .tree import Number, Symbol, Tree
 from .units import factor
@@ -44,6 +45,8 @@ def printed_factor(text: str) -> Fraction:
 
 def same_factor(source: str, before: str, after: str) -> tuple[str, str] | None:
     """The factor printed at the head of ``source`` and the exact one, where they differ."""
-    text = source.partition("exact")[0].strip() or "1"  # a unit that differs by its zero alone prints no factor
+    text = (
+        source.partition("exact")[0].strip() or "1"
+    )  # a unit that differs by its zero alone prints no factor
     right = factor(before, after)
     return None if printed_factor(text) == right else (text, str(right))

@@ -13,15 +13,13 @@ from typing import Any, NamedTuple
 import pypdfium2 as pdfium
 import pypdfium2.raw as c
 
+from .failures import NotAPackage
+
 Colour = tuple[int, int, int]
 
 
-class NotAPackage(ValueError):
-    """The file cannot be opened as a PDF, or it is none of our packages; the message says which."""
-
-
 class Glyph(NamedTuple):
-    """One character: pen position, end of its advance, reach of its ink, size across and upwards, font and colour.
+    """One character: pen position, end of its advance, reach of its ink, size across and up, font, colour.
 
     ``size`` is 0 where the text is turned or mirrored: such a glyph belongs to no line.
     """
@@ -140,8 +138,21 @@ def _glyphs(text: Any) -> Iterator[Glyph]:
         c.FPDFText_GetMatrix(text, i, m)
         level = m.a > 0 and m.d > 0 and abs(m.b) + abs(m.c) < 1e-6
         across, up = (size * m.a, size * m.d) if level else (0.0, 0.0)
-        yield Glyph(char, x.value, y.value, loose.right, left.value, bottom.value, right.value, top.value,
-                    across, up, font, colour, drawn)
+        yield Glyph(
+            char,
+            x.value,
+            y.value,
+            loose.right,
+            left.value,
+            bottom.value,
+            right.value,
+            top.value,
+            across,
+            up,
+            font,
+            colour,
+            drawn,
+        )
 
 
 def _style(text: Any, i: int) -> _Style:
@@ -162,7 +173,8 @@ def _within(inner: Any, outer: _Matrix) -> _Matrix:
     """``inner`` applied first, then ``outer``."""
     a, b, d, e, f, g = outer
     return (
-        inner.a * a + inner.b * d, inner.a * b + inner.b * e, inner.c * a + inner.d * d, inner.c * b + inner.d * e,
+        inner.a * a + inner.b * d, inner.a * b + inner.b * e,
+        inner.c * a + inner.d * d, inner.c * b + inner.d * e,
         inner.e * a + inner.f * d + f, inner.e * b + inner.f * e + g,
     )  # fmt: skip
 

@@ -25,7 +25,7 @@ class Input:
 
 
 def read_input(band: Band) -> Input:
-    """The input that ``band`` holds.  Raises :class:`~calcpack.reader.notation.Unread`."""
+    """The input that ``band`` holds.  Raises :class:`~calcpack.reader.failures.Unread`."""
     used = band.column(*AS_USED)
     by = cited(used) if any(g.colour == ACCENT for g in used) else ""
     given = _quantity(words(band.column(*AS_GIVEN)))
@@ -42,7 +42,9 @@ def enter(row: Input, book: Book) -> None:
     """Let lines cite the input, and compare what is used with what is given where nothing converts it."""
     book.enter(row.address, [row.given])
     if not row.by and row.used != row.given:
-        book.note(row.sheet, row.address, "used otherwise than given, and no line converts it", row.used, row.given)
+        book.note(
+            row.sheet, row.address, "used otherwise than given, and no line converts it", row.used, row.given
+        )
 
 
 def settle(row: Input, book: Book) -> None:

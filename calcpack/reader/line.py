@@ -7,8 +7,9 @@ from dataclasses import dataclass
 from decimal import Decimal
 
 from .bands import ACCENT, ADDRESS, INK, MM, SECOND, Band
+from .failures import Unread
 from .glyphs import Glyph
-from .notation import Marks, Unread
+from .notation import Marks
 from .picture import Form, forms
 from .text import Row, rows, scalar, symbol, text, words
 from .tree import Symbol
@@ -45,19 +46,19 @@ class Line:
 
 
 def read_line(band: Band) -> Line:
-    """The line that ``band`` holds.  Raises :class:`~calcpack.reader.notation.Unread`."""
+    """The line that ``band`` holds.  Raises :class:`~calcpack.reader.failures.Unread`."""
     working = band.column(*WORKING)
     operands, source = rests_on(band.column(*RESTS_ON))
     headline, record = result(band.column(*RESULT))
     place = words(g for g in working if not g.serif and g.colour == SECOND)
     return Line(
-        band.sheet, band.address, tuple(forms(picture(band, *WORKING))), operands, source, place, headline, record,
-        residuals(band, [g for g in working if not g.serif and g.colour == INK]),
+        band.sheet, band.address, tuple(forms(picture(band, *WORKING))), operands, source, place, headline,
+        record, residuals(band, [g for g in working if not g.serif and g.colour == INK]),
     )  # fmt: skip
 
 
 def picture(band: Band, left: float, right: float) -> Marks:
-    """The formula between two distances from the block's edge (mm): the serif but for the title, and the bars."""
+    """The formula between two distances from the edge (mm): the serif but for the title, and the bars."""
     glyphs = tuple(
         g for g in band.column(left, right) if g.serif and g.colour == INK and not g.bold and not _title(g)
     )
@@ -71,7 +72,7 @@ def _title(g: Glyph) -> bool:
 def rests_on(glyphs: Sequence[Glyph]) -> tuple[tuple[Operand, ...], str]:
     """Operands from the top, and the text below them."""
     found: list[tuple[Row, str]] = []
-    source = []
+    source: list[str] = []
     for row in rows(glyphs):
         if any(g.serif for g in row.glyphs):
             found.append((row, ""))
@@ -88,7 +89,9 @@ def _operand(row: Row, unit_below: str) -> Operand:
     printed = text([g for g in row.glyphs if not g.serif and g.colour == INK])
     value, unit = scalar(printed)
     return Operand(
-        symbol([g for g in row.glyphs if g.serif]), Quantity(value, named(unit or unit_below)), cited(row.glyphs)
+        symbol([g for g in row.glyphs if g.serif]),
+        Quantity(value, named(unit or unit_below)),
+        cited(row.glyphs),
     )
 
 
@@ -115,7 +118,10 @@ def residuals(band: Band, glyphs: Sequence[Glyph]) -> tuple[tuple[Decimal, Decim
     edges = [band.edge + (x - 0.3) * MM for x in ROOT_COLUMNS]
     found = []
     for row in rows(glyphs):
-        cells = [text([g for g in row.glyphs if low <= g.x < high]) for low, high in zip(edges, edges[1:], strict=False)]
+        cells = [
+            text([g for g in row.glyphs if low <= g.x < high])
+            for low, high in zip(edges, edges[1:], strict=False)
+        ]
         label, tried, residual = cells
         if not label or not residual.startswith("residual "):
             raise Unread(f"{str(row)!r} is no row of a root")

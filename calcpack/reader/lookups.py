@@ -1,7 +1,7 @@
 """Look-ups derived again: properties of water at the state printed, bores of pipes by size and schedule.
 
-CoolProp and fluids are used where they are installed; without them, and for tables of printed constants, a look-up is
-read and counted, not derived.
+CoolProp and fluids are used where they are installed; without them, and for tables of printed constants,
+a look-up is read and counted, not derived.
 """
 
 from __future__ import annotations
@@ -12,21 +12,25 @@ from decimal import Decimal
 
 from .arithmetic import of_record, unit_of_record
 from .book import Book, Class
+from .failures import Unread
 from .line import Line
-from .notation import Unread
 from .picture import Form
 from .text import THIN
 from .tree import Op, Symbol
 
 #: Function as printed -> CoolProp's name of the property and the unit of its value (saturated liquid water).
-_WATER = {Symbol("p", "sat"): ("P", "Pa"), Symbol("ρ", "sat"): ("D", "kg/m³"), Symbol("μ", "sat"): ("V", "Pa·s")}
+_WATER = {
+    Symbol("p", "sat"): ("P", "Pa"),
+    Symbol("ρ", "sat"): ("D", "kg/m³"),
+    Symbol("μ", "sat"): ("V", "Pa·s"),
+}
 _PIPE = re.compile(r"(NPS|DN) (\S+) schedule (\S+): ([\d.]+) mm less twice ([\d.]+) mm")
 #: Inches of the nominal diameters below DN 100 (ISO 6708 beside ASME B36.10M); above it 25 mm are an inch.
 _SMALL = {"15": 0.5, "20": 0.75, "25": 1.0, "32": 1.25, "40": 1.5, "50": 2.0, "65": 2.5, "80": 3.0, "90": 3.5}
 
 
 def look_up(line: Line, form: Form, book: Book) -> Class:
-    """A property of water; ``looked up`` where the library gives the printed value again.  Raises ``Unread``."""
+    """A property of water, derived again where the library is installed.  Raises ``Unread``."""
     if not (isinstance(form.right, Op) and form.right.name == "*" and form.right.args[0] in _WATER):
         raise Unread("neither an equation nor a look-up that is known")
     function, argument = form.right.args
@@ -39,7 +43,9 @@ def look_up(line: Line, form: Form, book: Book) -> Class:
     if derived is None:
         return "tabulated"
     library, found = derived
-    allowed = Decimal(0) if library in line.source else unit_of_record(found)  # versions differ in the last digit
+    allowed = (
+        Decimal(0) if library in line.source else unit_of_record(found)
+    )  # versions differ in the last digit
     if abs(found - line.record.value) > allowed:
         book.note(line.sheet, line.address, f"{library} gives another value", line.record.value, found)
     return "looked up"
@@ -60,14 +66,22 @@ def _water(output: str, kelvin: float) -> tuple[str, Decimal] | None:
 def tabulated(line: Line, shown: Decimal, book: Book) -> Class:
     """A table's entry: the same in formula, headline and result; a pipe's bore is derived again."""
     if shown != line.record.value:
-        book.note(line.sheet, line.address, "the formula shows another value than the result", shown, line.record.value)
+        book.note(
+            line.sheet,
+            line.address,
+            "the formula shows another value than the result",
+            shown,
+            line.record.value,
+        )
     pipe = _PIPE.search(line.place.replace(THIN, ""))
     if pipe is None:
         return "tabulated"
     system, size, schedule, outside, wall = pipe.groups()
     bore = Decimal(outside) - 2 * Decimal(wall)
     if line.record.unit != "mm" or abs(bore - line.record.value) > Decimal("0.011"):
-        book.note(line.sheet, line.address, "the bore is not the diameter less two walls", line.record, f"{bore} mm")
+        book.note(
+            line.sheet, line.address, "the bore is not the diameter less two walls", line.record, f"{bore} mm"
+        )
     derived = _pipe(system, size, schedule)
     if derived is None:
         return "tabulated"
@@ -84,7 +98,7 @@ def _pipe(system: str, size: str, schedule: str) -> Decimal | None:
         return None
     with suppress(ValueError, KeyError, ZeroDivisionError):
         inches = _inches(size) if system == "NPS" else _SMALL.get(size, float(size) / 25)
-        nominal, inside, _, _ = nearest_pipe(NPS=inches, schedule=schedule)
+        nominal, inside, _, _ = nearest_pipe(NPS=inches, schedule=schedule)  # type: ignore[arg-type]  # 1.5 is meant too
         return Decimal(f"{inside * 1000:.2f}") if nominal == inches else None
     return None
 

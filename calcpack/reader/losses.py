@@ -1,4 +1,4 @@
-"""Loss tables of section 8: rows ``n K h_V`` or the result of a line above, their sum, and the row worked in full."""
+"""Loss tables of section 8: rows ``n K h_V`` or results of lines above, their sum, the row worked in full."""
 
 from __future__ import annotations
 
@@ -6,19 +6,17 @@ import re
 from collections.abc import Sequence
 from dataclasses import dataclass, field
 from decimal import Decimal
-from fractions import Fraction
 from functools import reduce
 
 from .arithmetic import WIDE, of_record, rounded, value
 from .bands import ACCENT, ADDRESS, INK, NUMBER, SECOND, Band
 from .book import Book
-from .glyphs import Glyph
+from .failures import Unread
 from .line import cited, picture, whole
-from .notation import Unread
 from .picture import forms
 from .text import is_number, rows, scalar, words
 from .tree import Number, Op, Symbol, Tree
-from .units import Quantity, converted, named
+from .units import Quantity, named
 
 LABEL, FACTORS = (14.0, 21.0), ((64.0, 76.0), (76.0, 96.0), (96.0, 114.0))
 LOSS, RECORD, SUM = (114.0, 129.0), (129.0, 150.0), (21.0, 150.0)
@@ -119,7 +117,9 @@ def worked(band: Band, table: Table, book: Book) -> None:
     if head is None:
         return
     below = tuple(g for g in band.glyphs if g.y < head.y)
-    gives = next((str(row) for row in rows(g for g in below if not g.serif) if str(row).startswith("gives ")), "")
+    gives = next(
+        (str(row) for row in rows(g for g in below if not g.serif) if str(row).startswith("gives ")), ""
+    )
     label = WORKED.search(str(head))
     assert label is not None, "the row was found by it"
     if label[1] not in table.factors:
@@ -134,7 +134,9 @@ def worked(band: Band, table: Table, book: Book) -> None:
         book.note(band.sheet, "", f"row {label[1]} worked in full has other numbers than the table")
     given, rest = scalar(gives.removeprefix("gives "))
     if Quantity(given, named(rest.partition(";")[0])) != Quantity(loss, unit):
-        book.note(band.sheet, "", f"row {label[1]} worked in full gives another loss", gives, f"{loss} {unit}")
+        book.note(
+            band.sheet, "", f"row {label[1]} worked in full gives another loss", gives, f"{loss} {unit}"
+        )
     table.factors.clear()
 
 

@@ -1,7 +1,7 @@
 """Two-dimensional notation: glyphs and bars of one form become a tree.
 
-The widest bar is taken first: what stands within it from left to right belongs to its fraction or root.  What is left
-is read from left to right by baseline and size: level, raised (an exponent) or lowered (a subscript).
+The widest bar is taken first: what stands within it from left to right belongs to its fraction or root.  What
+is left is read from left to right by baseline and size: level, raised (an exponent) or lowered (a subscript).
 """
 
 from __future__ import annotations
@@ -10,8 +10,10 @@ from collections.abc import Sequence
 from dataclasses import dataclass
 from decimal import Decimal
 
+from .failures import Unread
 from .glyphs import Bar, Glyph
-from .tree import PI, Number, Op, Symbol, Tree, negative
+from .grammar import Parser, Token
+from .tree import PI, Number, Op, Symbol, Tree
 
 #: Size of a form's parts by depth of raising, in parts of the body size.
 SCALES = (1.0, 0.7, 0.55)
@@ -21,10 +23,6 @@ DIGIT_GAP = 0.25  # widest gap inside a number (em)
 TIGHT = 0.07  # widest gap before the × of a power of ten (em)
 NAME_GAP = 0.01  # widest gap inside a name (em): an italic f leans over all of a thin gap but 0.02
 NAMES = {"ln", "exp", "max", "min", "log"}
-
-
-class Unread(ValueError):
-    """Print that is outside the notation; the message says where."""
 
 
 @dataclass(frozen=True)
@@ -113,15 +111,6 @@ def baseline(parts: Sequence[Item], size: float) -> float:
         if item.char not in "()":
             return item.y
     raise Unread("nothing but brackets")
-
-
-@dataclass(frozen=True)
-class Token:
-    """``kind`` is a sign, or one of ``number symbol function tree power sum``."""
-
-    kind: str
-    tree: Tree | None = None
-    name: str = ""
 
 
 def _read(parts: Sequence[Item], body: float, depth: int) -> Tree:
@@ -223,7 +212,11 @@ class _Row:
     def word(self) -> Token:
         """A symbol with its subscript, or the name of a function before its bracket."""
         letters: list[Glyph] = []
-        while (g := self.glyph()) and g.char.isalpha() and (not letters or g.x - letters[-1].end < NAME_GAP * self.size):
+        while (
+            (g := self.glyph())
+            and g.char.isalpha()
+            and (not letters or g.x - letters[-1].end < NAME_GAP * self.size)
+        ):
             letters.append(g)
             self.at += 1
         base = "".join(g.char for g in letters)
@@ -245,78 +238,3 @@ def decimal(digits: str) -> Decimal:
     if digits.count(".") > 1 or not digits.strip("."):
         raise Unread(f"{digits!r} is no number")
     return Decimal(digits)
-
-
-class Parser:
-    """Tokens to a tree: products bind closer than sums, powers closer than products, all from the left.
-
-    Two factors side by side are a product, unless the second is a number: numbers always show their sign.
-    """
-
-    def __init__(self, tokens: Sequence[Token]) -> None:
-        self.tokens, self.at = tokens, 0
-
-    @property
-    def next(self) -> str:
-        return self.tokens[self.at].kind if self.at < len(self.tokens) else ""
-
-    def take(self, kind: str = "") -> Token:
-        if not self.next or (kind and self.next != kind):
-            raise Unread(f"{kind or 'a term'!r} expected, {self.next or 'the end'!r} found")
-        self.at += 1
-        return self.tokens[self.at - 1]
-
-    def whole(self) -> Tree:
-        tree = self.sum()
-        if self.next:
-            raise Unread(f"{self.next!r} after the end of the form")
-        return tree
-
-    def sum(self) -> Tree:
-        tree = self.product(leading=True)
-        while self.next in ("+", "−"):
-            op = "+" if self.take().kind == "+" else "-"
-            tree = Op(op, (tree, self.product()))
-        return tree
-
-    def product(self, leading: bool = False) -> Tree:
-        minus = leading and self.next == "−"
-        if minus:
-            self.take()
-        tree = self.power()
-        tree = negative(tree) if minus else tree
-        while self.next in ("×", "/", "symbol", "function", "tree", "sum", "("):
-            op = "/" if self.next == "/" else "*"
-            if self.next in ("×", "/"):
-                self.take()
-            tree = Op(op, (tree, self.power()))
-        return tree
-
-    def power(self) -> Tree:
-        tree = self.primary()
-        return Op("**", (tree, self.exponent())) if self.next == "power" else tree
-
-    def exponent(self) -> Tree:
-        tree = self.take("power").tree
-        assert tree is not None, "a power token carries its exponent"
-        return tree
-
-    def primary(self) -> Tree:
-        token = self.take()
-        if token.tree is not None and token.kind != "power":
-            return token.tree
-        if token.kind == "(":
-            tree = self.sum()
-            self.take(")")
-            return tree
-        if token.kind == "sum":
-            return Op("sum", (self.primary(),))
-        if token.kind == "function":
-            self.take("(")
-            args = [self.sum()]
-            while self.next == ",":
-                self.take()
-                args.append(self.sum())
-            self.take(")")
-            return Op(token.name, tuple(args))
-        raise Unread(f"{token.kind!r} where a term belongs")

@@ -5,8 +5,9 @@ from __future__ import annotations
 from collections.abc import Sequence
 from dataclasses import dataclass
 
+from .failures import Unread
 from .glyphs import Bar, Glyph
-from .notation import Marks, Root, Unread, baseline, items, read
+from .notation import Marks, Root, baseline, items, read
 from .tree import Tree
 
 RELATIONS = "=≥≤><"
@@ -16,7 +17,7 @@ CLEAR = 1.8
 
 @dataclass(frozen=True)
 class Form:
-    """One form of a formula: left side, relation sign, right side.  ``left`` is None where the sign begins the form."""
+    """Left side, relation sign and right side; ``left`` is None where the sign begins the form."""
 
     left: Tree | None
     relation: str
@@ -33,7 +34,7 @@ class _Part:
 
 
 def forms(marks: Marks) -> list[Form]:
-    """The forms of a picture in the order of print.  Raises :class:`~calcpack.reader.notation.Unread`."""
+    """The forms of a picture in the order of print.  Raises :class:`~calcpack.reader.failures.Unread`."""
     signs = [g for g in marks.glyphs if g.char in RELATIONS]
     if not signs:
         raise Unread("no relation sign")
@@ -53,7 +54,8 @@ def rows(marks: Marks) -> list[Marks]:
     """
     roots = [i.bar for i in _all_roots(marks)]
     bars = [b for b in marks.bars if b not in roots]
-    reach = sorted([(p.top, p.bottom) for p in (*marks.glyphs, *marks.bars)], reverse=True)
+    parts: list[Glyph | Bar] = [*marks.glyphs, *marks.bars]
+    reach = sorted([(p.top, p.bottom) for p in parts], reverse=True)
     cuts, low = [], reach[0][1]
     for top, bottom in reach:
         if low - top > CLEAR and not any(abs(b.bottom - low) < 0.01 or abs(b.top - top) < 0.01 for b in bars):
@@ -72,14 +74,16 @@ def _all_roots(marks: Marks) -> list[Root]:
     found = []
     for sign in signs:
         near = 0.12 * sign.size
-        bar = next((b for b in marks.bars if abs(sign.top - b.top) < near and abs(sign.right - b.left) < near), None)
+        bar = next(
+            (b for b in marks.bars if abs(sign.top - b.top) < near and abs(sign.right - b.left) < near), None
+        )
         if bar is not None:
             found.append(Root(sign, bar, Marks(())))
     return found
 
 
 def _parts(row: Marks, before: Sequence[_Part]) -> list[_Part]:
-    """The forms that begin in ``row``; a row without a relation sign goes on with the last form ``before``."""
+    """The forms that begin in ``row``; a row without a relation sign continues the last form ``before``."""
     signs = sorted((g for g in row.glyphs if g.char in RELATIONS), key=lambda g: g.x)
     if not signs:
         if not before:
@@ -117,14 +121,23 @@ def _joined(before: Marks, row: Marks, y: float, body: float) -> Marks:
     if not before.glyphs:
         return row
     dy = y - baseline(items(row), body)
-    edge = max(p.right for p in (*before.glyphs, *before.bars))
+    parts: list[Glyph | Bar] = [*before.glyphs, *before.bars]
+    edge = max(p.right for p in parts)
     dx = edge + 0.3 * body - min(g.x for g in row.glyphs)
     glyphs = tuple(
-        g._replace(x=g.x + dx, end=g.end + dx, left=g.left + dx, right=g.right + dx, y=g.y + dy, bottom=g.bottom + dy,
-                   top=g.top + dy)
+        g._replace(
+            x=g.x + dx,
+            end=g.end + dx,
+            left=g.left + dx,
+            right=g.right + dx,
+            y=g.y + dy,
+            bottom=g.bottom + dy,
+            top=g.top + dy,
+        )
         for g in row.glyphs
     )
     bars = tuple(
-        b._replace(left=b.left + dx, right=b.right + dx, bottom=b.bottom + dy, top=b.top + dy) for b in row.bars
+        b._replace(left=b.left + dx, right=b.right + dx, bottom=b.bottom + dy, top=b.top + dy)
+        for b in row.bars
     )
     return Marks(before.glyphs + glyphs, before.bars + bars)

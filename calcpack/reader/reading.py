@@ -6,16 +6,15 @@ import re
 from collections import Counter
 from collections.abc import Sequence
 
-from .arithmetic import Undefined
 from .bands import Band, bands
 from .book import Book, Finding
 from .conversions import Conversion, listed
 from .cover import check_cover
-from .glyphs import NotAPackage, Sheet, sheets
+from .failures import NotAPackage, Undefined, Unread
+from .glyphs import Sheet, sheets
 from .inputs import Input, enter, read_input, settle
 from .line import RESULT, Line, read_line
 from .losses import Table, is_losses, read_row, worked
-from .notation import Unread
 from .recompute import recompute
 from .report import Report
 from .rules import read_rule
@@ -27,9 +26,13 @@ _CITED = re.compile(r"exact, (C[1-9]\d*)")
 def verify(pdf: bytes) -> Report:
     """Read a package back from its visible pages and recompute every line.
 
-    Raises :class:`~calcpack.reader.glyphs.NotAPackage` for anything that is none of our packages.
+    Raises :class:`~calcpack.reader.failures.NotAPackage` for anything that is none of our packages.
     """
-    found = sheets(pdf)
+    return read_back(sheets(pdf))
+
+
+def read_back(found: Sequence[Sheet]) -> Report:
+    """Read a package back from its sheets; raises as :func:`verify` does."""
     if not any(strip(sheet) for sheet in found):
         raise NotAPackage("no sheet bears a sheet number as our packages do")
     reading = Reading()
@@ -99,7 +102,9 @@ class Reading:
         for line, label in self.converting:
             listed_as, units = self.conversions.get(label), (line.operands[0].quantity.unit, line.record.unit)
             if listed_as is None or (listed_as.before, listed_as.after) != units:
-                book.note(line.sheet, line.address, f"{label} is not its conversion in the list", " to ".join(units))
+                book.note(
+                    line.sheet, line.address, f"{label} is not its conversion in the list", " to ".join(units)
+                )
         self._addresses()
         check_cover(found[0], self.verdicts, book)
         for sheet in found:
@@ -108,7 +113,8 @@ class Reading:
         kinds = Counter(book.classes.values())
         return Report(
             len(found), kinds["recomputed"], kinds["bracketed"], kinds["looked up"] + kinds["tabulated"],
-            kinds["looked up"], len(self.inputs), len(self.verdicts), tuple(book.unread), tuple(book.findings),
+            kinds["looked up"], len(self.inputs), len(self.verdicts),
+            tuple(book.unread), tuple(book.findings),
         )  # fmt: skip
 
     def _addresses(self) -> None:
@@ -118,5 +124,7 @@ class Reading:
             section, _, number = address.partition(".")
             next_in[section] += 1
             if int(number) != next_in[section]:
-                self.book.note(sheet, address, "addresses do not run on", address, f"{section}.{next_in[section]}")
+                self.book.note(
+                    sheet, address, "addresses do not run on", address, f"{section}.{next_in[section]}"
+                )
                 next_in[section] = int(number)

@@ -9,9 +9,9 @@ from fractions import Fraction
 from .arithmetic import decimal, exact, of_record, rounded, unit_of_record, value
 from .book import Book, Class
 from .factors import same_factor
+from .failures import Unread
 from .line import Line
 from .lookups import look_up, tabulated
-from .notation import Unread
 from .picture import Form
 from .tree import Number, Op, Symbol, Values, substituted, symbols
 from .units import Quantity, converted
@@ -20,8 +20,7 @@ from .units import Quantity, converted
 def recompute(line: Line, book: Book) -> Class:
     """Check everything a line prints and note in ``book`` what disagrees; the way it was checked is returned.
 
-    Raises :class:`~calcpack.reader.notation.Unread` or :class:`~calcpack.reader.arithmetic.Undefined` for a line that
-    cannot be checked at all.
+    Raises ``Unread`` or ``Undefined`` for a line that cannot be checked at all.
     """
     for operand in line.operands:
         book.cite(line.address, operand.address)
@@ -67,7 +66,13 @@ def _headline(line: Line, book: Book) -> None:
 
 def _result(line: Line, found: Decimal, book: Book) -> None:
     if of_record(found) != line.record.value:
-        book.note(line.sheet, line.address, "the form with numbers gives another result", line.record.value, of_record(found))
+        book.note(
+            line.sheet,
+            line.address,
+            "the form with numbers gives another result",
+            line.record.value,
+            of_record(found),
+        )
 
 
 def _equation(line: Line, symbolic: Form, numeric: Form, book: Book) -> None:
@@ -82,7 +87,13 @@ def _conversion(line: Line, form: Form, book: Book) -> None:
     right = converted(Fraction(operand.value), operand.unit, line.record.unit)
     printed = exact(form.right)
     if printed != right:
-        book.note(line.sheet, line.address, "the conversion is not exact", decimal(printed).normalize(), decimal(right).normalize())
+        book.note(
+            line.sheet,
+            line.address,
+            "the conversion is not exact",
+            decimal(printed).normalize(),
+            decimal(right).normalize(),
+        )
     if _first_number(form) != operand.value:
         book.note(line.sheet, line.address, "the form does not begin with its operand", form.right, operand)
     if wrong := same_factor(line.source, operand.unit, line.record.unit):
@@ -98,7 +109,7 @@ def _first_number(form: Form) -> Decimal | None:
 
 
 def _root(line: Line, book: Book) -> None:
-    """A root is proved by its residuals: of opposite sign half a unit of the last digit below and above it."""
+    """A root is proved by its residuals, of opposite sign half a unit of the last digit to either side."""
     if len(line.forms) != 2 or line.forms[0].left is None or line.forms[1].left is None:
         raise Unread("a root without both sides in symbols and in numbers")
     symbolic, numeric = (Op("-", (form.left, form.right)) for form in line.forms if form.left is not None)
@@ -113,7 +124,13 @@ def _root(line: Line, book: Book) -> None:
         residual = value(numeric, {unknown: place})
         signs.append(residual > 0)
         if rounded(residual, printed) != printed:
-            book.note(line.sheet, line.address, f"the residual at {place} is another", printed, rounded(residual, printed))
+            book.note(
+                line.sheet,
+                line.address,
+                f"the residual at {place} is another",
+                printed,
+                rounded(residual, printed),
+            )
     if signs[0] == signs[2]:
         book.note(line.sheet, line.address, "the residual does not change sign across the root", root)
 

@@ -12,8 +12,8 @@ class Report:
     """What was read back: how many lines were checked in which way, what was not read, and what disagrees.
 
     ``recomputed`` counts equations, sums, conversions and rows of losses; ``bracketed`` roots proved by their
-    residuals; ``looked_up`` look-ups, of which ``derived`` were derived again with the library; ``inputs`` and
-    ``rules`` the rows of sections 4 and 9.
+    residuals; ``looked_up`` look-ups, of which ``derived`` were derived again with the library; ``inputs``
+    and ``rules`` the rows of sections 4 and 9.
     """
 
     sheets: int
@@ -34,7 +34,8 @@ class Report:
     def __str__(self) -> str:
         rows = [
             f"{self.sheets} sheets: {self.recomputed} lines recomputed, {self.bracketed} roots bracketed, "
-            f"{self.looked_up} look-ups ({self.derived} derived again), {self.inputs} inputs, {self.rules} rules",
+            f"{self.looked_up} look-ups ({self.derived} derived again), "
+            f"{self.inputs} inputs, {self.rules} rules",
             f"{len(self.unread)} not read, {len(self.disagreements)} disagreements",
         ]
         rows += [f"not read: {x}" for x in self.unread]

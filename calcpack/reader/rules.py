@@ -1,4 +1,4 @@
-"""Section 9: rule checks.  Both sides are results cited, the inequality decides the verdict, the margin is their room."""
+"""Section 9: rule checks.  Both sides are results cited, the inequality decides, the margin is their room."""
 
 from __future__ import annotations
 
@@ -8,11 +8,11 @@ from decimal import ROUND_CEILING, ROUND_FLOOR, Decimal
 from fractions import Fraction
 
 from .arithmetic import WIDE, of_record, rounded
-from .bands import ACCENT, INK, SECOND, Band
+from .bands import INK, SECOND, Band
 from .book import Book
+from .failures import Unread
 from .glyphs import Glyph
 from .line import cited, picture
-from .notation import Unread
 from .picture import forms
 from .text import rows, scalar, words
 from .tree import Number
@@ -34,9 +34,9 @@ class Side:
 
 
 def read_rule(band: Band, givens: dict[str, Quantity], book: Book) -> str:
-    """Check one rule and return its verdict; ``givens`` are inputs as given, by the line that holds them as used.
+    """Check one rule and return its verdict; ``givens`` are inputs as given, by the line that is used.
 
-    Raises :class:`~calcpack.reader.notation.Unread`.
+    Raises :class:`~calcpack.reader.failures.Unread`.
     """
     verdict, upper = _verdict(band)
     relation = words(upper.column(*RELATION))
@@ -54,7 +54,13 @@ def read_rule(band: Band, givens: dict[str, Quantity], book: Book) -> str:
     a, b = sides[0].value, sides[1].value
     holds = {"≥": a >= b, ">": a > b, "≤": a <= b, "<": a < b}[relation]
     if verdict == "not applicable" or (verdict != "not assessed" and (verdict == "met") != holds):
-        book.note(band.sheet, band.address, "the inequality gives another verdict", verdict, "met" if holds else "not met")
+        book.note(
+            band.sheet,
+            band.address,
+            "the inequality gives another verdict",
+            verdict,
+            "met" if holds else "not met",
+        )
     _margin(upper, WIDE.subtract(a, b) if rising else WIDE.subtract(b, a), sides[1], book)
     return verdict
 
@@ -123,4 +129,6 @@ def _margin(band: Band, room: Decimal, limit: Quantity, book: Book) -> None:
             if rounded(per_cent, printed, ROUND_FLOOR) != printed:
                 book.note(band.sheet, band.address, "the margin in per cent is another", printed, per_cent)
         elif Quantity(printed, named(name)) != Quantity(margin, limit.unit):
-            book.note(band.sheet, band.address, "the margin of record is another", row, f"{margin} {limit.unit}")
+            book.note(
+                band.sheet, band.address, "the margin of record is another", row, f"{margin} {limit.unit}"
+            )

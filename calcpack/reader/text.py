@@ -7,8 +7,9 @@ from collections.abc import Iterable, Sequence
 from dataclasses import dataclass
 from decimal import Decimal
 
+from .failures import Unread
 from .glyphs import Glyph
-from .notation import DIGIT_GAP, Unread
+from .notation import DIGIT_GAP
 from .tree import Symbol
 
 #: Baselines nearer than this are one row (points): raised digits reach 3.8 up, rows are 9.4 apart at least.
@@ -18,7 +19,9 @@ THIN = "\u202f"  # stands for the gap inside a number
 _RAISED = dict(zip("0123456789−", "⁰¹²³⁴⁵⁶⁷⁸⁹⁻", strict=True))
 _LEVEL = str.maketrans({raised: level.replace("−", "-") for level, raised in _RAISED.items()})
 _DIGITS = rf"\d(?:{THIN}?\d)*"
-_NUMBER = re.compile(rf"([+−-]?)({_DIGITS}(?:\.{_DIGITS})?)(?:×10(⁻?[⁰¹²³⁴⁵⁶⁷⁸⁹]{{1,4}}))?(?![\d.⁰¹²³⁴⁵⁶⁷⁸⁹])")
+_NUMBER = re.compile(
+    rf"([+−-]?)({_DIGITS}(?:\.{_DIGITS})?)(?:×10(⁻?[⁰¹²³⁴⁵⁶⁷⁸⁹]{{1,4}}))?(?![\d.⁰¹²³⁴⁵⁶⁷⁸⁹])"
+)
 
 
 @dataclass(frozen=True)
@@ -46,14 +49,16 @@ def rows(glyphs: Iterable[Glyph]) -> list[Row]:
 
 
 def text(glyphs: Sequence[Glyph]) -> str:
-    """The characters of one row: words parted by spaces, gaps inside numbers by :data:`THIN`, raised digits as such."""
+    """The characters of one row: words parted by spaces, gaps in numbers by ``THIN``."""
     if not glyphs:
         return ""
     size, out = max(g.size for g in glyphs), ""
     y = next(g.y for g in glyphs if g.size == size)
     for before, g in zip((None, *glyphs), glyphs, strict=False):
         if before is not None and g.x - before.end > WORD * before.size:
-            inside = (before.char + g.char).isdigit() and g.x - before.end <= DIGIT_GAP * max(before.size, g.size)
+            inside = (before.char + g.char).isdigit() and g.x - before.end <= DIGIT_GAP * max(
+                before.size, g.size
+            )
             out += THIN if inside else " "
         out += _RAISED.get(g.char, g.char) if g.y > y + 0.15 * size and g.size < 0.85 * size else g.char
     return out
@@ -65,7 +70,7 @@ def words(glyphs: Iterable[Glyph]) -> str:
 
 
 def scalar(printed: str) -> tuple[Decimal, str]:
-    """The number at the beginning of ``printed``, its digits kept, and what follows it.  Raises ``Unread``."""
+    """The number at the beginning of ``printed``, its digits kept, and what follows.  Raises ``Unread``."""
     match = _NUMBER.match(printed)
     if match is None:
         raise Unread(f"no number in {printed!r}" if printed else "no number printed")
@@ -82,7 +87,7 @@ def is_number(printed: str) -> bool:
 
 
 def symbol(glyphs: Sequence[Glyph]) -> Symbol:
-    """The symbol that serif ``glyphs`` print: letters of the full size are its base, smaller ones its subscript."""
+    """The symbol that serif ``glyphs`` print: its base of the full size, its subscript smaller."""
     if not glyphs:
         raise Unread("no symbol printed")
     size = max(g.size for g in glyphs)
