@@ -16,10 +16,12 @@ from .numerals import SANS_GAP, numeral
 
 WIDTH = 132.0
 TALLEST = 122.0  # room for the heads, mm
-SCALES = (5, 10, 20, 25, 40, 50, 80, 100, 150, 200, 250, 400, 500, 800, 1000, 2000)
+SCALES = (5, *(round(m * 10**k) for k in range(1, 10) for m in (1, 1.5, 2, 2.5, 4, 5, 8)))
+STEPS = tuple(m * 10.0**k for k in range(-1, 9) for m in (1, 2, 5))  # of the axis
 MILLIMETRES = {"ft": 304.8, "m": 1000.0}
 LEFT, TANK, PIPE, PUMP, BARS = 13.0, 18.0, 42.0, 79.0, 94.0
 HEIGHTS = ("static head", "gauge height")  # drawn first, so that they end at the height they mean
+CROWDED, STAGGER = 4.6, 4.4  # below this pitch every second row number stands lower by so much (mm)
 LOSSES = ("losses", "vapour pressure")
 
 
@@ -67,8 +69,19 @@ def _scale(sketch: Mapping[str, Any]) -> Scale:
     unit = sketch["unit"]
     span = (max(points) - min(points)) * MILLIMETRES[unit]
     ratio = next((s for s in SCALES if span / s <= TALLEST), SCALES[-1])
-    below = 9.0 * ratio / MILLIMETRES[unit]
-    return Scale(ratio, unit, max(points) + below * 0.25, min(points) - below)
+    depth = 9.0 + (STAGGER if _pitch(sketch) < CROWDED else 0.0)
+    millimetre = ratio / MILLIMETRES[unit]
+    return Scale(ratio, unit, max(points) + 2.5 * millimetre, min(points) - depth * millimetre)
+
+
+def _run(sketch: Mapping[str, Any]) -> tuple[float, float]:
+    """Where the line begins and ends on the paper."""
+    return (PIPE - 10 if sketch["supply"]["levels"] else TANK + 10), PUMP - 3.2
+
+
+def _pitch(sketch: Mapping[str, Any]) -> float:
+    first, last = _run(sketch)
+    return (last - first - 4) / max(len(sketch["elements"]), 1)
 
 
 def elevation(sketch: Mapping[str, Any]) -> str:
@@ -86,7 +99,7 @@ def elevation(sketch: Mapping[str, Any]) -> str:
 
 def _axis(d: Drawing, scale: Scale) -> None:
     per = MILLIMETRES[scale.unit] / scale.ratio
-    step = next(s for s in (0.1, 0.2, 0.5, 1, 2, 5, 10, 20, 50, 100) if s * per >= 8.0)
+    step = next((s for s in STEPS if s * per >= 8.0), STEPS[-1])
     d.between(LEFT, scale.y(scale.high), LEFT, scale.bottom, 0.2)
     k = int(scale.low / step) - 1
     while (k := k + 1) * step <= scale.high:
@@ -94,7 +107,7 @@ def _axis(d: Drawing, scale: Scale) -> None:
             continue
         y = scale.y(k * step)
         d.between(LEFT - 1.4, y, LEFT, y, 0.18)
-        d.label(LEFT - 2.0, y + 0.95, _number(f"{k * step:g}"), "end")
+        d.label(LEFT - 2.0, y + 0.95, _number(f"{k * step:.{1 if step < 1 else 0}f}"), "end")
     d.label(
         3.2,
         (scale.y(scale.high) + scale.bottom) / 2,
@@ -130,22 +143,21 @@ def _supply(d: Drawing, scale: Scale, sketch: Mapping[str, Any]) -> None:
         0.4,
     )
     heights = _spread([scale.y(float(level["value"])) for level in levels], 3.4)
+    lines = _two_lines(name, right - TANK + 26)
+    crossed = _pipe_start(sketch) < lowest < float(sketch["pump"]["elevation"])  # the line rises through the level
     for level, at in zip(levels, heights, strict=True):
         y, low = scale.y(float(level["value"])), level is levels[-1]
         d.between(TANK, y, right, y, 0.3 if low else 0.15, ACCENT if low else SECOND, "" if low else "1.2 0.8")
-        d.label(
-            right + 1.2,
-            at + 0.9,
-            f"{level['name'].rpartition(', ')[2]} {_number(level['value'], signed=True)}",
-            bold=low,
-            colour=INK if low else SECOND,
-        )
+        words = f"{level['name'].rpartition(', ')[2]} {_number(level['value'], signed=True)}"
+        if low and crossed:
+            d.label(TANK, top - 1.6, words)
+        else:
+            d.label(right + 1.2, at + 0.9, words, bold=low, colour=INK if low else SECOND)
         if low:
             x = TANK + 4
             d.line(f"M{x - 1.2} {y - 2.1:.2f}H{x + 1.2}L{x} {y:.2f}Z", 0.2)
-    lines = _two_lines(name, right - TANK + 26)
-    for i, words in enumerate(lines):
-        d.label(TANK, top - 1.6 - 3.3 * (len(lines) - 1 - i), words, bold=True)
+    for i, words in enumerate(reversed(lines), crossed):
+        d.label(TANK, top - 1.6 - 3.3 * i, words, bold=True)
 
 
 def _two_lines(words: str, room: float) -> list[str]:
@@ -164,8 +176,7 @@ def _pipe_start(sketch: Mapping[str, Any]) -> float:
 
 def _pipe(d: Drawing, scale: Scale, sketch: Mapping[str, Any]) -> None:
     start, end, half = scale.y(_pipe_start(sketch)), scale.y(float(sketch["pump"]["elevation"])), 1.3
-    first = PIPE - 10 if sketch["supply"]["levels"] else TANK + 10
-    last = PUMP - 3.2
+    first, last = _run(sketch)
     for side in (-half, half):
         d.between(first, start + side, last, end + side, 0.35)
     d.between(first, start, last, end, 0.15, SECOND, "3 0.8 0.6 0.8")
@@ -175,12 +186,12 @@ def _pipe(d: Drawing, scale: Scale, sketch: Mapping[str, Any]) -> None:
             0.35,
         )
     elements = sketch["elements"]
-    pitch = (last - first - 4) / max(len(elements), 1)
+    pitch = _pitch(sketch)
     for i, element in enumerate(elements):
         x = first + 2 + pitch * (i + 0.5)
         y = start + (end - start) * (x - first) / (last - first)
         _element(d, element["kind"], x, y, half)
-        below = max(start, end) + 6.2 + (4.4 if i % 2 and pitch < 4.6 else 0.0)
+        below = max(start, end) + 6.2 + (STAGGER if i % 2 and pitch < CROWDED else 0.0)
         d.between(x, y + half + 0.4, x, below - 1.9, 0.12, SECOND)
         d.circle(x, below, 1.9, 0.2)
         d.label(x, below + 0.9, element["row"], "middle", size=2.5)

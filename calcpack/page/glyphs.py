@@ -19,7 +19,8 @@ def data_uri(svg: str) -> str:
     return "data:image/svg+xml;base64," + base64.b64encode(svg.encode()).decode()
 
 
-def _svg(width: float, height: float, body: str, scale: float = 1.0) -> str:
+def picture(width: float, height: float, body: str, scale: float = 1.0) -> str:
+    """A drawing in millimetres, stroked in ink unless its parts say otherwise."""
     return (
         f'<svg xmlns="http://www.w3.org/2000/svg" width="{width * scale:.4g}mm" height="{height * scale:.4g}mm" '
         f'viewBox="0 0 {width:.4g} {height:.4g}" fill="none" stroke="{INK}" stroke-linecap="butt">{body}</svg>'
@@ -53,7 +54,7 @@ _VERDICTS: Mapping[str, str] = {
 @cache
 def verdict(word: str, size: float = 3.2) -> str:
     """The glyph of a verdict, ``size`` millimetres square."""
-    return data_uri(_svg(10, 10, _VERDICTS[word], size / 10))
+    return data_uri(picture(10, 10, _VERDICTS[word], size / 10))
 
 
 _FILLS = {"verified": 1.0, "maker": 0.5, "preliminary": 0.25, "assumed": 0.0}
@@ -63,7 +64,7 @@ _FILLS = {"verified": 1.0, "maker": 0.5, "preliminary": 0.25, "assumed": 0.0}
 def status(word: str) -> str:
     """A disc filled as far as the value is confirmed; a triangle where the status is unknown."""
     if word not in _FILLS:
-        return data_uri(_svg(10, 10, '<path d="M5 1L9.4 9H0.6Z" stroke-width="1"/>', 0.26))
+        return data_uri(picture(10, 10, '<path d="M5 1L9.4 9H0.6Z" stroke-width="1"/>', 0.26))
     full, r = _FILLS[word], 4.2
     body = f'<circle cx="5" cy="5" r="{r}" stroke-width="1"/>'
     if full == 1.0:
@@ -72,14 +73,14 @@ def status(word: str) -> str:
         end = (5, 5 + r) if full == 0.5 else (5 - r, 5)
         sweep = f"M5 5V{5 - r:.2f}A{r} {r} 0 0 0 {end[0]:.2f} {end[1]:.2f}Z"
         body += f'<path d="{sweep}" fill="{INK}" stroke="none"/>'
-    return data_uri(_svg(10, 10, body, 0.26))
+    return data_uri(picture(10, 10, body, 0.26))
 
 
 @cache
 def check() -> str:
     """The blank check mark: a box for how, a line for by whom."""
     body = f'<rect x="0.15" y="0.15" width="4.4" height="4.4" stroke-width="0.2" stroke="{SECOND}"/>'
-    return data_uri(_svg(21.5, 4.8, body + f'<path d="M6.5 4.5H20.5" stroke-width="0.14" stroke="{HAIR}"/>'))
+    return data_uri(picture(21.5, 4.8, body + f'<path d="M6.5 4.5H20.5" stroke-width="0.14" stroke="{HAIR}"/>'))
 
 
 @cache
@@ -105,4 +106,4 @@ def margin_bar(percent: str) -> str:
         base = 20.3 if shown > 0 else 1.7
         body += f'<path d="M{base} 1.1L{tip} 2.3L{base} 3.5Z" fill="{INK}" stroke="none"/>'
     body += '<path d="M11 0.4V4.8" stroke-width="0.45"/>'
-    return data_uri(_svg(22, 5, body))
+    return data_uri(picture(22, 5, body))

@@ -47,7 +47,7 @@ def numeral(value: str) -> Numeral:
     mantissa, _, exponent = (str(x) if x else format(x, "f")).partition("E")
     if x and x.adjusted() < LEAST:
         mantissa, exponent = str(x.scaleb(-x.adjusted())), str(x.adjusted())
-    negative = mantissa.startswith("-")
+    negative = x < 0
     whole, point, part = mantissa.lstrip("+-").partition(".")
     head = len(whole) % 3
     groups = ([whole[:head]] if head else []) + [whole[i : i + 3] for i in range(head, len(whole), 3)]

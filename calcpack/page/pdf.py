@@ -8,6 +8,7 @@ from __future__ import annotations
 import gc
 import logging
 import os
+import warnings
 from collections.abc import Iterator, Mapping, Sequence
 from contextlib import contextmanager
 from datetime import UTC, datetime
@@ -33,7 +34,9 @@ def render(record: Mapping[str, Any], attachments: Sequence[Attached]) -> bytes:
 
     Raises :class:`PageError` where the engine warns, a character is not in the bundled fonts or another font got in.
     """
-    import weasyprint  # half a second to load: only where a page is set
+    with warnings.catch_warnings():
+        warnings.filterwarnings("ignore", "HarfBuzz-Subset", DeprecationWarning)  # as _HARMLESS
+        import weasyprint  # half a second to load: only where a page is set
     from weasyprint.text.fonts import FontConfiguration
     from weasyprint.urls import URLFetcher
 

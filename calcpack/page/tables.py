@@ -18,6 +18,7 @@ STATUS_WORDS = {
     "preliminary": "preliminary",
     "assumed": "assumed",
 }
+TOTAL_WIDTH, WORKED_WIDTH = 91.0, 118.0  # room for the formula of the total, and of the row worked in full (mm)
 #: A row of this form stands in the table alone; any other is a line printed in full above it.
 ROW_FORMULAS = ("n * K * h_V", "K * h_V")
 VERDICTS = ("met", "not met", "not applicable", "not assessed")
@@ -112,7 +113,7 @@ def _loss_row(row: Mapping[str, Any], context: Context) -> dict[str, Any]:
 
 def _total(line: Mapping[str, Any], context: Context) -> dict[str, Any]:
     setting = layout.line(
-        line["symbol"], formula.parse(line["formula"]), values(line), context.names, measure=118 * POINT
+        line["symbol"], formula.parse(line["formula"]), values(line), context.names, measure=TOTAL_WIDTH * POINT
     )
     return {
         "address": line["address"],
@@ -127,7 +128,7 @@ def _total(line: Mapping[str, Any], context: Context) -> dict[str, Any]:
 def _worked(row: Mapping[str, Any], context: Context) -> dict[str, Any]:
     line = row["line"]
     setting = layout.line(
-        line["symbol"], formula.parse(line["formula"]), values(line), context.names, measure=118 * POINT
+        line["symbol"], formula.parse(line["formula"]), values(line), context.names, measure=WORKED_WIDTH * POINT
     )
     return {"row": row["row"], "picture": picture(setting), "value": text.quantity(line["value"], line["unit"])}
 
@@ -148,9 +149,7 @@ def _shares(table: Mapping[str, Any]) -> str:
                 f'fill="{glyphs.INK}" stroke="none">{row["row"]}</text>'
             )
         x += w
-    return glyphs.data_uri(
-        f'<svg xmlns="http://www.w3.org/2000/svg" width="112.3mm" height="3.8mm" viewBox="0 0 112.3 3.8" fill="none" stroke="{glyphs.INK}">{body}</svg>'
-    )
+    return glyphs.data_uri(glyphs.picture(112.3, 3.8, body))
 
 
 def rule(r: Mapping[str, Any], context: Context) -> dict[str, Any]:

@@ -15,6 +15,7 @@ PAPERS = {"A4": ("210mm 297mm", "20mm", "14mm"), "Letter": ("215.9mm 279.4mm", "
 LISTING_SIZE, LISTING_WIDTH = 7.8, 128 * POINT
 #: A longer statement leaves its place beside the verdict and runs over the whole width under it.
 LONG_STATEMENT = 230
+SCOPE_WIDTH = 77 * POINT  # room for the scope above a sheet
 FIGURE_SPACE = "\u2007"
 SECTIONS = (
     "Purpose and scope",
@@ -69,6 +70,7 @@ def context(record: Mapping[str, Any]) -> dict[str, Any]:
             {**n, "symbol": text.symbol(shared.names[n["name"]]), "unit": text.unit(n["unit"]) or "–"}
             for n in r["nomenclature"]
         ],
+        "system_short": cut(r["calculation"]["system"], SCOPE_WIDTH, 8),
         "strip_title": cut(r["calculation"]["title"], 57 * POINT, 8.5),
         "listing": listing(r["input_file"]["text"]),
         "fingerprint": fours(r["fingerprint"]),
@@ -157,7 +159,7 @@ def _part(part: Mapping[str, Any], shared: Context) -> dict[str, Any]:
         runs[-1]["rows"].append(
             {"group": block["group"]} if "group" in block else {"line": view(block["line"], shared)}
         )
-    return {"title": part["title"], "scope": part["scope"], "runs": runs}
+    return {"title": part["title"], "scope": part["scope"], "short": cut(part["scope"], SCOPE_WIDTH, 8), "runs": runs}
 
 
 def _rounding(row: Mapping[str, Any], shared: Context) -> dict[str, Any]:

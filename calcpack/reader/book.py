@@ -6,6 +6,7 @@ from collections.abc import Iterable
 from dataclasses import dataclass, field
 from typing import Literal
 
+from .tree import Symbol
 from .units import Quantity
 
 Class = Literal["recomputed", "bracketed", "looked up", "tabulated"]
@@ -32,6 +33,7 @@ class Book:
 
     values: dict[str, tuple[Quantity, ...]] = field(default_factory=dict)
     cites: dict[str, set[str]] = field(default_factory=dict)
+    symbols: dict[Symbol, tuple[int, str]] = field(default_factory=dict)
     classes: dict[str, Class] = field(default_factory=dict)
     findings: list[Finding] = field(default_factory=list)
     unread: list[Finding] = field(default_factory=list)
@@ -55,6 +57,11 @@ class Book:
     def cite(self, by: str, address: str) -> None:
         """Remember that line ``by`` rests on ``address``."""
         self.cites.setdefault(by, set()).add(address)
+
+    def uses(self, sheet: int, address: str, found: Iterable[Symbol]) -> None:
+        """Remember symbols in use and where each first stands."""
+        for x in found:
+            self.symbols.setdefault(x, (sheet, address))
 
     def enter(self, address: str, values: Iterable[Quantity]) -> None:
         """Let later lines cite ``address``."""

@@ -7,10 +7,11 @@ from dataclasses import dataclass
 from .bands import ACCENT, INK, Band
 from .book import Book
 from .line import cited
-from .text import rows, scalar, words
+from .text import rows, scalar, symbol, words
+from .tree import Symbol
 from .units import Quantity, named
 
-AS_GIVEN, AS_USED = (73.0, 98.0), (98.0, 129.0)
+SYMBOL, AS_GIVEN, AS_USED = (14.0, 27.0), (72.0, 98.0), (98.0, 129.0)
 
 
 @dataclass(frozen=True)
@@ -19,6 +20,7 @@ class Input:
 
     sheet: int
     address: str
+    symbol: Symbol
     given: Quantity
     used: Quantity
     by: str
@@ -30,7 +32,8 @@ def read_input(band: Band) -> Input:
     by = cited(used) if any(g.colour == ACCENT for g in used) else ""
     given = _quantity(words(band.column(*AS_GIVEN)))
     own = rows(g for g in used if g.colour == INK)
-    return Input(band.sheet, band.address, given, _quantity(str(own[0]) if own else ""), by)
+    shown = symbol([g for g in band.column(*SYMBOL) if g.serif])
+    return Input(band.sheet, band.address, shown, given, _quantity(str(own[0]) if own else ""), by)
 
 
 def _quantity(printed: str) -> Quantity:
@@ -41,6 +44,7 @@ def _quantity(printed: str) -> Quantity:
 def enter(row: Input, book: Book) -> None:
     """Let lines cite the input, and compare what is used with what is given where nothing converts it."""
     book.enter(row.address, [row.given])
+    book.uses(row.sheet, row.address, [row.symbol])
     if not row.by and row.used != row.given:
         book.note(
             row.sheet, row.address, "used otherwise than given, and no line converts it", row.used, row.given

@@ -31,12 +31,24 @@ class Operand:
 
 
 @dataclass(frozen=True)
+class Entry:
+    """What a line without operands prints: a symbol and the number and unit a table has for it."""
+
+    symbol: Symbol
+    quantity: Quantity
+
+
+@dataclass(frozen=True)
 class Line:
-    """One line; ``record`` are the digits of record, ``headline`` the figure shown large."""
+    """One line; ``record`` are the digits of record, ``headline`` the figure shown large.
+
+    ``entry`` is set, and ``forms`` empty, where the line rests on a table rather than on operands.
+    """
 
     sheet: int
     address: str
     forms: tuple[Form, ...]
+    entry: Entry | None
     operands: tuple[Operand, ...]
     source: str
     place: str
@@ -49,12 +61,24 @@ def read_line(band: Band) -> Line:
     """The line that ``band`` holds.  Raises :class:`~calcpack.reader.failures.Unread`."""
     working = band.column(*WORKING)
     operands, source = rests_on(band.column(*RESTS_ON))
+    marks = picture(band, *WORKING)
+    printed = tuple(forms(marks)) if operands else ()
     headline, record = result(band.column(*RESULT))
     place = words(g for g in working if not g.serif and g.colour == SECOND)
     return Line(
-        band.sheet, band.address, tuple(forms(picture(band, *WORKING))), operands, source, place, headline,
-        record, residuals(band, [g for g in working if not g.serif and g.colour == INK]),
+        band.sheet, band.address, printed, None if operands else entry(marks), operands, source, place,
+        headline, record, residuals(band, [g for g in working if not g.serif and g.colour == INK]),
     )  # fmt: skip
+
+
+def entry(marks: Marks) -> Entry:
+    """``symbol = number unit``, in one row.  Raises ``Unread``."""
+    printed = sorted(marks.glyphs, key=lambda g: g.x)
+    sign = next((i for i, g in enumerate(printed) if g.char == "="), 0)
+    if not sign or marks.bars:
+        raise Unread("no operand, and no entry of a table")
+    value, unit = scalar(text(printed[sign + 1 :]))
+    return Entry(symbol(printed[:sign]), Quantity(value, named(unit)))
 
 
 def picture(band: Band, left: float, right: float) -> Marks:

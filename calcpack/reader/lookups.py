@@ -13,7 +13,7 @@ from decimal import Decimal
 from .arithmetic import of_record, unit_of_record
 from .book import Book, Class
 from .failures import Unread
-from .line import Line
+from .line import Entry, Line
 from .picture import Form
 from .text import THIN
 from .tree import Op, Symbol
@@ -63,16 +63,10 @@ def _water(output: str, kelvin: float) -> tuple[str, Decimal] | None:
         raise Unread(f"water at {kelvin} K is outside the formulation") from None
 
 
-def tabulated(line: Line, shown: Decimal, book: Book) -> Class:
+def tabulated(line: Line, entry: Entry, book: Book) -> Class:
     """A table's entry: the same in formula, headline and result; a pipe's bore is derived again."""
-    if shown != line.record.value:
-        book.note(
-            line.sheet,
-            line.address,
-            "the formula shows another value than the result",
-            shown,
-            line.record.value,
-        )
+    if entry.quantity != line.record:
+        book.note(line.sheet, line.address, "the entry is not the result", entry.quantity, line.record)
     pipe = _PIPE.search(line.place.replace(THIN, ""))
     if pipe is None:
         return "tabulated"

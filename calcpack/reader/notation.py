@@ -167,7 +167,7 @@ class _Row:
         item = self.peek()
         if item is None:
             raise Unread("a lowered mark without a symbol before it")
-        if isinstance(item, Glyph) and (item.char.isdigit() or item.char == "."):
+        if isinstance(item, Glyph) and item.char in "0123456789.":
             return Token("number", Number(self.number()))
         if isinstance(item, Glyph) and item.char.isalpha():
             return self.word()

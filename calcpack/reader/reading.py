@@ -15,9 +15,11 @@ from .glyphs import Sheet, sheets
 from .inputs import Input, enter, read_input, settle
 from .line import RESULT, Line, read_line
 from .losses import Table, is_losses, read_row, worked
+from .nomenclature import check_symbols, listed_symbols
 from .recompute import recompute
 from .report import Report
 from .rules import read_rule
+from .tree import Symbol
 from .visible import check_strip, check_visible, strip
 
 _CITED = re.compile(r"exact, (C[1-9]\d*)")
@@ -52,6 +54,7 @@ class Reading:
         self.inputs: list[Input] = []
         self.conversions: dict[str, Conversion] = {}
         self.converting: list[tuple[Line, str]] = []
+        self.known: set[Symbol] = set()
         self.verdicts: list[str] = []
         self.order: list[tuple[int, str]] = []
 
@@ -86,6 +89,7 @@ class Reading:
             raise Unread("a result without an address")
         else:
             worked(band, self.table, self.book)
+            self.known |= listed_symbols(band)
             self.conversions |= {row.label: row for row in listed(band, self.book)}
 
     def _line(self, line: Line) -> None:
@@ -106,6 +110,7 @@ class Reading:
                     line.sheet, line.address, f"{label} is not its conversion in the list", " to ".join(units)
                 )
         self._addresses()
+        check_symbols(self.known, book)
         check_cover(found[0], self.verdicts, book)
         for sheet in found:
             check_visible(sheet, book)

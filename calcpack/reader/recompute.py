@@ -13,7 +13,7 @@ from .failures import Unread
 from .line import Line
 from .lookups import look_up, tabulated
 from .picture import Form
-from .tree import Number, Op, Symbol, Values, substituted, symbols
+from .tree import Number, Op, Symbol, Tree, Values, substituted, symbols
 from .units import Quantity, converted
 
 
@@ -27,7 +27,13 @@ def recompute(line: Line, book: Book) -> Class:
         if wrong := book.citation(operand.quantity, operand.address):
             book.note(line.sheet, line.address, f"{operand.symbol} {wrong[0]}", *wrong[1:])
     _headline(line, book)
+    if line.entry is not None:
+        book.uses(line.sheet, line.address, [line.entry.symbol])
+        return tabulated(line, line.entry, book)
     first = line.forms[0]
+    if isinstance(first.left, Symbol):
+        book.uses(line.sheet, line.address, [first.left])
+    book.uses(line.sheet, line.address, (operand.symbol for operand in line.operands))
     if any(form.relation != "=" for form in line.forms):
         raise Unread("a line that is no equation")
     if line.residuals:
@@ -40,8 +46,6 @@ def recompute(line: Line, book: Book) -> Class:
         return "recomputed"
     if len(line.forms) != 1:
         raise Unread(f"{len(line.forms)} forms")
-    if isinstance(first.right, Number) and not line.operands:
-        return tabulated(line, first.right.value, book)
     if len(line.operands) == 1 and "exact" in line.source:
         _conversion(line, first, book)
         return "recomputed"
@@ -75,15 +79,25 @@ def _result(line: Line, found: Decimal, book: Book) -> None:
         )
 
 
-def _equation(line: Line, symbolic: Form, numeric: Form, book: Book) -> None:
-    if substituted(symbolic.right, operand_values(line)) != numeric.right:
+def _substitution(line: Line, symbolic: Tree, numeric: Tree, book: Book) -> None:
+    """The numbers stand where the symbols do, and every operand is in the formula."""
+    if substituted(symbolic, operand_values(line)) != numeric:
         book.note(line.sheet, line.address, "the form with numbers is not the formula with its operands")
+    idle = {operand.symbol for operand in line.operands} - set(symbols(symbolic))
+    if idle:
+        book.note(line.sheet, line.address, "an operand that the formula has not", ", ".join(map(str, idle)))
+
+
+def _equation(line: Line, symbolic: Form, numeric: Form, book: Book) -> None:
+    _substitution(line, symbolic.right, numeric.right, book)
     _result(line, value(numeric.right), book)
 
 
 def _conversion(line: Line, form: Form, book: Book) -> None:
     """A conversion holds for its operand exactly, before it is rounded."""
     operand = line.operands[0].quantity
+    if line.operands[0].symbol != form.left:
+        book.note(line.sheet, line.address, "another symbol is converted", form.left, line.operands[0].symbol)
     right = converted(Fraction(operand.value), operand.unit, line.record.unit)
     printed = exact(form.right)
     if printed != right:
@@ -113,9 +127,8 @@ def _root(line: Line, book: Book) -> None:
     if len(line.forms) != 2 or line.forms[0].left is None or line.forms[1].left is None:
         raise Unread("a root without both sides in symbols and in numbers")
     symbolic, numeric = (Op("-", (form.left, form.right)) for form in line.forms if form.left is not None)
-    unknown, values = _unknown(line, symbolic), operand_values(line)
-    if substituted(symbolic, values) != numeric:
-        book.note(line.sheet, line.address, "the form with numbers is not the formula with its operands")
+    unknown = _unknown(line, symbolic)
+    _substitution(line, symbolic, numeric, book)
     root, half = line.record.value, unit_of_record(line.record.value) / 2
     signs = []
     for (tried, printed), place in zip(line.residuals, (root - half, root, root + half), strict=True):

@@ -15,7 +15,7 @@ from .glyphs import Glyph
 from .line import cited, picture
 from .picture import forms
 from .text import rows, scalar, words
-from .tree import Number
+from .tree import Number, symbols
 from .units import Quantity, converted, factor, named
 
 LEFT, RELATION, RIGHT, MARGIN = (68.0, 95.0), (95.0, 100.0), (100.0, 127.0), (127.0, 150.0)
@@ -87,6 +87,11 @@ def _inequality(band: Band, relation: str, left: Side, right: Side, book: Book) 
     found = forms(picture(band, *TEXT))
     if len(found) != 2 or any(form.relation != relation for form in found):
         raise Unread("no inequality in symbols and in numbers")
+    book.uses(
+        band.sheet,
+        band.address,
+        (s for form in found for t in (form.left, form.right) if t for s in symbols(t)),
+    )
     sides = []
     for printed, side in ((found[1].left, left), (found[1].right, right)):
         if not isinstance(printed, Number):
