@@ -43,12 +43,12 @@ CRANE: Mapping[tuple[str, str], Coefficient] = {
 SETS: Mapping[str, Mapping[tuple[str, str], Coefficient]] = {"crane": CRANE}
 SET_NAMES: Mapping[str, str] = {"crane": "Crane TP-410"}
 
-#: Largest bore, m, of each size range of the butterfly valve.
-_BUTTERFLY = ((0.230, "2 to 8 in"), (0.370, "10 to 14 in"), (0.640, "16 to 24 in"))
+#: Nominal size, in, at which each size range of the butterfly valve has ended.
+_BUTTERFLY = ((9, "2 to 8 in"), (15, "10 to 14 in"), (25, "16 to 24 in"))
 
 
-def coefficient(set_name: str, kind: str, variant: str, bore: float) -> Coefficient | None:
-    """The entry for a fitting on ``bore`` (m), or ``None`` where the set has none."""
+def coefficient(set_name: str, kind: str, variant: str, inches: float) -> Coefficient | None:
+    """The entry for a fitting of a nominal size in inches, or ``None`` where the set has none."""
     if variant == "butterfly":
-        variant = next((f"butterfly {sizes}" for limit, sizes in _BUTTERFLY if bore < limit), variant)
+        variant = next((f"butterfly {sizes}" for limit, sizes in _BUTTERFLY if inches < limit), variant)
     return SETS[set_name].get((kind, variant))

@@ -86,11 +86,7 @@ def bore(size: str, schedule: str) -> Bore:
 
     Source: ASME B36.10M through ``fluids``.  Raises :class:`OutOfRange` where the table has no such pipe.
     """
-    system, _, number = size.partition(" ")
-    try:
-        nps = DN_TO_NPS[number] if system == "DN" else _inches(number)
-    except (KeyError, ValueError, ZeroDivisionError):
-        raise OutOfRange(f"{size} is not a nominal size of the table") from None
+    nps = nominal_inches(size)
     from fluids.piping import nearest_pipe
 
     try:
@@ -102,6 +98,15 @@ def bore(size: str, schedule: str) -> Bore:
     return Bore(
         f"{inside * 1000:.2f}", f"{size} schedule {schedule}: {outside * 1000:.1f} mm less twice {wall * 1000:.2f} mm"
     )
+
+
+def nominal_inches(size: str) -> float:
+    """The NPS of a nominal size, ``NPS 16`` or ``DN 250``.  Raises :class:`OutOfRange` where there is no such size."""
+    system, _, number = size.partition(" ")
+    try:
+        return DN_TO_NPS[number] if system == "DN" else _inches(number)
+    except (KeyError, ValueError, ZeroDivisionError):
+        raise OutOfRange(f"{size} is not a nominal size of the table") from None
 
 
 def _inches(text: str) -> float:

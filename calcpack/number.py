@@ -18,12 +18,17 @@ MINUS = "\u2212"
 TIMES_TEN = "\u00d710"
 
 
+def _unit(exponent: int) -> Decimal:
+    """A power of ten, whatever decimal context the caller has set."""
+    return Decimal((0, (1,), exponent))
+
+
 def of_record(x: Decimal) -> Decimal:
     """Round to the digits of record, trailing zeros kept (``4`` becomes ``4.00000``)."""
     y = _SIX.plus(_TWELVE.plus(x))
     if y.is_zero():
         return Decimal(0)
-    return y.quantize(Decimal(1).scaleb(y.adjusted() - DIGITS + 1))
+    return y.quantize(_unit(y.adjusted() - DIGITS + 1), context=_WIDE)
 
 
 def decimal(x: Fraction) -> Decimal:
@@ -33,13 +38,13 @@ def decimal(x: Fraction) -> Decimal:
 
 def last_unit(x: Decimal) -> Decimal:
     """One unit of the last digit of record of ``x``."""
-    return Decimal(1).scaleb(x.adjusted() - DIGITS + 1)
+    return _unit(x.adjusted() - DIGITS + 1)
 
 
 def rounded(x: Decimal, decimals: int, toward: str = "even") -> Decimal:
     """``x`` at ``decimals`` places: half to ``even``, ``down`` (towards minus infinity) or ``up``."""
     mode = {"even": ROUND_HALF_EVEN, "down": ROUND_FLOOR, "up": ROUND_CEILING}[toward]
-    return x.quantize(Decimal(1).scaleb(-decimals), rounding=mode, context=_WIDE)
+    return x.quantize(_unit(-decimals), rounding=mode, context=_WIDE)
 
 
 def headline(x: Decimal, decimals: int) -> Decimal:
@@ -49,7 +54,7 @@ def headline(x: Decimal, decimals: int) -> Decimal:
     if Decimal("0.1") <= abs(x) < Decimal(10_000):
         return rounded(x, decimals)
     four = Context(prec=4, rounding=ROUND_HALF_EVEN).plus(x)
-    return four.quantize(Decimal(1).scaleb(four.adjusted() - 3))
+    return four.quantize(_unit(four.adjusted() - 3), context=_WIDE)
 
 
 def plain(x: Decimal) -> bool:

@@ -60,7 +60,6 @@ c       c        .      ratio                friction contingency
 C_d     d        N      length               model less reading: the difference in NPSH available
 D       D        .      bore                 bore of the pipe
 D_i     D        i      bore                 diameter of the inlet or bell
-D_t     D        t      bore                 bore at the gauge tap
 dH_c    ΔH       T      length               head that a warmer liquid would cost
 dh_h    Δh       L      length               change of the losses with flow
 dH_s    ΔH       s      length               change of the surface head
@@ -133,7 +132,6 @@ T       T        .      temperature          temperature of the liquid
 T_0     T        0      temperature          temperature at sea level, U.S. Standard Atmosphere 1976
 T_h     T        max    temperature          highest temperature expected
 T_x     T        x      temperature          warmer temperature for the cost line
-t       t        .      temperature          temperature as given
 V       V        .      velocity             mean velocity in the bore
 V_i     V        i      velocity             mean velocity at the inlet or bell
 z       z        .      length               static head: surface above the pump's datum

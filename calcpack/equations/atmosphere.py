@@ -32,7 +32,7 @@ EQUATIONS = (
         "p_b",
         "p_a - dp_w",
         "Lowest barometer, absolute: standard less weather allowance",
-        PRACTICE,
+        Cite("armstrong", "deducts half an inch of mercury for weather"),
     ),
     Equation(
         "barometer_station",
@@ -42,6 +42,5 @@ EQUATIONS = (
         PRACTICE,
     ),
     Equation("absolute_from_gauge", "p_s", "p_b + p_g", "Surface pressure, absolute", DEFINITION),
-    Equation("absolute_vapour_from_gauge", "p_v", "p_b + p_g", "Vapour pressure, absolute", DEFINITION),
     Equation("gauge_from_vacuum", "p_g", "-p_vac", "Gauge pressure from the vacuum as read", DEFINITION),
 )

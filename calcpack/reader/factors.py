@@ -17,6 +17,10 @@ _SUPERSCRIPTS = str.maketrans("⁰¹²³⁴⁵⁶⁷⁸⁹⁻", "0123456789-")
 _TOKEN = re.compile(rf"\s*(?:(\d[\d{THIN}]*(?:\.[\d{THIN}]+)?)|([⁻⁰¹²³⁴⁵⁶⁷⁸⁹]+)|(x)|([+−×/()]))\s*")
 
 
+#: After a factor: the row in the list of conversions.
+LISTED = re.compile(r"exact, (C[1-9]\d*)")
+
+
 def printed_tree(text: str) -> Tree:
     """A form written in one row, its only symbol ``x``.  Raises ``Unread``."""
     found, at = [], 0

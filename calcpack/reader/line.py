@@ -39,6 +39,15 @@ class Entry:
 
 
 @dataclass(frozen=True)
+class Residual:
+    """A row under a root: its label, the value tried, and left side less right side there."""
+
+    label: str
+    tried: Decimal
+    residual: Decimal
+
+
+@dataclass(frozen=True)
 class Line:
     """One line; ``record`` are the digits of record, ``headline`` the figure shown large.
 
@@ -54,7 +63,7 @@ class Line:
     place: str
     headline: Quantity
     record: Quantity
-    residuals: tuple[tuple[Decimal, Decimal], ...]
+    residuals: tuple[Residual, ...]
 
 
 def read_line(band: Band) -> Line:
@@ -137,8 +146,8 @@ def result(glyphs: Sequence[Glyph]) -> tuple[Quantity, Quantity]:
     return Quantity(large, unit), Quantity(digits, named(own) if own else unit)
 
 
-def residuals(band: Band, glyphs: Sequence[Glyph]) -> tuple[tuple[Decimal, Decimal], ...]:
-    """The rows under a root: the value tried, and left side less right side there."""
+def residuals(band: Band, glyphs: Sequence[Glyph]) -> tuple[Residual, ...]:
+    """The rows under a root, three or none.  Raises ``Unread``."""
     edges = [band.edge + (x - 0.3) * MM for x in ROOT_COLUMNS]
     found = []
     for row in rows(glyphs):
@@ -149,7 +158,7 @@ def residuals(band: Band, glyphs: Sequence[Glyph]) -> tuple[tuple[Decimal, Decim
         label, tried, residual = cells
         if not label or not residual.startswith("residual "):
             raise Unread(f"{str(row)!r} is no row of a root")
-        found.append((whole(tried), whole(residual.removeprefix("residual "))))
+        found.append(Residual(label, whole(tried), whole(residual.removeprefix("residual "))))
     if len(found) not in (0, 3):
         raise Unread(f"{len(found)} rows of a root, 3 expected")
     return tuple(found)

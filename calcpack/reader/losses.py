@@ -15,7 +15,7 @@ from .failures import Unread
 from .line import cited, picture, whole
 from .picture import forms
 from .text import is_number, rows, scalar, words
-from .tree import Number, Op, Symbol, Tree
+from .tree import Number, Op, Symbol, Tree, symbols
 from .units import Quantity, named
 
 LABEL, FACTORS = (14.0, 21.0), ((64.0, 76.0), (76.0, 96.0), (96.0, 114.0))
@@ -97,6 +97,7 @@ def _total(band: Band, record: Quantity, table: Table, book: Book) -> None:
     found = forms(picture(band, *SUM))
     if len(found) != 2 or not (isinstance(found[0].right, Op) and found[0].right.name == "sum"):
         raise Unread("a total that is no sum")
+    book.uses(band.sheet, band.address, (s for x in (found[0].left, found[0].right) if x for s in symbols(x)))
     if not table.losses or found[1].right != _sum(table.losses):
         book.note(band.sheet, band.address, "the sum is not that of the rows above it")
     total = of_record(value(found[1].right))
@@ -129,6 +130,7 @@ def worked(band: Band, table: Table, book: Book) -> None:
     printed = forms(picture(part, 14.0, 150.0))
     if len(printed) != 2 or not isinstance(printed[0].left, Symbol):
         raise Unread(f"row {label[1]} worked in full has {len(printed)} forms")
+    book.uses(band.sheet, "", symbols(printed[0].right))
     factors = _factors(printed[1].right)
     if factors not in (numbers, numbers[1:]) or len(_factors(printed[0].right)) != len(factors):
         book.note(band.sheet, "", f"row {label[1]} worked in full has other numbers than the table")

@@ -12,7 +12,7 @@ EDGES = (14.0, 34.0, 147.0)
 
 
 def listed_symbols(band: Band) -> set[Symbol]:
-    """Symbols that ``band`` explains: a symbol in the serif at the left, its meaning in the sans beside it."""
+    """Symbols that ``band`` explains: a symbol in the serif at the left, words in the sans beside it."""
     low, middle, high = (band.edge + (x - 0.3) * MM for x in EDGES)
     found = set()
     for row in rows(g for g in band.glyphs if low <= g.x < high):

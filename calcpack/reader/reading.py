@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-import re
 from collections import Counter
 from collections.abc import Sequence
 
@@ -10,6 +9,7 @@ from .bands import Band, bands
 from .book import Book, Finding
 from .conversions import Conversion, listed
 from .cover import check_cover
+from .factors import LISTED
 from .failures import NotAPackage, Undefined, Unread
 from .glyphs import Sheet, sheets
 from .inputs import Input, enter, read_input, settle
@@ -21,8 +21,6 @@ from .report import Report
 from .rules import read_rule
 from .tree import Symbol
 from .visible import check_strip, check_visible, strip
-
-_CITED = re.compile(r"exact, (C[1-9]\d*)")
 
 
 def verify(pdf: bytes) -> Report:
@@ -95,7 +93,7 @@ class Reading:
     def _line(self, line: Line) -> None:
         self.book.classes[line.address] = recompute(line, self.book)
         self.book.enter(line.address, [line.record])
-        if match := _CITED.search(line.source):
+        if match := LISTED.search(line.source):
             self.converting.append((line, match[1]))
 
     def closed(self, found: Sequence[Sheet]) -> Report:

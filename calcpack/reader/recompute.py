@@ -8,7 +8,7 @@ from fractions import Fraction
 
 from .arithmetic import decimal, exact, of_record, rounded, unit_of_record, value
 from .book import Book, Class
-from .factors import same_factor
+from .factors import LISTED, same_factor
 from .failures import Unread
 from .line import Line
 from .lookups import look_up, tabulated
@@ -110,6 +110,8 @@ def _conversion(line: Line, form: Form, book: Book) -> None:
         )
     if _first_number(form) != operand.value:
         book.note(line.sheet, line.address, "the form does not begin with its operand", form.right, operand)
+    if LISTED.search(line.source) is None:
+        book.note(line.sheet, line.address, "the conversion names no row of the list")
     if wrong := same_factor(line.source, operand.unit, line.record.unit):
         book.note(line.sheet, line.address, "the factor is not the exact one", *wrong)
     _result(line, decimal(printed), book)
@@ -131,9 +133,12 @@ def _root(line: Line, book: Book) -> None:
     _substitution(line, symbolic, numeric, book)
     root, half = line.record.value, unit_of_record(line.record.value) / 2
     signs = []
-    for (tried, printed), place in zip(line.residuals, (root - half, root, root + half), strict=True):
-        if tried != place:
-            book.note(line.sheet, line.address, "a residual stands at another value", tried, place)
+    labels = (f"{unknown.base} − ½ unit", f"root {unknown.base}", f"{unknown.base} + ½ unit")
+    for row, place, label in zip(line.residuals, (root - half, root, root + half), labels, strict=True):
+        printed = row.residual
+        if (row.label, row.tried) != (label, place):
+            found = f"{row.label} {row.tried}", f"{label} {place}"
+            book.note(line.sheet, line.address, "a residual stands at another value", *found)
         residual = value(numeric, {unknown: place})
         signs.append(residual > 0)
         if rounded(residual, printed) != printed:

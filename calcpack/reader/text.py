@@ -37,14 +37,15 @@ class Row:
 
 def rows(glyphs: Iterable[Glyph]) -> list[Row]:
     """``glyphs`` sorted into rows from the top."""
-    found: list[tuple[float, list[Glyph]]] = []
+    near: dict[int, list[tuple[float, list[Glyph]]]] = {}
     for g in sorted(glyphs, key=lambda g: -g.size):
-        row = next((row for row in found if abs(row[0] - g.y) < ROW), None)
-        if row is None:
-            found.append((g.y, [g]))
+        at = int(g.y // ROW)
+        close = [row for i in (at - 1, at, at + 1) for row in near.get(i, ()) if abs(row[0] - g.y) < ROW]
+        if close:
+            min(close, key=lambda row: abs(row[0] - g.y))[1].append(g)
         else:
-            row[1].append(g)
-    found.sort(key=lambda row: -row[0])
+            near.setdefault(at, []).append((g.y, [g]))
+    found = sorted((row for each in near.values() for row in each), key=lambda row: -row[0])
     return [Row(y, tuple(sorted(row, key=lambda g: g.x))) for y, row in found]
 
 

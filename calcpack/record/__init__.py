@@ -43,7 +43,7 @@ def assemble(study: Study) -> Json:
         "scope": words.scope(study),
         "exclusions": [words.CAUTIONS[-1]],
         "criteria": [{"rule": r["address"], "text": r["criterion"], "source": r["source"]} for r in judged],
-        "method": words.method(study),
+        "method": words.method(study, references),
         "inputs": inputs,
         "unused": _unused(study),
         "assumptions": _assumptions(study, inputs),

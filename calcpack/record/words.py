@@ -2,8 +2,10 @@
 
 from __future__ import annotations
 
+from ..references import Cite
 from ..source.inputs import Calculation
 from ..study import Study
+from .lines import References
 
 CAUTIONS = (
     "This package is prepared by a computer program from one input file. It must be reviewed, line by line, by a qualified "
@@ -65,13 +67,13 @@ _ROUNDING = (
     "Each line is computed from the printed values above it, in one coherent system of units ({units}), to 50 digits, and rounded once: "
     "first to 12, then half to even to 6 significant digits. The small figures are these values of record. A reader who computes to at least 12 "
     "digits, rounds to 12 and then half to even to 6 finds the same. A second run at full precision stands beside it (section 12): it shows what the "
-    "rounding of lines does to each result. NIST GLP 9 advises against rounding intermediate values; it is done here so that every printed line "
-    "re-computes from the printed numbers, and the proof that it does not matter is printed."
+    "rounding of lines does to each result. NIST GLP 9 {glp9} advises against rounding intermediate values; it is done here so that every "
+    "printed line re-computes from the printed numbers, and the proof that it does not matter is printed."
 )
 _UNITS = {"SI": "m, s, kg, N, Pa", "US": "ft, s, slug, lbf"}
 
 
-def method(study: Study) -> list[str]:
+def method(study: Study, references: References) -> list[str]:
     """The method, why this route, and how numbers are treated."""
     words = [_WHY[study.route]]
     if study.route != "measured":
@@ -88,7 +90,7 @@ def method(study: Study) -> list[str]:
     words.append(
         "Properties of water are those of the saturated liquid at the temperature of the state; a cited value replaces a look-up."
     )
-    words.append(_ROUNDING.format(units=_UNITS[study.calculation.units]))
+    words.append(_ROUNDING.format(units=_UNITS[study.calculation.units], glp9=references.text(Cite("glp9"))))
     return words
 
 

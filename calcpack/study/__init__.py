@@ -136,6 +136,12 @@ def _submergence(entry: Entry, worst: State) -> Check:
     if free_surface and not missing:
         found = need.submergence(entry, worst, npsh.flow_of(entry, worst))
         there_is, needed = found.there_is, found.needed
+        if c.criteria.submergence is None:
+            entry.assume(
+                "submergence",
+                "The least submergence is that of ANSI/HI 9.8, D (1 + 2.3 F)",
+                "the file names no criterion; the project may ask for another",
+            )
     source = _cited(c.criteria.submergence.provenance) if c.criteria.submergence else ""
     return submergence.check(
         there_is,

@@ -21,6 +21,8 @@ from .state import State
 LAMINAR_BELOW, TURBULENT_ABOVE = 2000, 4000
 #: Relative roughness where charts of the friction factor end (recalled, not re-read).
 ROUGHEST = Decimal("0.05")
+#: The inch in m, to choose a size range.
+INCH = 0.0254
 
 
 @dataclass(frozen=True)
@@ -100,7 +102,7 @@ def _section(
             words, k = _pipe(entry, state, liquid, section, pipe, element)
         else:
             entry.ledger.group(f"Fittings, {about}")
-            words, k = _fitting(entry, pipe, element)
+            words, k = _fitting(entry, section, pipe, element)
         operands = {"K": k, "h_V": pipe.velocity_head}
         if element.count > 1:
             operands["n"] = entry.count(element)
@@ -157,7 +159,7 @@ def _roughness(entry: Entry, section: Section) -> Value:
     )
 
 
-def _fitting(entry: Entry, pipe: Flow, element: Element) -> tuple[str, Value]:
+def _fitting(entry: Entry, section: Section, pipe: Flow, element: Element) -> tuple[str, Value]:
     ledger, line = entry.ledger, entry.calculation.line
     assert line is not None, "fittings stand in a line"
     if element.K is not None:
@@ -168,7 +170,7 @@ def _fitting(entry: Entry, pipe: Flow, element: Element) -> tuple[str, Value]:
         if element.kind == "elbow"
         else element.shape or element.type or element.flow
     )
-    found = coefficient(line.fitting_set, element.kind, variant, pipe.bore.shadow)
+    found = coefficient(line.fitting_set, element.kind, variant, _inches(section, pipe))
     if found is None:
         known = ", ".join(v for k, v in SETS[line.fitting_set] if k == element.kind)
         entry.refuse(
@@ -199,6 +201,11 @@ def _fitting(entry: Entry, pipe: Flow, element: Element) -> tuple[str, Value]:
         found.cite,
     )
     return words, ledger.apply("fitting_coefficient", {"m": multiple, "f_T": rough}, found.title)
+
+
+def _inches(section: Section, pipe: Flow) -> float:
+    """The nominal size of a section, or its bore where no size is given."""
+    return lookup.nominal_inches(section.pipe.size) if section.pipe.size else pipe.bore.shadow / INCH
 
 
 def _strainer(entry: Entry, state: State, flow: Value, liquid: Liquid, element: Element) -> Value:
