@@ -10,6 +10,7 @@ from __future__ import annotations
 from collections import Counter
 from collections.abc import Mapping, Sequence
 from decimal import Decimal
+from fractions import Fraction
 from typing import Any, Literal
 
 from . import lookup, root
@@ -103,7 +104,7 @@ class Ledger:
         file_line: int = 0,
         provenance: Provenance | None = None,
     ) -> Value:
-        """Enter an input or a constant as typed, and convert it on a line of its own where its unit is not coherent."""
+        """Enter an input or a constant as typed; :meth:`convert` brings it to the unit in which it enters formulas."""
         identity = ("given", symbol, key or title, quantity.text, quantity.unit.name)
         if identity not in self._made:
             value = Value(self._address(INPUTS), symbol, quantity.number, float(quantity.si()), quantity.unit, title)
@@ -118,16 +119,14 @@ class Ledger:
                     provenance=provenance,
                 )
             )
-            self._made[identity] = value
-        used = self.convert(self._made[identity])
-        self.used[self._made[identity].address] = used
-        return used
+            self._made[identity] = self.used[value.address] = value
+        return self._made[identity]
 
     def constant(self, symbol: str) -> Value:
         """A constant of the tool, entered among the inputs."""
         c = lookup.CONSTANTS[symbol]
         quantity = parse(c.text, NOMENCLATURE[symbol].kind)
-        return self.given(symbol, c.title, quantity, kind="constant", cite=c.cite)
+        return self.convert(self.given(symbol, c.title, quantity, kind="constant", cite=c.cite))
 
     def convert(self, value: Value) -> Value:
         """``value`` in the coherent unit of the display system: itself, or a conversion line with its exact factor."""
@@ -140,6 +139,8 @@ class Ledger:
             record = of_record(evaluate(tree, {value.symbol: value.record}, InDecimal()))
             made = Value(self._address(COMPUTATION), value.symbol, record, value.shadow, to, value.title)
             self._made["convert", value.address] = made
+            if value.address in self.used:
+                self.used[value.address] = made
             self._write(Line("conversion", made, tree, ((value.symbol, value),)))
         return made
 
@@ -184,12 +185,15 @@ class Ledger:
     def look_up(self, name: str, temperature: Value) -> Value:
         """A property of water at ``temperature``, in SI from the library, then converted where the display asks.
 
+        The temperature is taken as typed, exactly: no rounded kelvin stands between, for vapour pressure moves by 3 % a kelvin.
+
         Raises :class:`~calcpack.lookup.OutOfRange` outside the formulation's validity.
         """
         p = lookup.PROPERTIES[name]
         identity = ("look_up", name, temperature.address)
         if identity not in self._made:
-            record = of_record(Decimal(lookup.water(name, float(temperature.record))))
+            kelvin = float((Fraction(temperature.record) + temperature.unit.offset) * temperature.unit.factor)
+            record = of_record(Decimal(lookup.water(name, kelvin)))
             shadow = lookup.water(name, temperature.shadow)
             value = Value(
                 self._address(COMPUTATION),

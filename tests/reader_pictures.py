@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import base64
+import warnings
 from collections.abc import Mapping, Sequence
 from decimal import Decimal
 from functools import cache
@@ -32,15 +33,21 @@ def faces() -> str:
 
 def printed(settings: Sequence[Setting], rows: int = 12) -> bytes:
     """The pictures one under another, ``rows`` a sheet, each at the top of a row of :data:`ROW` points."""
-    from weasyprint import HTML
-
     body = [
         f'<div><img style="display:block;width:{s.width:.3f}pt;height:{s.height:.3f}pt" '
         f'src="data:image/svg+xml;base64,{base64.b64encode(s.svg.encode()).decode()}"></div>'
         for s in settings
     ]
     style = f"{faces()}@page{{size:250pt {ROW * rows}pt;margin:0}}body{{margin:0}}div{{height:{ROW}pt;overflow:hidden}}"
-    made = HTML(string=f"<meta charset=utf-8><style>{style}</style>{''.join(body)}").write_pdf()
+    return pdf(f"<meta charset=utf-8><style>{style}</style>{''.join(body)}")
+
+
+def pdf(html: str) -> bytes:
+    """A page of HTML as a PDF file."""
+    with warnings.catch_warnings():
+        warnings.filterwarnings("ignore", "HarfBuzz-Subset", DeprecationWarning)  # which library cuts fonts is no matter
+        from weasyprint import HTML
+    made = HTML(string=html).write_pdf()
     assert made is not None
     return bytes(made)
 

@@ -17,7 +17,9 @@ NAN, INFINITY = float("nan"), float("inf")
 
 
 def in_decimal(written: str, **values: Any) -> Any:
-    as_decimal = {k: [Decimal(repr(x)) for x in v] if isinstance(v, list) else Decimal(repr(v)) for k, v in values.items()}
+    as_decimal = {
+        k: [Decimal(repr(x)) for x in v] if isinstance(v, list) else Decimal(repr(v)) for k, v in values.items()
+    }
     return evaluate(parse(written), as_decimal, InDecimal())
 
 

@@ -127,7 +127,9 @@ SYMBOLS = ("a", "b", "rho", "NPSHA_d", "h_L", "pi")
 def random_tree(rng: random.Random, depth: int, top: bool = True) -> Node:
     """A random tree of the language."""
     if top and rng.random() < 0.2:
-        return Cmp(rng.choice((">=", "<=", ">", "<", "==")), random_tree(rng, depth, False), random_tree(rng, depth, False))
+        return Cmp(
+            rng.choice((">=", "<=", ">", "<", "==")), random_tree(rng, depth, False), random_tree(rng, depth, False)
+        )
     if depth == 0 or rng.random() < 0.15:
         number = rng.choice(("0", "7", "3.70", "2.51", "34560", "0.0065", "12345678901234567890", "0.00000012"))
         return parse(number) if rng.random() < 0.4 else Name(rng.choice(SYMBOLS))
@@ -138,8 +140,17 @@ def random_tree(rng: random.Random, depth: int, top: bool = True) -> Node:
         fn = rng.choice(("sqrt", "log10", "ln", "exp", "max", "min", "sum"))
         if fn == "sum":
             return Call(fn, (Name(rng.choice(SYMBOLS)),))
-        return Call(fn, tuple(random_tree(rng, depth - 1, False) for _ in range(2 + rng.randrange(2) if fn in ("max", "min") else 1)))
-    return Bin(rng.choice("+-*/") if kind < 0.85 else "**", random_tree(rng, depth - 1, False), random_tree(rng, depth - 1, False))
+        return Call(
+            fn,
+            tuple(
+                random_tree(rng, depth - 1, False) for _ in range(2 + rng.randrange(2) if fn in ("max", "min") else 1)
+            ),
+        )
+    return Bin(
+        rng.choice("+-*/") if kind < 0.85 else "**",
+        random_tree(rng, depth - 1, False),
+        random_tree(rng, depth - 1, False),
+    )
 
 
 def test_text_read_back_is_the_tree() -> None:

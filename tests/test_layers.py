@@ -108,9 +108,21 @@ print(json.dumps(sorted(sys.modules)))
 @pytest.mark.parametrize("sample", ["a_cooling_tower_basin", "c_transfer_pump_both_routes"])
 def test_an_assessment_loads_no_page_and_no_reader(sample: str) -> None:
     path = PACKAGE.parent / "sample_inputs" / f"{sample}.yaml"
-    done = subprocess.run([sys.executable, "-c", ASSESS, str(path)], capture_output=True, text=True, check=True, cwd=PACKAGE.parent)
+    done = subprocess.run(
+        [sys.executable, "-c", ASSESS, str(path)], capture_output=True, text=True, check=True, cwd=PACKAGE.parent
+    )
     loaded = set(json.loads(done.stdout))
-    for heavy in ("weasyprint", "jinja2", "matplotlib", "pypdfium2", "pint", "fontTools", "calcpack.page", "calcpack.reader", "calcpack.cli"):
+    for heavy in (
+        "weasyprint",
+        "jinja2",
+        "matplotlib",
+        "pypdfium2",
+        "pint",
+        "fontTools",
+        "calcpack.page",
+        "calcpack.reader",
+        "calcpack.cli",
+    ):
         assert heavy not in loaded
 
 

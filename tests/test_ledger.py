@@ -178,13 +178,17 @@ def test_looked_up_values_are_the_library_s_at_the_printed_temperature(path: Pat
     for line in found:
         kelvin = float(line["operands"][0]["value"])
         assert line["operands"][0]["unit"] == "K"
-        assert printed(Decimal(PropsSI(output[line["function"]], "T", kelvin, "Q", 0, "Water"))) == Decimal(line["value"])
+        assert printed(Decimal(PropsSI(output[line["function"]], "T", kelvin, "Q", 0, "Water"))) == Decimal(
+            line["value"]
+        )
 
 
 @pytest.mark.parametrize("path", SAMPLES, ids=lambda p: p.stem)
 def test_addresses_are_consecutive(path: Path) -> None:
     for section in ("4", "8"):
-        found = sorted(int(a.partition(".")[2]) for a in (x["address"] for x in lines(record(path))) if a.startswith(f"{section}."))
+        found = sorted(
+            int(a.partition(".")[2]) for a in (x["address"] for x in lines(record(path))) if a.startswith(f"{section}.")
+        )
         assert found == list(range(1, len(found) + 1))
 
 
@@ -197,7 +201,11 @@ def test_the_shadow_stands_beside_the_record(path: Path) -> None:
     for line in lines(record(path)):
         of = UNITS[line["unit"]]
         full, shown = float(line["shadow"]["value"]), float((Fraction(line["value"]) + of.offset) * of.factor)
-        parts = [abs(float(Fraction(o["value"]) * UNITS[o["unit"]].factor)) for o in line["operands"] if UNITS[o["unit"]].kind == of.kind]
+        parts = [
+            abs(float(Fraction(o["value"]) * UNITS[o["unit"]].factor))
+            for o in line["operands"]
+            if UNITS[o["unit"]].kind == of.kind
+        ]
         assert abs(full - shown) <= 4e-5 * max([abs(shown), *parts]), line["address"]
 
 
@@ -365,7 +373,10 @@ def test_a_group_without_lines_leaves_no_heading_and_a_heading_is_not_repeated()
 def test_a_loss_table_sums_its_printed_rows() -> None:
     book = ledger()
     head = value("h_V", "0.123457", address="4.1")
-    rows = [(str(n), f"element {n}", {"K": value("K", k, address=f"4.{n + 2}"), "h_V": head}) for n, k in enumerate(("0.5", "0.337", "1.2"))]
+    rows = [
+        (str(n), f"element {n}", {"K": value("K", k, address=f"4.{n + 2}"), "h_V": head})
+        for n, k in enumerate(("0.5", "0.337", "1.2"))
+    ]
     total = book.losses("losses", rows, "losses")
     block = book.parts[0].blocks[-1]
     assert isinstance(block, Losses)
@@ -389,15 +400,26 @@ def test_a_fingerprint_follows_the_content_and_not_the_place() -> None:
     assert other.lines()[-1].fingerprint != last[0].fingerprint
 
 
-DRIFT = (("H_s", "27.6353", "US", 27.6353 * 0.3048, "0"), ("H_s", "27.6353", "US", 27.6359 * 0.3048, "0.0006"), ("T", "302.594", "SI", 302.5944, "0.0004"))
+DRIFT = (
+    ("H_s", "27.6353", "US", 27.6353 * 0.3048, "0"),
+    ("H_s", "27.6353", "US", 27.6359 * 0.3048, "0.0006"),
+    ("T", "302.594", "SI", 302.5944, "0.0004"),
+)
 
 
 @pytest.mark.parametrize(("symbol", "record", "system", "shadow", "expected"), DRIFT)
-def test_drift_is_counted_in_the_unit_of_the_record(symbol: str, record: str, system: str, shadow: float, expected: str) -> None:
+def test_drift_is_counted_in_the_unit_of_the_record(
+    symbol: str, record: str, system: str, shadow: float, expected: str
+) -> None:
     assert float(drift(value(symbol, record, system, shadow=shadow))) == pytest.approx(float(expected), abs=1e-12)
 
 
-IN_UNIT = (("p_b", "1717.92", "US", "psi", 11.93), ("T", "302.594444", "US", "°F", 85.0), ("Q", "8.02083", "US", "gal/min", 3600.0), ("T", "273.15", "SI", "°C", 0.0))
+IN_UNIT = (
+    ("p_b", "1717.92", "US", "psi", 11.93),
+    ("T", "302.594444", "US", "°F", 85.0),
+    ("Q", "8.02083", "US", "gal/min", 3600.0),
+    ("T", "273.15", "SI", "°C", 0.0),
+)
 
 
 @pytest.mark.parametrize(("symbol", "record", "system", "to", "expected"), IN_UNIT)

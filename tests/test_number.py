@@ -96,7 +96,14 @@ def test_plain_floats_would_not_do() -> None:
     assert halves > 500 and sums > 0
 
 
-UNITS = (("26.2410", "0.0001"), ("0.0159591", "1E-7"), ("921510", "1"), ("1.23457E+6", "10"), ("-0.0912200", "1E-7"), ("1.00000", "0.00001"))
+UNITS = (
+    ("26.2410", "0.0001"),
+    ("0.0159591", "1E-7"),
+    ("921510", "1"),
+    ("1.23457E+6", "10"),
+    ("-0.0912200", "1E-7"),
+    ("1.00000", "0.00001"),
+)
 
 
 @pytest.mark.parametrize(("x", "unit"), UNITS)
@@ -139,6 +146,8 @@ def test_the_short_form_shows_enough_digits(x: str, decimals: int, expected: str
     assert str(headline(Decimal(x), decimals)) == expected
 
 
-@pytest.mark.parametrize(("x", "expected"), [("0", True), ("0.00123", True), ("0.000123", False), ("921510", True), ("1234560", False)])
+@pytest.mark.parametrize(
+    ("x", "expected"), [("0", True), ("0.00123", True), ("0.000123", False), ("921510", True), ("1234560", False)]
+)
 def test_when_a_power_of_ten_is_written(x: str, expected: bool) -> None:
     assert plain(Decimal(x)) is expected

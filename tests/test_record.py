@@ -88,7 +88,9 @@ def test_a_record_is_the_same_in_any_surroundings(surroundings: dict[str, str], 
     copy.parent.mkdir()
     copy.write_bytes(path.read_bytes())
     env = {**os.environ, **surroundings, "PYTHONPATH": str(ROOT)}
-    done = subprocess.run([sys.executable, "-c", DUMP, str(copy)], capture_output=True, check=True, cwd=tmp_path, env=env)
+    done = subprocess.run(
+        [sys.executable, "-c", DUMP, str(copy)], capture_output=True, check=True, cwd=tmp_path, env=env
+    )
     assert done.stdout == canonical(record(path))
 
 
@@ -128,7 +130,10 @@ def test_a_line_s_fingerprint_is_not_moved_by_another_line() -> None:
     before = {(x["title"], x["symbol"]): x["fingerprint"] for x in lines(recorded(plant()))}
     after = {(x["title"], x["symbol"]): x["fingerprint"] for x in lines(recorded(plant({"intake": INTAKE})))}
     assert before.items() <= after.items()
-    moved = {(x["title"], x["symbol"]): x["fingerprint"] for x in lines(recorded(plant({"pump.npsh_required.value": "5.1 m"})))}
+    moved = {
+        (x["title"], x["symbol"]): x["fingerprint"]
+        for x in lines(recorded(plant({"pump.npsh_required.value": "5.1 m"})))
+    }
     changed = {symbol for (title, symbol), value in moved.items() if before.get((title, symbol)) != value}
     assert changed == {"NPSHR", "N_r", "M_r", "M_d"}
 
@@ -144,7 +149,18 @@ computation checks findings limits cautions software rounding conversions nomenc
 @each_sample
 def test_a_record_has_every_part(path: Path) -> None:
     assert set(record(path)) == set(KEYS)
-    for part in ("purpose", "scope", "exclusions", "criteria", "method", "inputs", "assumptions", "computation", "checks", "limits"):
+    for part in (
+        "purpose",
+        "scope",
+        "exclusions",
+        "criteria",
+        "method",
+        "inputs",
+        "assumptions",
+        "computation",
+        "checks",
+        "limits",
+    ):
         assert record(path)[part], part
 
 
@@ -152,7 +168,17 @@ def test_a_record_has_every_part(path: Path) -> None:
 def test_every_caution_is_there(path: Path) -> None:
     assert record(path)["cautions"] == list(CAUTIONS)
     told = " ".join(record(path)["cautions"]).lower()
-    for word in ("reviewed", "licensed engineer", "not an independent verification", "local codes", "npsh3", "3 %", "transients", "gas", "vortices"):
+    for word in (
+        "reviewed",
+        "licensed engineer",
+        "not an independent verification",
+        "local codes",
+        "npsh3",
+        "3 %",
+        "transients",
+        "gas",
+        "vortices",
+    ):
         assert word in told, word
 
 
@@ -204,8 +230,12 @@ def test_the_counts_on_the_cover_are_those_of_the_inputs(path: Path) -> None:
     cover = record(path)["cover"]
     assert {k: cover["counts"][k] for k in ("verified", "maker", "preliminary", "assumed")} == {
         k: status[k] for k in ("verified", "maker", "preliminary", "assumed")}  # fmt: skip
-    assert cover["counts"]["without source"] == sum(not x["provenance"]["source"] and x["provenance"]["status"] != "assumed" for x in inputs)
-    assert [u["address"] for u in cover["unverified"]] == [x["address"] for x in inputs if x["provenance"]["status"] != "verified"]
+    assert cover["counts"]["without source"] == sum(
+        not x["provenance"]["source"] and x["provenance"]["status"] != "assumed" for x in inputs
+    )
+    assert [u["address"] for u in cover["unverified"]] == [
+        x["address"] for x in inputs if x["provenance"]["status"] != "verified"
+    ]
 
 
 def test_inputs_without_source_or_status_are_counted_and_named() -> None:
@@ -274,11 +304,21 @@ def test_every_conversion_used_is_listed_with_its_factor(path: Path) -> None:
 @each_sample
 def test_every_address_cited_exists(path: Path) -> None:
     of = record(path)
-    known = {x["address"] for x in lines(of)} | {c["address"] for c in of["checks"]} | {a["address"] for a in of["assumptions"]}
-    cited = [of["cover"]["governing"]] + [r["address"] for r in of["rounding"]] + [x["address"] for x in of["limits"] if x["address"]]
+    known = (
+        {x["address"] for x in lines(of)}
+        | {c["address"] for c in of["checks"]}
+        | {a["address"] for a in of["assumptions"]}
+    )
+    cited = (
+        [of["cover"]["governing"]]
+        + [r["address"] for r in of["rounding"]]
+        + [x["address"] for x in of["limits"] if x["address"]]
+    )
     cited += [c[side]["address"] for c in of["checks"] for side in ("left", "right") if c[side]]
     cited += [x["used"]["address"] for x in of["inputs"]]
-    cited += [m for _, text in leaves(of) if isinstance(text, str) for m in re.findall(r"\(line ([0-9]+\.[0-9]+)\)", text)]
+    cited += [
+        m for _, text in leaves(of) if isinstance(text, str) for m in re.findall(r"\(line ([0-9]+\.[0-9]+)\)", text)
+    ]
     assert set(cited) <= known
 
 
@@ -314,7 +354,9 @@ def test_the_tally_and_the_verdict_are_those_of_the_checks(path: Path) -> None:
 
 
 def test_the_cover_names_what_fails() -> None:
-    of = recorded(plant({"pump.npsh_required.value": "12 m", "liquid.temperature": {"average": "20 °C", "source": "S1"}}))
+    of = recorded(
+        plant({"pump.npsh_required.value": "12 m", "liquid.temperature": {"average": "20 °C", "source": "S1"}})
+    )
     assert of["cover"]["verdict"] == "not met"
     assert "short by" in of["cover"]["statement"] and "average" in of["cover"]["statement"]
     assert ". ." not in of["cover"]["statement"] and ".." not in of["cover"]["statement"]
@@ -324,7 +366,12 @@ def test_the_cover_names_what_fails() -> None:
 def test_the_proof_of_rounding_covers_every_key_result(path: Path) -> None:
     rows = {r["address"]: r for r in record(path)["rounding"]}
     keys = {x["address"] for x in lines(record(path)) if x["key_result"]}
-    sides = {c[s]["address"] for c in record(path)["checks"] for s in ("left", "right") if c[s] and c[s]["unit"] in ("m", "ft")}
+    sides = {
+        c[s]["address"]
+        for c in record(path)["checks"]
+        for s in ("left", "right")
+        if c[s] and c[s]["unit"] in ("m", "ft")
+    }
     assert keys | sides == set(rows)
     for r in rows.values():
         assert abs(Decimal(r["record"]) - Decimal(r["shadow"])) <= Decimal(r["limit"])
@@ -335,6 +382,14 @@ def test_the_sketch_adds_up(path: Path) -> None:
     """The heads drawn are those of the result: their sum is what is available."""
     sketch = record(path)["sketch"]
     assert abs(sum(Decimal(h["value"]) for h in sketch["heads"]) - Decimal(sketch["available"])) <= Decimal("1.5e-4")
+
+
+def test_rows_of_a_loss_table_are_told_apart() -> None:
+    section = plant()["line"]["sections"][0]
+    of = recorded(plant({"line.sections": [section, {**section, "id": "L2"}]}))
+    (table,) = [b["losses"] for part in of["computation"] for b in part["blocks"] if "losses" in b]
+    labels = [row["row"] for row in table["rows"]]
+    assert len(labels) == 8 == len(set(labels)) and labels.count(table["worked"]) == 1
 
 
 def test_no_record_names_a_place_of_this_machine() -> None:
@@ -370,7 +425,9 @@ def test_sample_a_heads_by_the_psi_to_feet_constant() -> None:
 
 def test_sample_a_by_a_short_calculation() -> None:
     """27.63 + 4.00 - 1.38 - losses; losses 2.90 + 0.621 (0.477 + ΣK 1.41) = 4.07: scenario's ΣK and friction to 0.1 ft."""
-    assert figure(sample("a"), "NPSHA_d") == pytest.approx(27.63 + 4.00 - 1.38 - (2.90 + 0.621 * (0.477 + 1.41)), abs=0.1)
+    assert figure(sample("a"), "NPSHA_d") == pytest.approx(
+        27.63 + 4.00 - 1.38 - (2.90 + 0.621 * (0.477 + 1.41)), abs=0.1
+    )
 
 
 def test_sample_b_by_a_short_calculation() -> None:
@@ -393,7 +450,9 @@ def test_sample_c_readings_by_a_short_calculation() -> None:
                      or x["symbol"] == "NPSHA_m" and abs(float(x["value"]) - expected) < 0.05)  # fmt: skip
         assert found == pytest.approx(expected, abs=0.003)
     apart = [float(x["value"]) for x in lines(sample("c")) if x["symbol"] == "C_d"]
-    assert apart[0] / apart[1] == pytest.approx((320 / 240) ** 2, rel=0.02), "the deficit grows about with the flow squared"
+    assert apart[0] / apart[1] == pytest.approx((320 / 240) ** 2, rel=0.02), (
+        "the deficit grows about with the flow squared"
+    )
 
 
 def test_sample_d_by_a_short_calculation() -> None:

@@ -25,7 +25,10 @@ def flows(count: int, seed: int) -> list[tuple[Decimal, Decimal]]:
     """Random Reynolds numbers and relative roughnesses, turbulent, as they are printed."""
     rng = random.Random(seed)
     return [
-        (of_record(Decimal(4000 * 10 ** rng.uniform(0, 4.4))), of_record(Decimal(0 if rng.random() < 0.05 else 10 ** rng.uniform(-7, -1.31))))
+        (
+            of_record(Decimal(4000 * 10 ** rng.uniform(0, 4.4))),
+            of_record(Decimal(0 if rng.random() < 0.05 else 10 ** rng.uniform(-7, -1.31))),
+        )
         for _ in range(count)
     ]
 
@@ -34,7 +37,9 @@ def proof(reynolds: Decimal, roughness: Decimal, root: Decimal) -> bool:
     """Whether the residual changes sign between half a unit below ``root`` and half a unit above it."""
     half = last_unit(root) / 2
     tree = residual(TREE)
-    below, above = (evaluate(tree, {"Re": reynolds, "r": roughness, "f": x}, InDecimal()) for x in (root - half, root + half))
+    below, above = (
+        evaluate(tree, {"Re": reynolds, "r": roughness, "f": x}, InDecimal()) for x in (root - half, root + half)
+    )
     return bool(below * above < 0)
 
 

@@ -13,14 +13,29 @@ from plants import value
 from calcpack import rules
 from calcpack.formula import FormulaError
 from calcpack.references import REFERENCES, Cite
-from calcpack.rules import PASSING, Check, Rule, compare, largest_drift, margin, reported_decimals, submergence, temperature
+from calcpack.rules import (
+    PASSING,
+    Check,
+    Rule,
+    compare,
+    largest_drift,
+    margin,
+    reported_decimals,
+    submergence,
+    temperature,
+)
 from calcpack.value import Value
 
 RULES = {r.name: r for r in (margin.NPSH_MARGIN, submergence.SUBMERGENCE, temperature.HIGHEST_TEMPERATURE)}
 
 
 def npsh(
-    available: str, needed: str, flow: str = "0.05", at_flow: str = "0.05", system: str = "SI", shadow: float | None = None
+    available: str,
+    needed: str,
+    flow: str = "0.05",
+    at_flow: str = "0.05",
+    system: str = "SI",
+    shadow: float | None = None,
 ) -> Check:
     return margin.check(
         value("NPSHA_d", available, system, shadow=shadow, address="8.1"),
@@ -34,7 +49,9 @@ def npsh(
     )
 
 
-def depth(there_is: str | None, needed: str | None, free_surface: bool = True, missing: str = "", shadow: float | None = None) -> Check:
+def depth(
+    there_is: str | None, needed: str | None, free_surface: bool = True, missing: str = "", shadow: float | None = None
+) -> Check:
     return submergence.check(
         None if there_is is None else value("S", there_is, shadow=shadow, address="8.1"),
         None if needed is None else value("S_m", needed, address="8.2"),
@@ -46,7 +63,9 @@ def depth(there_is: str | None, needed: str | None, free_surface: bool = True, m
     )
 
 
-def warmest(used: str, highest: str | None, given_as: str = "highest", cost: str = "", shadow: float | None = None) -> Check:
+def warmest(
+    used: str, highest: str | None, given_as: str = "highest", cost: str = "", shadow: float | None = None
+) -> Check:
     return temperature.check(
         value("T", used, shadow=shadow, address="8.1"),
         None if highest is None else value("T_h", highest, address="8.2"),
@@ -89,8 +108,18 @@ CASES: tuple[tuple[str, Check, str, str], ...] = (
     # temperature
     ("highest_temperature", warmest("302.594", "302.594"), "met", "the highest temperature was used"),
     ("highest_temperature", warmest("302.595", "302.594"), "met", "the highest temperature was used"),
-    ("highest_temperature", warmest("297.150", "302.594", cost=". Each 5 K costs 0.1 m"), "not met", "Each 5 K costs 0.1 m"),
-    ("highest_temperature", warmest("297.150", None, "average", ". Each 5 K costs 0.1 m"), "not met", "only the average temperature"),
+    (
+        "highest_temperature",
+        warmest("297.150", "302.594", cost=". Each 5 K costs 0.1 m"),
+        "not met",
+        "Each 5 K costs 0.1 m",
+    ),
+    (
+        "highest_temperature",
+        warmest("297.150", None, "average", ". Each 5 K costs 0.1 m"),
+        "not met",
+        "only the average temperature",
+    ),
     ("highest_temperature", warmest("297.150", None, "normal"), "not met", "only the normal temperature"),
     ("highest_temperature", warmest("302.594", "302.594", shadow=302.5935), "not assessed", "within rounding"),
 )
@@ -143,7 +172,13 @@ def test_a_rule_without_numbers_claims_no_margin() -> None:
         assert (check.right, check.margin, check.percent) == (None, None, None)
 
 
-BOTH_WAYS = (("S >= S_m", "3", "2", "met"), ("S <= S_m", "3", "2", "not met"), ("S <= S_m", "2", "3", "met"), ("S > S_m", "2", "2", "not met"), ("S < S_m", "2", "2", "not met"))
+BOTH_WAYS = (
+    ("S >= S_m", "3", "2", "met"),
+    ("S <= S_m", "3", "2", "not met"),
+    ("S <= S_m", "2", "3", "met"),
+    ("S > S_m", "2", "2", "not met"),
+    ("S < S_m", "2", "2", "not met"),
+)
 
 
 @pytest.mark.parametrize(("text", "left", "right", "verdict"), BOTH_WAYS)
@@ -156,7 +191,11 @@ def test_a_rule_holds_where_its_comparison_does(text: str, left: str, right: str
         assert (check.margin >= 0) is (verdict == "met")
 
 
-NOT_RULES: tuple[tuple[str, str], ...] = (("S - S_m", "not a comparison"), ("S >= Q", "differ in dimension"), ("S >= nobody", "nomenclature"))
+NOT_RULES: tuple[tuple[str, str], ...] = (
+    ("S - S_m", "not a comparison"),
+    ("S >= Q", "differ in dimension"),
+    ("S >= nobody", "nomenclature"),
+)
 
 
 @pytest.mark.parametrize(("text", "reason"), NOT_RULES)
@@ -165,7 +204,17 @@ def test_what_is_no_comparison_of_like_with_like_is_refused(text: str, reason: s
         Rule("a_test", "A test", text, Cite(""))
 
 
-@pytest.mark.parametrize(("x", "decimals", "drift"), [("4.37380", 2, "0.001"), ("26.2410", 2, "0.001"), ("317.810", 2, "0.001"), ("1033.77", 1, "0.01"), ("-142471", 0, "1"), ("0", 2, "0.001")])
+@pytest.mark.parametrize(
+    ("x", "decimals", "drift"),
+    [
+        ("4.37380", 2, "0.001"),
+        ("26.2410", 2, "0.001"),
+        ("317.810", 2, "0.001"),
+        ("1033.77", 1, "0.01"),
+        ("-142471", 0, "1"),
+        ("0", 2, "0.001"),
+    ],
+)
 def test_a_side_may_drift_by_a_tenth_of_its_last_reported_digit(x: str, decimals: int, drift: str) -> None:
     assert reported_decimals(Decimal(x)) == decimals
     assert largest_drift(Decimal(x)) == Decimal(drift)

@@ -64,7 +64,12 @@ def systems(draw: st.DrawFn, *, kinds: tuple[str, ...] = ("open", "gas_blanketed
     elements: list[Any] = [
         {"id": "E", "kind": "entrance", "shape": draw(st.sampled_from(["flush", "inward", "bell"]))},
         {"id": "P", "kind": "pipe", "length": metres(draw(st.floats(1, 40)))},
-        {"id": "V", "kind": "valve", "type": draw(st.sampled_from(["gate", "ball", "plug", "butterfly"])), "count": number + 1},
+        {
+            "id": "V",
+            "kind": "valve",
+            "type": draw(st.sampled_from(["gate", "ball", "plug", "butterfly"])),
+            "count": number + 1,
+        },
         {"id": "F", "kind": "fitting", "name": "reducer", "K": f"{draw(st.floats(0, 2)):.3f}"},
     ]
     elements += [{"id": f"B{n}", "kind": "elbow", "radius": "long", "count": n + 1} for n in range(number)]
@@ -136,7 +141,9 @@ def test_both_routes_agree_on_one_physical_state(document: Document, elevation: 
 
 @FEW
 @given(systems(), st.sampled_from([0.6, 0.85, 1.2]), st.floats(0, 2), st.floats(-8, 8))
-def test_a_reading_is_carried_as_the_model_moves(document: Document, flow: float, level: float, barometer: float) -> None:
+def test_a_reading_is_carried_as_the_model_moves(
+    document: Document, flow: float, level: float, barometer: float
+) -> None:
     """With losses that go by the square of the flow only, a reading carried to the worst case is the model there."""
     loss = [{"id": "F", "kind": "fitting", "name": "all of the line", "K": "3.7"}]
     document = changed(document, {SECTION + "elements": loss})
@@ -223,7 +230,9 @@ def test_npsh_falls_with_the_length_of_the_line(document: Document, more: float)
 @given(systems(kinds=("open",)), st.floats(1.05, 1.6))
 def test_npsh_falls_with_the_flow(document: Document, factor: float) -> None:
     flow = float(document["pump"]["flow"]["highest"].split()[0])
-    assert npsh(studied(changed(document, {"pump.flow.highest": f"{flow * factor:.2f} m³/h"}))) < npsh(studied(document))
+    assert npsh(studied(changed(document, {"pump.flow.highest": f"{flow * factor:.2f} m³/h"}))) < npsh(
+        studied(document)
+    )
 
 
 @FEW
@@ -261,7 +270,12 @@ def test_line_rounding_stays_far_below_a_reported_digit(document: Document, unit
 def test_a_line_in_two_sections_is_the_sum_of_both() -> None:
     """Each section's loss counts on its own bore."""
     first = plant()["line"]["sections"][0]
-    second = {**first, "id": "L2", "bore": "154.1 mm", "elements": [{"id": "1", "kind": "fitting", "name": "reducer", "K": "0.4"}]}
+    second = {
+        **first,
+        "id": "L2",
+        "bore": "154.1 mm",
+        "elements": [{"id": "1", "kind": "fitting", "name": "reducer", "K": "0.4"}],
+    }
     one, both = studied(plant()), studied(plant({"line.sections": [first, second]}))
     speed = 200 / 3600 / (3.141592653589793 * 0.1541**2 / 4)
     assert npsh(one) - npsh(both) == pytest.approx(0.4 * speed**2 / 2 / 9.80665, abs=1e-6)
@@ -288,12 +302,17 @@ def test_a_fouled_strainer_loses_by_the_square_of_the_flow(drop: dict[str, str],
     """Twice the reference flow: four times the drop of the fouled screen, as head of the liquid pumped (20 °C)."""
     bare = plant({"liquid.temperature.highest": "20 °C"})
     elements = [*bare["line"]["sections"][0]["elements"], {**STRAINER, "drop": drop}]
-    assert npsh(studied(bare)) - npsh(studied(changed(bare, {SECTION + "elements": elements}))) == pytest.approx(expected, abs=2e-5)
+    assert npsh(studied(bare)) - npsh(studied(changed(bare, {SECTION + "elements": elements}))) == pytest.approx(
+        expected, abs=2e-5
+    )
 
 
 def test_a_reading_names_the_state_of_its_strainers() -> None:
     document = plant(readings=1)
-    elements = [*document["line"]["sections"][0]["elements"], {**STRAINER, "drop": {"clean": "0.1 m", "fouled": "0.3 m"}}]
+    elements = [
+        *document["line"]["sections"][0]["elements"],
+        {**STRAINER, "drop": {"clean": "0.1 m", "fouled": "0.3 m"}},
+    ]
     document = changed(document, {SECTION + "elements": elements})
     clean = studied(changed(document, {"readings.0.strainers": "clean"}))
     fouled = studied(changed(document, {"readings.0.strainers": "fouled"}))
@@ -394,7 +413,9 @@ def test_a_gauge_in_any_unit_reads_the_same(pressure: str, pascal: float, units:
 def test_a_dry_leg_counts_from_the_tap_and_a_filled_one_from_the_gauge() -> None:
     filled = studied(plant(line=False, readings=1))
     dry = plant({"readings.0.gauge.leg": "dry", "readings.0.gauge.tap_elevation": "-0.2 m"}, line=False, readings=1)
-    assert found(filled, "NPSHA_m").shadow - found(studied(dry), "NPSHA_m").shadow == pytest.approx(0.3 - -0.2, abs=1e-9)
+    assert found(filled, "NPSHA_m").shadow - found(studied(dry), "NPSHA_m").shadow == pytest.approx(
+        0.3 - -0.2, abs=1e-9
+    )
 
 
 def test_the_measured_route_counts_from_the_pump_s_datum() -> None:
@@ -406,7 +427,13 @@ def test_the_measured_route_counts_from_the_pump_s_datum() -> None:
 # --- the barometer ----------------------------------------------------------------------------------------------------
 
 #: Geometric altitude against pressure, U.S. Standard Atmosphere 1976 (tests/checks.yaml).
-ALTITUDES = (("0 m", 101325.0), ("500 m", 95461.3), ("2000 m", 79501.4), ("3000 m", 70121.2), ("5000 ft", 12.228 * 6894.757293168))
+ALTITUDES = (
+    ("0 m", 101325.0),
+    ("500 m", 95461.3),
+    ("2000 m", 79501.4),
+    ("3000 m", 70121.2),
+    ("5000 ft", 12.228 * 6894.757293168),
+)
 
 
 @pytest.mark.parametrize("units", ["SI", "US"])
@@ -418,7 +445,11 @@ def test_the_barometer_follows_the_elevation_less_the_weather(elevation: str, pa
 
 
 def test_a_station_barometer_goes_before_the_elevation() -> None:
-    site = {"elevation": "1500 m", "weather_allowance": None, "barometer": {"lowest": "97 kPa absolute", "source": "S1"}}
+    site = {
+        "elevation": "1500 m",
+        "weather_allowance": None,
+        "barometer": {"lowest": "97 kPa absolute", "source": "S1"},
+    }
     assert found(studied(plant({"site": {k: v for k, v in site.items() if v}})), "p_b").shadow == pytest.approx(97_000)
 
 
@@ -462,7 +493,11 @@ def test_the_cost_is_left_out_where_the_warmer_liquid_cannot_be_looked_up() -> N
 
 
 def test_a_reading_at_its_own_state_is_not_the_highest_temperature() -> None:
-    study = studied(plant({"supply.level": None, "readings.0.level": None, "readings.0.temperature": "12 °C"}, line=False, readings=1))
+    study = studied(
+        plant(
+            {"supply.level": None, "readings.0.level": None, "readings.0.temperature": "12 °C"}, line=False, readings=1
+        )
+    )
     (check,) = [c for c in study.checks if c.rule.name == "highest_temperature"]
     assert check.verdict == "not met" and "lower temperature" in check.reason
     assert any("own state only" in text for text in study.findings)
@@ -506,7 +541,10 @@ def test_a_cited_property_is_used_as_it_stands(change: dict[str, str], symbol: s
 
 
 def test_a_cited_property_of_water_replaces_the_look_up_at_its_temperature_only() -> None:
-    document = plant({"liquid.vapour_pressure": {"value": "4 kPa absolute", "source": "S1"}, "readings.0.temperature": "15 °C"}, readings=1)
+    document = plant(
+        {"liquid.vapour_pressure": {"value": "4 kPa absolute", "source": "S1"}, "readings.0.temperature": "15 °C"},
+        readings=1,
+    )
     study = studied(document)
     cited = [x for x in study.ledger.lines() if x.value.symbol == "p_v"]
     assert {x.kind for x in cited} == {"given", "conversion", "lookup"}
@@ -520,7 +558,13 @@ def test_a_liquid_without_look_up_is_refused_at_another_temperature() -> None:
     assert "readings[1].temperature" in message and "holds at one temperature" in message
 
 
-REYNOLDS = ((0.5, "laminar", False), (0.95, "laminar", False), (1.05, "transition", True), (1.9, "transition", True), (2.2, "turbulent", False))
+REYNOLDS = (
+    (0.5, "laminar", False),
+    (0.95, "laminar", False),
+    (1.05, "transition", True),
+    (1.9, "transition", True),
+    (2.2, "turbulent", False),
+)
 
 
 @pytest.mark.parametrize(("times", "zone", "finding"), REYNOLDS)
@@ -546,7 +590,9 @@ def test_the_transition_zone_is_a_finding(times: float, zone: str, finding: bool
 @pytest.mark.parametrize("intake", [None, INTAKE])
 def test_a_main_has_no_surface_and_so_no_submergence(intake: Document | None) -> None:
     main = {"supply": {"name": "main M-4", "kind": "main"}, "readings.0.level": None, "intake": intake}
-    study = studied(plant({k: v for k, v in main.items() if v is not None or k.startswith("readings")}, line=False, readings=1))
+    study = studied(
+        plant({k: v for k, v in main.items() if v is not None or k.startswith("readings")}, line=False, readings=1)
+    )
     (check,) = [c for c in study.checks if c.rule.name == "submergence"]
     assert check.verdict == "not applicable" and "main M-4" in check.reason and "no free surface" in check.reason
     assert (check.left, check.right) == (None, None)
@@ -561,7 +607,9 @@ INTAKES: tuple[tuple[dict[str, Any], str, str], ...] = (
 
 
 @pytest.mark.parametrize(("changes", "verdict", "word"), INTAKES)
-def test_submergence_is_judged_where_the_file_describes_an_inlet(changes: dict[str, Any], verdict: str, word: str) -> None:
+def test_submergence_is_judged_where_the_file_describes_an_inlet(
+    changes: dict[str, Any], verdict: str, word: str
+) -> None:
     study = studied(plant(changes))
     (check,) = [c for c in study.checks if c.rule.name == "submergence"]
     assert check.verdict == verdict and word in check.reason
@@ -603,8 +651,16 @@ def test_the_greater_margin_governs(asked: dict[str, str], needed: float, word: 
 BOILING: tuple[dict[str, Any], ...] = (
     {"liquid.temperature.highest": "101 °C"},
     {"liquid.temperature.highest": "100 °C", "site.barometer.lowest": "90 kPa absolute"},
-    {"liquid.temperature.highest": "120 °C", "supply.kind": "gas_blanketed", "supply.pressure": {"lowest": "98 kPa gauge", "source": "S1"}},
-    {"liquid.temperature.highest": "60 °C", "supply.kind": "gas_blanketed", "supply.pressure": {"lowest": "19.9 kPa absolute", "source": "S1"}},
+    {
+        "liquid.temperature.highest": "120 °C",
+        "supply.kind": "gas_blanketed",
+        "supply.pressure": {"lowest": "98 kPa gauge", "source": "S1"},
+    },
+    {
+        "liquid.temperature.highest": "60 °C",
+        "supply.kind": "gas_blanketed",
+        "supply.pressure": {"lowest": "19.9 kPa absolute", "source": "S1"},
+    },
 )
 
 
@@ -616,7 +672,11 @@ def test_a_liquid_that_boils_at_the_surface_is_a_fault(changes: dict[str, Any]) 
 
 def test_a_liquid_just_below_boiling_is_not() -> None:
     """Water at 60 °C boils under 19.9464 kPa (tests/checks.yaml)."""
-    changes = {"liquid.temperature.highest": "60 °C", "supply.kind": "gas_blanketed", "supply.pressure": {"lowest": "19.95 kPa absolute", "source": "S1"}}
+    changes = {
+        "liquid.temperature.highest": "60 °C",
+        "supply.kind": "gas_blanketed",
+        "supply.pressure": {"lowest": "19.95 kPa absolute", "source": "S1"},
+    }
     assert npsh(studied(plant(changes))) < 1.5
 
 
@@ -640,14 +700,28 @@ def test_a_roughness_taken_from_the_table_is_an_assumption() -> None:
 # --- what must be refused, not crash ----------------------------------------------------------------------------------
 
 REFUSED: dict[str, dict[str, Any]] = {
-    "roughness above the bore": {SECTION + "material": None, SECTION + "roughness": {"value": "600 mm", "source": "S1"}},
+    "roughness above the bore": {
+        SECTION + "material": None,
+        SECTION + "roughness": {"value": "600 mm", "source": "S1"},
+    },
     "bore below the roughness": {SECTION + "bore": "0.01 mm"},
-    "nominal size without a denominator": {SECTION + "bore": None, SECTION + "size": "NPS 1/0", SECTION + "schedule": "40"},
+    "nominal size without a denominator": {
+        SECTION + "bore": None,
+        SECTION + "size": "NPS 1/0",
+        SECTION + "schedule": "40",
+    },
     "nominal size of no table": {SECTION + "bore": None, SECTION + "size": "NPS 99", SECTION + "schedule": "40"},
     "schedule of no table": {SECTION + "bore": None, SECTION + "size": "NPS 8", SECTION + "schedule": "999"},
     "flow beyond all measure": {"pump.flow.highest": "1e90 m³/h"},
-    "fitting the set does not have": {SECTION + "elements.2": {"id": "3", "kind": "elbow", "radius": "long", "angle": 45}},
-    "butterfly valve larger than the table": {SECTION + "bore": "900 mm", SECTION + "elements.2": {"id": "3", "kind": "valve", "type": "butterfly"}},
+    "fitting the set does not have": {
+        SECTION + "elements.2": {"id": "3", "kind": "elbow", "radius": "long", "angle": 45}
+    },
+    "butterfly valve larger than the table": {
+        SECTION + "bore": "900 mm",
+        SECTION + "elements.2": {"id": "3", "kind": "valve", "type": "butterfly"},
+    },
+    "a pump that needs nothing": {"pump.npsh_required.value": "0 m"},
+    "a margin below what the pump needs": {"criteria.npsh_margin": {"ratio": "0.9"}},
     "ice": {"liquid.temperature.highest": "-1 °C"},
     "steam": {"liquid.temperature.highest": "340 °C"},
 }
@@ -657,6 +731,28 @@ REFUSED: dict[str, dict[str, Any]] = {
 def test_what_cannot_be_computed_is_a_fault_in_its_place(changes: dict[str, Any]) -> None:
     message = faults(plant(changes))
     assert re.match(r"plant\.yaml:[0-9]+:[0-9]+: ", message), "file, line and column"
+
+
+def test_a_gauge_below_absolute_zero_is_refused() -> None:
+    reading = {"readings.0.gauge.pressure": "-99 kPa gauge", "readings.0.barometer": "97 kPa absolute"}
+    assert "readings[1].gauge.pressure" in faults(plant(reading, line=False, readings=1))
+
+
+#: Ordinary hot-water plants: temperature, vessel pressure 5 % above boiling.
+HOT = (("US", "240 °F", "28 psi absolute"), ("US", "267 °F", "43 psi absolute"), ("US", "303 °F", "76 psi absolute"), ("US", "353 °F", "146 psi absolute"),
+       ("SI", "116.3 °C", "190 kPa absolute"), ("SI", "150.7 °C", "510 kPa absolute"), ("SI", "303 °F", "76 psi absolute"))  # fmt: skip
+
+
+@pytest.mark.parametrize(("units", "temperature", "pressure"), HOT)
+def test_hot_water_can_be_judged(units: str, temperature: str, pressure: str) -> None:
+    """Line rounding must not keep an ordinary plant from a verdict."""
+    vessel = {
+        "supply.kind": "gas_blanketed",
+        "supply.pressure": {"lowest": pressure, "source": "S1"},
+        "supply.level.lowest": "8 m",
+    }
+    study = studied(plant({"calculation.units": units, "liquid.temperature.highest": temperature, **vessel}))
+    assert verdicts(study)["npsh_margin"] in ("met", "not met"), study.checks[0].reason
 
 
 def choices(name: str, key: str) -> list[str]:
@@ -672,7 +768,10 @@ def offered() -> Iterator[tuple[str, Document]]:
         for each in choices("element", key):
             yield f"{kind} {each}", {SECTION + "elements.2": {"id": "3", "kind": kind, key: each}}
     for radius, angle in (("standard", 90), ("standard", 45), ("long", 90)):
-        yield f"elbow {radius} {angle}", {SECTION + "elements.2": {"id": "3", "kind": "elbow", "radius": radius, "angle": angle}}
+        yield (
+            f"elbow {radius} {angle}",
+            {SECTION + "elements.2": {"id": "3", "kind": "elbow", "radius": radius, "angle": angle}},
+        )
 
 
 @pytest.mark.parametrize("changes", dict(offered()).values(), ids=dict(offered()))

@@ -23,7 +23,7 @@ from .typeset import SIZE, Display, Setter
 POINT = 72 / 25.4  # points in a millimetre
 RESULT_WIDTH, RESULT_EDGE = 27.0, 9.4  # result column, and where its decimal points stand (mm)
 VALUE_ROOM = 19.4  # operand's value and unit beside its address (mm)
-SYMBOL_ROOM = 6.6
+SYMBOL_ROOM, SYMBOL_GAP = 6.6, 0.9
 HEADLINE, RECORD, OPERAND, SYMBOL = 10.5, 7.8, 7.8, 8.5
 _FUNCTION = re.compile(r"(\w+)\((\w+(?:, ?\w+)*)\)")
 _ROOT_LABELS = ("f − ½ unit", "root f", "f + ½ unit")
@@ -88,36 +88,31 @@ def _function(line: Mapping[str, Any], names: Mapping[str, Display]) -> Setting 
 
 
 def _entry(line: Mapping[str, Any], setter: Setter) -> Setting:
-    """A number that stands in a table: symbol = value."""
-    unit = text.unit(line["unit"])
+    """A number that stands in a table: symbol = value; its unit stands in the result column."""
     parts = [setter.symbol(line["symbol"]), setter.relation("=="), setter.tree(formula.Num(line["value"]))]
-    parts += [boxes.gap(0.25 * SIZE), boxes.text(unit, REGULAR, SIZE)] if unit else []
-    return layout.picture(parts, f"{line['symbol']} = {line['value']} {unit}".strip())
+    return layout.picture(parts, f"{line['symbol']} = {line['value']}")
 
 
-def operands(line: Mapping[str, Any], context: Context) -> dict[str, Any]:
+def operands(line: Mapping[str, Any], context: Context) -> dict[str, Markup]:
     """The column 'rests on' as three blocks side by side: symbols, values with units, addresses; row by row.
 
-    A unit that does not fit beside its number takes a row of its own.
+    A value stands further right after a wide symbol; a unit that does not fit beside its number takes a row of its own.
     """
-    listed = [(context.names[o["symbol"]], o["value"], text.unit(o["unit"]), o["address"]) for o in line["operands"]]
-    edge = max([SYMBOL_ROOM, *(text.symbol_width(shown, SYMBOL) / POINT + 1.0 for shown, *_ in listed)])
     symbols, numbers, links = Markup(""), Markup(""), Markup("")
-    for shown, value, unit, address in listed:
+    for o in line["operands"]:
+        shown, value, unit = context.names[o["symbol"]], o["value"], text.unit(o["unit"])
+        further = max(0.0, text.symbol_width(shown, SYMBOL) / POINT + SYMBOL_GAP - SYMBOL_ROOM)
         needed = text.number_width(value, SANS_REGULAR, OPERAND) + metrics.width(SANS_REGULAR, OPERAND, " " + unit)
-        below = bool(unit) and needed / POINT > SYMBOL_ROOM + VALUE_ROOM - edge
+        below = bool(unit) and needed / POINT > VALUE_ROOM - further
         end = Markup("<br><br>") if below else Markup("<br>")
         symbols += text.symbol(shown) + end
-        links += context.link(address) + end
-        numbers += text.number(value) + (Markup("<br>") if below else SANS_GAP if unit else "") + unit + Markup("<br>")
-    room = SYMBOL_ROOM + VALUE_ROOM - edge
-    return {
-        "symbols": symbols,
-        "numbers": numbers,
-        "links": links,
-        "edge": f"{edge:.1f}mm" if edge > SYMBOL_ROOM else "",
-        "room": f"{room:.1f}mm",
-    }
+        links += context.link(o["address"]) + end
+        printed = text.number(value) + ("" if below or not unit else SANS_GAP + unit)
+        numbers += (
+            Markup('<span style="margin-left:{:.1f}mm">{}</span>').format(further, printed) if further else printed
+        )
+        numbers += (Markup("<br>") + unit if below else "") + Markup("<br>")
+    return {"symbols": symbols, "numbers": numbers, "links": links}
 
 
 def _indent(value: str, face: metrics.Face, size: float) -> float:
@@ -158,9 +153,9 @@ def sources(line: Mapping[str, Any], context: Context) -> list[Markup]:
     rows: list[Markup] = []
     if line["kind"] == "conversion":
         row = context.factors.get((line["from"], line["to"]), "")
-        factor = text.linear(line["factor"]) + " " if line["factor"] != "1" else ""
+        factor = text.linear(line["factor"])
         rows.append(
-            Markup("{}exact{}").format(factor, Markup(', <a href="#{}">{}</a>').format(row, row) if row else "")
+            Markup("{} exact{}").format(factor, Markup(', <a href="#{}">{}</a>').format(row, row) if row else "")
         )
     if line["kind"] == "lookup":
         rows.append(Markup.escape(line["library"]))

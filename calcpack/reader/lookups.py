@@ -17,6 +17,7 @@ from .line import Entry, Line
 from .picture import Form
 from .text import THIN
 from .tree import Op, Symbol
+from .units import Quantity
 
 #: Function as printed -> CoolProp's name of the property and the unit of its value (saturated liquid water).
 _WATER = {
@@ -65,7 +66,7 @@ def _water(output: str, kelvin: float) -> tuple[str, Decimal] | None:
 
 def tabulated(line: Line, entry: Entry, book: Book) -> Class:
     """A table's entry: the same in formula, headline and result; a pipe's bore is derived again."""
-    if entry.quantity != line.record:
+    if entry.quantity not in (line.record, Quantity(line.record.value, "")):
         book.note(line.sheet, line.address, "the entry is not the result", entry.quantity, line.record)
     pipe = _PIPE.search(line.place.replace(THIN, ""))
     if pipe is None:

@@ -6,6 +6,7 @@ from ..number import decimal, rounded
 from ..quantity import Unit
 from ..source.inputs import Given
 from ..study import Study
+from ..study.line import label
 from ..value import Line, Value
 from .lines import Json, number
 
@@ -30,11 +31,13 @@ def sketch(study: Study) -> Json:
         for s, v in result.operands
     ]
     level = of("z_s")
-    elements = [
-        {"row": e.id, "kind": e.kind, "name": e.name or e.kind}
-        for s in (c.line.sections if c.line else ())
-        for e in s.elements
-    ]
+    elements = []
+    if c.line is not None:
+        elements = [
+            {"row": label(c.line, s, e), "kind": e.kind, "name": e.name or e.kind}
+            for s in c.line.sections
+            for e in s.elements
+        ]
     inlet = None
     if c.intake is not None:
         inlet = {"reference": c.intake.reference, "elevation": _length(ledger.coherent("z"), c.intake.elevation),

@@ -162,6 +162,12 @@ def _margin(view: View) -> Iterator[Fault]:
         yield view.fault(
             margin, "criteria.npsh_margin", wanted, "neither", "add `ratio: 1.10` or the like", "criteria"
         )
+    ratio = view.quantity("criteria", "npsh_margin", "ratio")
+    node = view.at("criteria", "npsh_margin", "ratio")
+    if ratio and node and ratio.number < 1:
+        wanted = "a ratio of 1 or more: NPSH available over NPSH required"
+        hint = "ten per cent over NPSH required is `ratio: 1.10`"
+        yield view.fault(node, "criteria.npsh_margin.ratio", wanted, ratio.text, hint, "criteria")
 
 
 def _readings(view: View) -> Iterator[Fault]:
@@ -181,6 +187,7 @@ def _readings(view: View) -> Iterator[Fault]:
             yield view.fault(
                 gauge, f"{address}.gauge.tap_elevation", wanted, "none", "add `tap_elevation`", "reading"
             )
+        yield from _gauge(view, address, reading)
         if strained and not reading.get("strainers"):
             wanted = f"`strainers: clean` or `strainers: fouled`, since the line has {listed(strained)}"
             yield view.fault(reading, f"{address}.strainers", wanted, "none", "add it", "reading")
@@ -199,3 +206,16 @@ def _readings(view: View) -> Iterator[Fault]:
                 "leave it out",
                 "reading",
             )
+
+
+def _gauge(view: View, address: str, reading: Mapping) -> Iterator[Fault]:
+    """No gauge reads below zero absolute pressure."""
+    node = view.at("gauge", "pressure", node=reading)
+    read, barometer = view.quantity("gauge", "pressure", node=reading), view.quantity("barometer", node=reading)
+    if node and read and barometer:
+        below_barometer = read.si() if read.reference == "vacuum" else -read.si()
+        if below_barometer >= barometer.si():
+            found = f"{read.text} {read.unit.name} {read.reference} under a barometer of {barometer.text} {barometer.unit.name}"
+            wanted = "a gauge reading above zero absolute pressure"
+            hint = "check the sign and the units of gauge and barometer"
+            yield view.fault(node, f"{address}.gauge.pressure", wanted, found, hint, "reading")

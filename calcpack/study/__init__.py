@@ -111,7 +111,8 @@ def _margin(available: Available, needed: need.Needed, calculation: Calculation)
 
 
 def _temperature(entry: Entry, judged: list[Available], worst: State) -> Check:
-    used = min((a.temperature for a in judged), key=lambda v: v.record)
+    entry.ledger.group("The temperature used")
+    used = entry.ledger.convert(min((a.temperature for a in judged), key=lambda v: v.shadow))
     extreme, given = warmest(entry.calculation)
     highest = need.highest_temperature(entry)
     cost = ""

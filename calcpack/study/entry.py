@@ -36,6 +36,10 @@ class Entry:
 
     def value(self, given: Given, symbol: str, title: str) -> Value:
         """Enter ``given`` as ``symbol``, converted to the display system's unit where it needs to be."""
+        return self.ledger.convert(self.typed(given, symbol, title))
+
+    def typed(self, given: Given, symbol: str, title: str) -> Value:
+        """Enter ``given`` as ``symbol`` and keep it as typed, for a look-up."""
         return self.ledger.given(
             symbol, title, given.quantity, text=given.text, key=given.key, file_line=given.line,
             provenance=_provenance(given),

@@ -11,7 +11,7 @@ from ..fitting_set import SET_NAMES, SETS, coefficient
 from ..lookup import OutOfRange
 from ..quantity import parse
 from ..references import Cite
-from ..source.inputs import Element, Pipe, Section
+from ..source.inputs import Element, Line, Pipe, Section
 from ..value import Value
 from .entry import Entry, Place
 from .liquid import Liquid, viscosity
@@ -83,10 +83,16 @@ def losses(entry: Entry, state: State, flow: Value, liquid: Liquid) -> Value:
     return entry.ledger.apply("losses_with_contingency", {"h_S": sum_of_rows, "c": contingency})
 
 
+def label(line: Line, section: Section, element: Element) -> str:
+    """How a row of the loss table is named: by the element's id, and its section's where there are several."""
+    return element.id if len(line.sections) == 1 else f"{section.id}-{element.id}"
+
+
 def _section(
     entry: Entry, state: State, flow: Value, liquid: Liquid, section: Section
 ) -> list[tuple[str, str, Mapping[str, Value] | Value]]:
-    about = section.name or section.id
+    about, line = section.name or section.id, entry.calculation.line
+    assert line is not None, "a section stands in a line"
     entry.ledger.group(f"Velocity, {about}")
     pipe = flow_in(entry, flow, bore_of(entry, section.pipe, section, about), about)
     rows: dict[str, tuple[str, str, Mapping[str, Value] | Value]] = {}
@@ -95,7 +101,7 @@ def _section(
         if element.kind == "strainer":
             entry.ledger.group(f"Strainer, element {element.id}")
             loss = _strainer(entry, state, flow, liquid, element)
-            rows[element.id] = (element.id, f"{element.name or 'Strainer'}, {state.strainers}", loss)
+            rows[element.id] = (label(line, section, element), f"{element.name or 'Strainer'}, {state.strainers}", loss)
             continue
         if element.kind == "pipe":
             entry.ledger.group(f"Friction in the straight pipe, {about}")
@@ -106,7 +112,7 @@ def _section(
         operands = {"K": k, "h_V": pipe.velocity_head}
         if element.count > 1:
             operands["n"] = entry.count(element)
-        rows[element.id] = (element.id, words, operands)
+        rows[element.id] = (label(line, section, element), words, operands)
     return [rows[element.id] for element in section.elements]
 
 

@@ -31,14 +31,14 @@ def at(entry: Entry, state: State) -> Liquid:
 
 
 def temperature_of(entry: Entry, state: State) -> Value:
-    """The temperature of ``state``, in kelvin."""
+    """The temperature of ``state``, as typed."""
     extreme, given = warmest(entry.calculation)
     title = (
         f"Temperature of the liquid, {extreme}"
         if given is state.temperature
         else "Temperature of the liquid at the reading"
     )
-    return entry.value(state.temperature, "T", title)
+    return entry.typed(state.temperature, "T", title)
 
 
 def viscosity(entry: Entry, state: State, liquid: Liquid) -> Value:

@@ -104,9 +104,9 @@ def cost_of_temperature(entry: Entry, state: State) -> Value | None:
     ledger = entry.ledger
     ledger.group("What a warmer liquid would cost")
     temperature = temperature_of(entry, state)
-    if temperature.record > WARMEST_WITH_COST:
+    if temperature.shadow > WARMEST_WITH_COST:
         return None
-    warmer = ledger.apply("warmer_temperature", {"T": temperature, "dT": ledger.constant("dT")})
+    warmer = ledger.apply("warmer_temperature", {"T": ledger.convert(temperature), "dT": ledger.constant("dT")})
     p_v = entry.look_up("vapour_pressure", temperature, state.temperature)
     p_x = entry.look_up("vapour_pressure", warmer, state.temperature)
     density = entry.look_up("density", temperature, state.temperature)
