@@ -9,8 +9,9 @@ from fractions import Fraction
 
 from .arithmetic import exact
 from .bands import INK, MM, Band
-from .book import Book
+from .book import Book, Finding
 from .factors import printed_factor, printed_tree
+from .failures import Undefined, Unread
 from .text import rows, text
 from .tree import Symbol, substituted
 from .units import converted, factor, named
@@ -30,44 +31,44 @@ class Conversion:
 
 
 def listed(band: Band, book: Book) -> list[Conversion]:
-    """The conversions that ``band`` lists; what is wrong with a factor is noted.  Raises ``Unread``."""
+    """The conversions that ``band`` lists; what is wrong with a row, or cannot be read, is noted."""
+    found = []
+    for label, before, after, printed, in_full in _cells(band):
+        try:
+            conversion = Conversion(label, named(before), named(after))
+            _check(band.sheet, conversion, printed, in_full, book)
+            found.append(conversion)
+        except (Unread, Undefined) as error:
+            book.unread.append(Finding(band.sheet, label, str(error)))
+    return found
+
+
+def _cells(band: Band) -> list[list[str]]:
+    """Label, units, factor and what is printed small below the factor, row by row; a factor may take two rows."""
     edges = [band.edge + (x - 0.3) * MM for x in COLUMNS]
     found: list[list[str]] = []
+    inside = False
     for row in rows(g for g in band.glyphs if edges[0] <= g.x < edges[-1]):
-        label, before, after, factor = (
+        label, before, after, times = (
             [g for g in row.glyphs if low <= g.x < high] for low, high in zip(edges, edges[1:], strict=False)
         )
-        if label and label[0].colour == INK and not label[0].serif and _LABEL.fullmatch(text(label)):
+        if label:
+            inside = not label[0].serif and label[0].colour == INK and bool(_LABEL.fullmatch(text(label)))
+        if label and inside:
             found.append([text(label), text(before), text(after), "", ""])
-        elif label:
-            found = [*found, []] if found and found[-1] else found  # the list is over
-        if found and found[-1]:
-            found[-1][3 if factor and factor[0].colour == INK else 4] += text(factor)
-    return [_checked(band, cells, book) for cells in found if cells]
+        if inside:
+            found[-1][3 if times and times[0].colour == INK else 4] += text(times)
+    return found
 
 
-def _checked(band: Band, cells: list[str], book: Book) -> Conversion:
-    """A row of the list; where the scales have other zeros, the conversion in full below the factor."""
-    label, before, after, printed = cells[0], named(cells[1]), named(cells[2]), cells[3]
-    right = factor(before, after)
-    if printed_factor(printed) != right:
-        book.note(band.sheet, label, "the factor is not the exact one", printed, right)
-    if cells[4].startswith(_IN_FULL):
-        _in_full(band, Conversion(label, before, after), cells[4].removeprefix(_IN_FULL), book)
-    return Conversion(label, before, after)
-
-
-def _in_full(band: Band, conversion: Conversion, printed: str, book: Book) -> None:
-    """Two points fix a conversion with a zero of its own."""
-    tree = printed_tree(printed)
-    for x in (Decimal(0), Decimal(1)):
-        right = converted(Fraction(x), conversion.before, conversion.after)
-        if exact(substituted(tree, {Symbol("x"): [x]})) != right:
-            book.note(
-                band.sheet,
-                conversion.label,
-                "the conversion in full is not exact",
-                printed,
-                f"{right} at {x}",
-            )
-            return
+def _check(sheet: int, conversion: Conversion, printed: str, in_full: str, book: Book) -> None:
+    before, after = conversion.before, conversion.after
+    if printed_factor(printed) != factor(before, after):
+        book.note(sheet, conversion.label, "the factor is not the exact one", printed, factor(before, after))
+    zero = converted(Fraction(0), before, after)
+    if zero or in_full:
+        # A conversion with a zero of its own stands in full below the factor; two points fix it.
+        tree = printed_tree(in_full.removeprefix(_IN_FULL))
+        ends = [exact(substituted(tree, {Symbol("x"): [Decimal(x)]})) for x in (0, 1)]
+        if ends != [zero, converted(Fraction(1), before, after)]:
+            book.note(sheet, conversion.label, "the conversion in full is not exact", in_full)

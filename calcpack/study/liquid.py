@@ -36,7 +36,7 @@ def temperature_of(entry: Entry, state: State) -> Value:
     title = (
         f"Temperature of the liquid, {extreme}"
         if given is state.temperature
-        else "Temperature of the liquid at the reading"
+        else f"Temperature of the liquid, {state.name}"
     )
     return entry.typed(state.temperature, "T", title)
 

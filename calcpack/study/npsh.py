@@ -39,7 +39,7 @@ class Available:
 def flow_of(entry: Entry, state: State) -> Value:
     """The flow of ``state``."""
     highest = state.flow is entry.calculation.pump.flow.highest
-    return entry.value(state.flow, "Q", "Flow of one pump, highest" if highest else "Flow at the reading")
+    return entry.value(state.flow, "Q", "Flow of one pump, highest" if highest else f"Flow of the pump, {state.name}")
 
 
 def datum(entry: Entry) -> Value:
@@ -65,7 +65,7 @@ def surface(entry: Entry, state: State) -> Surface:
     surface_head = ledger.apply("surface_head", {"p_s": p_s, "gamma": liquid.specific_weight})
     vapour_head = ledger.apply("vapour_head", {"p_v": liquid.vapour_pressure, "gamma": liquid.specific_weight})
     ledger.group("Static head")
-    word = "lowest" if state.barometer is None else "at the reading"
+    word = "lowest" if state.barometer is None else state.name
     level = entry.value(state.level, "z_s", f"Level of the surface, {word}")
     static = ledger.apply("static_head", {"z_s": level, "z_d": datum(entry)})
     return Surface(liquid, flow_of(entry, state), level, surface_head, vapour_head, static)
@@ -89,14 +89,14 @@ def measured(entry: Entry, reading: Reading, about: str) -> Available:
     ledger.group("Barometer and gauge")
     weight = liquid.specific_weight
     p_b = barometer(entry, state)
-    p_g = entry.gauge(gauge.pressure, "Inlet gauge reading")
+    p_g = entry.gauge(gauge.pressure, f"Inlet gauge reading, {state.name}")
     barometer_head = ledger.apply("barometer_head", {"p_b": p_b, "gamma": weight})
     gauge_head = ledger.apply("gauge_head", {"p_g": p_g, "gamma": weight})
     if gauge.leg == "filled":
-        height = entry.value(gauge.elevation, "z_G", "Elevation of the gauge centre, leg filled")
+        height = entry.value(gauge.elevation, "z_G", f"Elevation of the gauge centre, leg filled, {state.name}")
     else:
         assert gauge.tap_elevation is not None, "source asks for the tap's elevation where the leg is dry"
-        height = entry.value(gauge.tap_elevation, "z_G", "Elevation of the tap, gauge leg dry")
+        height = entry.value(gauge.tap_elevation, "z_G", f"Elevation of the tap, gauge leg dry, {state.name}")
     gauge_height = ledger.apply("gauge_height", {"z_G": height, "z_d": datum(entry)})
     vapour_head = ledger.apply("vapour_head", {"p_v": liquid.vapour_pressure, "gamma": weight})
     ledger.group("Velocity head at the tap")

@@ -13,7 +13,7 @@ LOWEST_SITE, HIGHEST_SITE = -5000, 11_000
 def barometer(entry: Entry, state: State) -> Value:
     """The absolute barometer of ``state``: as read there, else the site's lowest."""
     if state.barometer is not None:
-        return entry.value(state.barometer, "p_b", "Barometer at the reading, absolute")
+        return entry.value(state.barometer, "p_b", f"Barometer, absolute, {state.name}")
     site, ledger = entry.calculation.site, entry.ledger
     station = site.barometer and (site.barometer.lowest or site.barometer.normal)
     if station:
