@@ -196,6 +196,13 @@ def test_a_long_sum_goes_on_in_rows_that_begin_with_an_operator() -> None:
     assert all(text[0] in "+" and x > edge for x, text in firsts)
 
 
+def test_a_broken_product_keeps_the_brackets_of_a_leading_minus() -> None:
+    wide = " + ".join(["123.456"] * 5)
+    setting = line("z", parse(f"z_s - (-(f * L)) * ({wide})"), {"z_s": "1", "f": "2", "L": "3"}, NAMES)
+    texts = "".join(text for text, _, _ in _texts(setting.svg))
+    assert texts.count("(") == texts.count(")") == 4
+
+
 def test_a_conversion_shows_its_numbers_only() -> None:
     setting = line("Q", parse("Q * (77 / 34560)"), {"Q": "3600"}, NAMES, symbolic=False)
     assert setting.alt == "Q = 3600 * (77 / 34560)"

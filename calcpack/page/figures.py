@@ -194,7 +194,7 @@ def _pipe(d: Drawing, scale: Scale, sketch: Mapping[str, Any]) -> None:
         below = max(start, end) + 6.2 + (STAGGER if i % 2 and pitch < CROWDED else 0.0)
         d.between(x, y + half + 0.4, x, below - 1.9, 0.12, SECOND)
         d.circle(x, below, 1.9, 0.2)
-        d.label(x, below + 0.9, element["row"], "middle", size=2.5)
+        d.label(x, below + 0.9, str(i + 1), "middle", size=2.5)
     d.circle(PUMP, end, 3.2, 0.4)
     d.line(f"M{PUMP - 1.2} {end + 1.4:.2f}L{PUMP + 1.6} {end:.2f}L{PUMP - 1.2} {end - 1.4:.2f}Z", 0.25)
     d.label(PUMP, end + 6.2, sketch["pump"]["name"], "middle", bold=True)

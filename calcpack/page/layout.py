@@ -141,19 +141,23 @@ def _stacked(rows: Sequence[Box], size: float) -> Box:
     return Box(box.width, first, -pen, box.runs, box.bars)
 
 
-def _pieces(tree: Node, setter: Setter) -> list[Box]:
-    """The top-level terms, each with its operator before it; a term too wide for any row falls into its factors."""
+def _pieces(tree: Node, setter: Setter, first: bool = True) -> list[Box]:
+    """The top-level terms, each with its operator before it; a term too wide for any row falls into its factors.
+
+    ``first`` says that nothing stands before the tree, so that a leading minus needs no parentheses.
+    """
     match tree:
         case Bin("+" | "-" as op, a, b):
             operator, term = setter.joined(op, a, b, 0)
             if term.width > MEASURE * 0.75 and isinstance(b, Bin) and b.op == "*":
-                first, *rest = _pieces(b, setter)
-                return [*_pieces(a, setter), boxes.row([operator, first]), *rest]
-            return [*_pieces(a, setter), boxes.row([operator, term])]
+                factor, *rest = _pieces(b, setter, first=False)
+                return [*_pieces(a, setter, first), boxes.row([operator, factor]), *rest]
+            return [*_pieces(a, setter, first), boxes.row([operator, term])]
         case Bin("*", a, b) if setter.tree(tree).width > MEASURE * 0.75:
-            left = [setter.tree(a, 2)] if isinstance(a, Bin) and a.op in "+-" else _pieces(a, setter)
+            bracketed = isinstance(a, Bin) and a.op in "+-"
+            left = [setter.tree(a, 2, 0, first)] if bracketed else _pieces(a, setter, first)
             return [*left, boxes.row(setter.joined("*", a, b, 0))]
-    return [setter.tree(tree)]
+    return [setter.tree(tree, 0 if first else 2, 0, first)]
 
 
 def _broken(pieces: list[Box], first: float, later: float) -> list[Box]:

@@ -44,7 +44,7 @@ def listed(band: Band, book: Book) -> list[Conversion]:
 
 
 def _cells(band: Band) -> list[list[str]]:
-    """Label, units, factor and what is printed small below the factor, row by row; a factor may take two rows."""
+    """Label, units, factor and the small print below it, row by row; a factor may take two rows."""
     edges = [band.edge + (x - 0.3) * MM for x in COLUMNS]
     found: list[list[str]] = []
     inside = False

@@ -9,6 +9,7 @@ from __future__ import annotations
 import re
 from contextlib import suppress
 from decimal import Decimal
+from fractions import Fraction
 
 from .arithmetic import of_record, unit_of_record
 from .book import Book, Class
@@ -17,7 +18,7 @@ from .line import Entry, Line
 from .picture import Form
 from .text import THIN
 from .tree import Op, Symbol
-from .units import Quantity
+from .units import Quantity, converted
 
 #: Function as printed -> CoolProp's name of the property and the unit of its value (saturated liquid water).
 _WATER = {
@@ -35,12 +36,13 @@ def look_up(line: Line, form: Form, book: Book) -> Class:
     if not (isinstance(form.right, Op) and form.right.name == "*" and form.right.args[0] in _WATER):
         raise Unread("neither an equation nor a look-up that is known")
     function, argument = form.right.args
-    if [o.symbol for o in line.operands] != [argument] or line.operands[0].quantity.unit != "K":
+    if [o.symbol for o in line.operands] != [argument]:
         raise Unread("a look-up whose state is not its operand")
+    state = line.operands[0].quantity
     output, unit = _WATER[function]  # type: ignore[index]  # a Symbol: it is in the table
     if line.record.unit != unit:
         raise Unread(f"a look-up in {line.record.unit}, {unit} expected")
-    derived = _water(output, float(line.operands[0].quantity.value))
+    derived = _water(output, float(converted(Fraction(state.value), state.unit, "K")))
     if derived is None:
         return "tabulated"
     library, found = derived

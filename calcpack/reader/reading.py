@@ -62,8 +62,12 @@ class Reading:
             self.order.append((band.sheet, band.address))
         try:
             self._read(band)
-        except (Unread, Undefined, RecursionError) as error:
-            reason = "nested too deeply" if isinstance(error, RecursionError) else str(error)
+        except (Unread, Undefined, ArithmeticError, RecursionError) as error:
+            reason = (
+                str(error)
+                if isinstance(error, Unread | Undefined)
+                else "numbers or nesting beyond all bounds"
+            )
             self.book.unread.append(Finding(band.sheet, band.address, reason))
             if band.address:
                 self.book.enter(band.address, [])

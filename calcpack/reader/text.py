@@ -15,6 +15,7 @@ from .tree import Symbol
 #: Baselines nearer than this are one row (points): raised digits reach 3.8 up, rows are 9.4 apart at least.
 ROW = 4.2
 WORD = 0.13  # narrowest gap between words (em)
+ASKEW = "\ufffd"
 THIN = "\u202f"  # stands for the gap inside a number
 _RAISED = dict(zip("0123456789−", "⁰¹²³⁴⁵⁶⁷⁸⁹⁻", strict=True))
 _LEVEL = str.maketrans({raised: level.replace("−", "-") for level, raised in _RAISED.items()})
@@ -57,12 +58,20 @@ def text(glyphs: Sequence[Glyph]) -> str:
     y = next(g.y for g in glyphs if g.size == size)
     for before, g in zip((None, *glyphs), glyphs, strict=False):
         if before is not None and g.x - before.end > WORD * before.size:
-            inside = (before.char + g.char).isdigit() and g.x - before.end <= DIGIT_GAP * max(
-                before.size, g.size
-            )
+            gap = g.x - before.end
+            inside = (before.char + g.char).isdigit() and gap <= DIGIT_GAP * max(before.size, g.size)
             out += THIN if inside else " "
-        out += _RAISED.get(g.char, g.char) if g.y > y + 0.15 * size and g.size < 0.85 * size else g.char
+        out += _shown(g, (g.y - y) / (size or 1.0), small=g.size < 0.85 * size)
     return out
+
+
+def _shown(g: Glyph, rise: float, small: bool) -> str:
+    """A character of a row: itself, raised, or a mark that nothing reads where it stands askew."""
+    if abs(rise) < 0.08 and not small:
+        return g.char
+    if rise > 0.15 and small:
+        return _RAISED.get(g.char, g.char)
+    return g.char if rise < -0.08 and small else ASKEW
 
 
 def words(glyphs: Iterable[Glyph]) -> str:
