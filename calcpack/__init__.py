@@ -65,7 +65,12 @@ def verify(pdf: bytes) -> Report:
 
 
 def _record(calculation: Calculation) -> dict[str, Any]:
+    from decimal import localcontext
+
+    from .arithmetic import DECIMAL
     from .record import assemble
     from .study import run
 
-    return assemble(run(calculation))
+    # Whatever decimal context the caller works in, ours is our own.
+    with localcontext(DECIMAL):
+        return assemble(run(calculation))

@@ -67,9 +67,7 @@ KINDS: dict[str, Kind] = {
         ("0.4 m", "4 kPa"),
     ),
     "density": Kind(("density",), "positive", "a density", ("998.2 kg/m³", "62.3 lb/ft³")),
-    "dynamic_viscosity": Kind(
-        ("dynamic_viscosity",), "positive", "a dynamic viscosity", ("0.8 mPa·s", "0.8 cP")
-    ),
+    "dynamic_viscosity": Kind(("dynamic_viscosity",), "positive", "a dynamic viscosity", ("0.8 mPa·s", "0.8 cP")),
     "kinematic_viscosity": Kind(("kinematic_viscosity",), "positive", "a kinematic viscosity", ("0.8 cSt",)),
     "viscosity": Kind(
         ("dynamic_viscosity", "kinematic_viscosity"),
@@ -77,18 +75,14 @@ KINDS: dict[str, Kind] = {
         "a viscosity, dynamic or kinematic",
         ("0.8 mPa·s", "0.8 cSt"),
     ),
-    "specific_weight": Kind(
-        ("specific_weight",), "positive", "a specific weight", ("9.79 kN/m³", "62.3 lbf/ft³")
-    ),
+    "specific_weight": Kind(("specific_weight",), "positive", "a specific weight", ("9.79 kN/m³", "62.3 lbf/ft³")),
     "temperature": Kind(("temperature",), "any", "a temperature", ("24 °C", "85 °F")),
     "temperature_difference": Kind(("temperature",), "positive", "a step of temperature", ("5 K",)),
     "lapse_rate": Kind(("lapse_rate",), "any", "a lapse rate", ("0.0065 K/m",)),
     "speed": Kind(("speed",), "positive", "a speed of rotation", ("1480 r/min",)),
     "percentage": Kind(("ratio",), "not negative", "a percentage", ("10 %",)),
     "ratio": Kind(("ratio",), "positive", "a plain number above zero, without a unit", ("1.10",)),
-    "coefficient": Kind(
-        ("ratio",), "not negative", "a plain number, zero or more, without a unit", ("0.10",)
-    ),
+    "coefficient": Kind(("ratio",), "not negative", "a plain number, zero or more, without a unit", ("0.10",)),
 }
 #: Kinds typed as a plain number.
 BARE = frozenset({"ratio", "coefficient"})

@@ -48,18 +48,12 @@ def with_units(number: str, kind: str) -> str:
     return "write " + listed(f"`{number} {tail}`" for tail in tails)
 
 
-def unknown_unit(
-    number: str, name: str, reference: str | None, kind: str, wanted: str, text: str
-) -> QuantityFault:
+def unknown_unit(number: str, name: str, reference: str | None, kind: str, wanted: str, text: str) -> QuantityFault:
     """A unit that is not on the list, or not in that spelling."""
     asked = KINDS[kind]
     if kind in BARE:
         return QuantityFault("unit", wanted, shown(text), f"write `{number}`")
-    choices = [
-        spelling
-        for spelling, of in SPELLINGS.items()
-        if UNITS[of].kind in asked.dimensions and spelling != "1"
-    ]
+    choices = [spelling for spelling, of in SPELLINGS.items() if UNITS[of].kind in asked.dimensions and spelling != "1"]
     plain = unicodedata.normalize("NFKC", name).replace("^", "").translate(_LOOK_ALIKE)
     flat = re.sub(r"(?<=[a-zA-Z])3", "³", re.sub(r"(?<=[a-zA-Z])2(?!O)", "²", plain))
     candidates = (*(_MEANT.get(each) for each in (name, flat, plain)), SPELLINGS.get(plain))
@@ -82,9 +76,7 @@ def unreadable(text: str, wanted: str, kind: str) -> QuantityFault:
     odd = next((c for c in text if not c.isprintable() or (c.isspace() and c != " ")), "")
     if odd:
         name = unicodedata.name(odd, f"U+{ord(odd):04X}").lower()
-        clean = re.sub(
-            " +", " ", "".join(" " if c.isspace() else c for c in text if c.isspace() or c.isprintable())
-        )
+        clean = re.sub(" +", " ", "".join(" " if c.isspace() else c for c in text if c.isspace() or c.isprintable()))
         hint = f"write `{clean.strip()}` with ordinary spaces"
         return QuantityFault("character", wanted, f"{shown(text)}, with a hidden character ({name})", hint)
     if not text:
@@ -93,16 +85,10 @@ def unreadable(text: str, wanted: str, kind: str) -> QuantityFault:
     if comma:
         rest = text[comma.end() :]
         whole, decimals = comma.groups()
-        hint = (
-            f"write `{whole}.{decimals}{rest}`"
-            if rest or kind in BARE
-            else with_units(f"{whole}.{decimals}", kind)
-        )
+        hint = f"write `{whole}.{decimals}{rest}`" if rest or kind in BARE else with_units(f"{whole}.{decimals}", kind)
         if len(decimals) == 3 and rest:
             hint += f" or `{whole}{decimals}{rest}`, whichever is meant"
-        return QuantityFault(
-            "number", wanted, f"{shown(text)}: a comma does not mark decimals or thousands", hint
-        )
+        return QuantityFault("number", wanted, f"{shown(text)}: a comma does not mark decimals or thousands", hint)
     fraction = _FRACTION.match(text)
     if fraction and int(fraction[3]):
         value = int(fraction[1] or 0) + Fraction(int(fraction[2]), int(fraction[3]))
@@ -110,16 +96,12 @@ def unreadable(text: str, wanted: str, kind: str) -> QuantityFault:
         return QuantityFault("number", wanted, f"{shown(text)}: fractions are not read", hint)
     if grouped:
         joined = re.sub("[ \u00a0\u202f'’]", "", grouped.group()) + text[grouped.end() :]
-        return QuantityFault(
-            "number", wanted, f"{shown(text)}: thousands are not grouped", f"write `{joined}`"
-        )
+        return QuantityFault("number", wanted, f"{shown(text)}: thousands are not grouped", f"write `{joined}`")
     if re.match(r"[+\-\u2212]?(nan|inf|\.nan|\.inf)", text, re.IGNORECASE):
         return QuantityFault("number", wanted, f"{shown(text)}, which is not a finite number")
     if re.match(r"[+\-\u2212]?\.[0-9]", text):
         return QuantityFault("number", wanted, shown(text), f"write `{text.replace('.', '0.', 1)}`")
     plain = unicodedata.normalize("NFKC", text)
     if plain != text and re.match(r"[+\-]?[0-9]", plain):
-        return QuantityFault(
-            "character", wanted, f"{shown(text)}, with look-alike characters", f"write `{plain}`"
-        )
+        return QuantityFault("character", wanted, f"{shown(text)}, with look-alike characters", f"write `{plain}`")
     return QuantityFault("number", wanted, f"{shown(text)}, which does not begin with one plain number")

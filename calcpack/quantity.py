@@ -86,9 +86,7 @@ def parse(text: str, kind: str) -> Quantity:
     if kind in BARE and not rest:
         name = "1"
     elif not rest:
-        raise QuantityFault(
-            "bare number", wanted, f"{shown(text)}: a value needs its unit", with_units(typed, kind)
-        )
+        raise QuantityFault("bare number", wanted, f"{shown(text)}: a value needs its unit", with_units(typed, kind))
     if name not in SPELLINGS or (name == "1" and rest):
         raise unknown_unit(typed, name, reference, kind, wanted, text)
     found = unit(name)
@@ -116,9 +114,7 @@ def _split_reference(rest: str, text: str, wanted: str) -> tuple[str, Reference 
     if name in CARRIED:
         name, carried = CARRIED[name]
         if reference not in (None, carried):
-            raise QuantityFault(
-                "reference", wanted, f"{shown(text)}, which says both {carried} and {reference}"
-            )
+            raise QuantityFault("reference", wanted, f"{shown(text)}, which says both {carried} and {reference}")
         reference = carried
     return name, reference
 
@@ -126,11 +122,7 @@ def _split_reference(rest: str, text: str, wanted: str) -> tuple[str, Reference 
 def _check_reference(value: Quantity, asked: Kind, wanted: str, text: str) -> None:
     plain = f"{value.text} {value.unit.name}"
     if value.reference and not asked.references:
-        why = (
-            "a pressure difference counts from nothing"
-            if value.unit.kind == "pressure"
-            else "that is no pressure"
-        )
+        why = "a pressure difference counts from nothing" if value.unit.kind == "pressure" else "that is no pressure"
         raise QuantityFault("reference", wanted, f"{shown(text)}: {why}", f"write `{plain}`")
     if asked.references and value.reference not in asked.references:
         found = (
@@ -139,9 +131,7 @@ def _check_reference(value: Quantity, asked: Kind, wanted: str, text: str) -> No
             else (f"which does not say {listed(asked.references)}")
         )
         hint = listed(f"`{plain} {word}`" for word in asked.references)
-        raise QuantityFault(
-            "reference", wanted, f"{shown(text)}, {found}", "" if value.reference else f"write {hint}"
-        )
+        raise QuantityFault("reference", wanted, f"{shown(text)}, {found}", "" if value.reference else f"write {hint}")
 
 
 _COUNTS = {"gauge": "the barometer", "absolute": "zero pressure", "vacuum": "the barometer downwards"}
@@ -157,9 +147,7 @@ def _check_range(value: Quantity, asked: Kind, wanted: str, text: str) -> None:
         raise QuantityFault("range", wanted, f"{shown(text)}, which is no size met in practice")
     si = value.si()
     if value.unit.kind == "temperature" and si < 0:
-        raise QuantityFault(
-            "range", wanted, f"{shown(text)}, which is below absolute zero (-273.15 °C, -459.67 °F)"
-        )
+        raise QuantityFault("range", wanted, f"{shown(text)}, which is below absolute zero (-273.15 °C, -459.67 °F)")
     if value.reference == "absolute" and si < 0:
         raise QuantityFault(
             "range",
@@ -171,9 +159,7 @@ def _check_range(value: Quantity, asked: Kind, wanted: str, text: str) -> None:
         )
     if value.reference == "vacuum" and si < 0:
         positive = f"{value.text.lstrip('-')} {value.unit.name} vacuum"
-        raise QuantityFault(
-            "range", wanted, f"{shown(text)}: a vacuum is a positive number", f"write `{positive}`"
-        )
+        raise QuantityFault("range", wanted, f"{shown(text)}: a vacuum is a positive number", f"write `{positive}`")
     below = {"gauge": -si, "vacuum": si}.get(value.reference or "", Fraction(0))
     if below > _FULL_VACUUM:
         raise QuantityFault(

@@ -113,7 +113,9 @@ def main() -> None:
     me = [sys.executable, "-m", "calcpack"]
     ours, floor = paired([*me, "assess", str(SAMPLE)], [sys.executable, "-c", LOOK_UPS])
     start, _ = paired([sys.executable, "-c", "pass"], [sys.executable, "-c", "pass"])
-    print(f"assess cold             {ours:6.3f} s   look-ups alone {floor:6.3f} s   ratio {ours / floor:5.2f}   bare Python {start:.3f} s")
+    print(
+        f"assess cold             {ours:6.3f} s   look-ups alone {floor:6.3f} s   ratio {ours / floor:5.2f}   bare Python {start:.3f} s"
+    )
 
     with tempfile.TemporaryDirectory() as folder:
         target = str(Path(folder) / "p.pdf")
@@ -125,17 +127,23 @@ def main() -> None:
         plain = [sys.executable, "-c", PLAIN, str(pages), str(Path(folder) / "plain.pdf")]
         ours, floor = paired(draft, plain, 3)
         same = len(pypdfium2.PdfDocument(str(Path(folder) / "plain.pdf")))
-        print(f"draft cold, {pages:2} pages    {ours:6.3f} s   plain text, {same} pages {floor:6.3f} s   ratio {ours / floor:5.2f}")
+        print(
+            f"draft cold, {pages:2} pages    {ours:6.3f} s   plain text, {same} pages {floor:6.3f} s   ratio {ours / floor:5.2f}"
+        )
         ours, floor = paired([*me, "verify", target], [sys.executable, "-c", "import pypdfium2"], 3)
         print(f"verify cold             {ours:6.3f} s   ({ours / pages * 1000:.0f} ms a page)")
-        print(f"peak memory             assess {peak([*me, 'assess', str(SAMPLE)]):.0f} MB   draft {peak(draft):.0f} MB")
+        print(
+            f"peak memory             assess {peak([*me, 'assess', str(SAMPLE)]):.0f} MB   draft {peak(draft):.0f} MB"
+        )
 
     ratio, name = arrays()
     print(f"array path              worst ratio to hand-written numpy {ratio:.2f} ({name}, 100 000 points)")
     calculation = load(SAMPLE)
     run(calculation)
     whole, lines = best(lambda: run(calculation), 20), len(run(calculation).ledger.lines())
-    print(f"ledger run              {whole * 1e3:.1f} ms, {lines} lines, {whole / lines * 1e6:.0f} µs a line in both books")
+    print(
+        f"ledger run              {whole * 1e3:.1f} ms, {lines} lines, {whole / lines * 1e6:.0f} µs a line in both books"
+    )
     cost, count = tree_cost()
     print(f"one evaluation          {cost:.1f} µs in floats, mean of {count} equations")
     print(f"peak memory of this run {resource.getrusage(resource.RUSAGE_SELF).ru_maxrss / 1024:.0f} MB")

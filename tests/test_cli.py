@@ -165,7 +165,9 @@ def test_killed_at_any_moment_leaves_old_or_new(tmp_path: Path) -> None:
     seen = set()
     for step in range(40):
         target.write_bytes(b"old")
-        process = subprocess.Popen(command, cwd=ROOT, env=environment, stdout=subprocess.DEVNULL, stderr=subprocess.DEVNULL)
+        process = subprocess.Popen(
+            command, cwd=ROOT, env=environment, stdout=subprocess.DEVNULL, stderr=subprocess.DEVNULL
+        )
         time.sleep(length * (0.5 + 0.6 * step / 40))
         process.send_signal(signal.SIGKILL)
         process.wait()

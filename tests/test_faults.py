@@ -18,9 +18,7 @@ NOWHERE = ""
 EXPECTED: dict[str, list[tuple[str, str, str, str]]] = {
     "unknown_key": [("flwo:", "pump.flwo", "`flow`", "`flow`")],
     "missing_key": [("name: P-3 A/B", "pump.datum_elevation", "`datum_elevation`", "datum_elevation: ")],
-    "bare_number": [
-        ("length: 9.5}", "line.sections[P1].elements[2].length", "a value needs its unit", "`9.5 m`")
-    ],
+    "bare_number": [("length: 9.5}", "line.sections[P1].elements[2].length", "a value needs its unit", "`9.5 m`")],
     "wrong_dimension": [("temperature: 21 m", "readings[1].temperature", "m³/h measures a flow", "")],
     "unit_not_known": [("30 C", "liquid.temperature.highest", "a temperature", "`30 °C`")],
     "unit_near_miss": [("118 m3/hr", "readings[1].flow", "a flow", "`118 m³/h`")],
@@ -31,9 +29,7 @@ EXPECTED: dict[str, list[tuple[str, str, str, str]]] = {
     "barometer_as_gauge": [("100.2 kPa gauge", "readings[1].barometer", "an absolute pressure", "")],
     "difference_as_gauge": [("1.7 kPa gauge", "site.weather_allowance", "pressure difference", "`1.7 kPa`")],
     "below_absolute_zero": [("-300 °C", "readings[1].temperature", "below absolute zero", "")],
-    "absolute_pressure_below_zero": [
-        ("-2.5 kPa absolute", "readings[1].barometer", "cannot be below zero", "")
-    ],
+    "absolute_pressure_below_zero": [("-2.5 kPa absolute", "readings[1].barometer", "cannot be below zero", "")],
     "vacuum_negative": [("kPa vacuum", "readings[1].gauge.pressure", "positive number", "`2.5 kPa vacuum`")],
     "below_full_vacuum": [("-250 kPa gauge", "readings[1].gauge.pressure", "full vacuum", "")],
     "not_a_number": [("length: nan m", "line.sections[P1].elements[2].length", "not a finite number", "")],
@@ -76,9 +72,7 @@ EXPECTED: dict[str, list[tuple[str, str, str, str]]] = {
     "duplicate_element": [("{id: 2, kind: elbow", "line.sections[P1].elements[2].id", "each id once", "")],
     "level_order": [("lowest: 3.10 m", "supply.level.normal", "not below `lowest`", "")],
     "temperature_order": [("normal: 34 °C", "liquid.temperature.highest", "not below `normal`", "")],
-    "size_without_schedule": [
-        ("      size: DN 150", "line.sections[P1].schedule", "`schedule`", "schedule: STD")
-    ],
+    "size_without_schedule": [("      size: DN 150", "line.sections[P1].schedule", "`schedule`", "schedule: STD")],
     "no_bore": [("- id: P1", "line.sections[P1]", "`size` with `schedule`, or `bore`", "bore: ")],
     "dry_leg": [("leg: dry", "readings[1].gauge.tap_elevation", "`tap_elevation`", "`tap_elevation`")],
     "blanket_without_pressure": [("name: Wash water tank", "supply.pressure", "`pressure`", "22 kPa gauge")],
@@ -88,9 +82,7 @@ EXPECTED: dict[str, list[tuple[str, str, str, str]]] = {
     ],
     "other_liquid": [("35 % glycol", "liquid.name", "density, viscosity and vapour_pressure", "water only")],
     "no_barometer": [("weather_allowance", "site", "`barometer`", "barometer: ")],
-    "no_weather_allowance": [
-        ("elevation: 120 m", "site.weather_allowance", "`weather_allowance`", "1.7 kPa")
-    ],
+    "no_weather_allowance": [("elevation: 120 m", "site.weather_allowance", "`weather_allowance`", "1.7 kPa")],
     "nothing_to_calculate": [("calculation:", NOWHERE, "`readings`", "")],
     "line_without_level": [("name: Wash water tank", "supply.level", "a level", "level: ")],
     "fitting_without_k": [("kind: fitting", "line.sections[P1].elements[4].K", "`K`", "K: ")],
@@ -157,14 +149,9 @@ def test_well_formed_sample_is_read(name: str) -> None:
 
 def test_a_message_is_one_line_with_all_its_parts() -> None:
     fault = Fault("a.yaml", 3, 7, "pump.flow", "a flow", "“3 m”", "write `3 m³/h`", "unit")
-    assert (
-        format_fault(fault)
-        == "a.yaml:3:7: pump.flow: wanted a flow; found “3 m”. Suggestion: write `3 m³/h`."
-    )
+    assert format_fault(fault) == "a.yaml:3:7: pump.flow: wanted a flow; found “3 m”. Suggestion: write `3 m³/h`."
     assert format_fault(replace(fault, suggestion="")) == "a.yaml:3:7: pump.flow: wanted a flow; found “3 m”."
-    assert format_fault(replace(fault, suggestion="did you mean `x`?")).endswith(
-        "Suggestion: did you mean `x`?"
-    )
+    assert format_fault(replace(fault, suggestion="did you mean `x`?")).endswith("Suggestion: did you mean `x`?")
     assert format_fault(Fault("a.yaml", 0, 0, "", "a file", "none")) == "a.yaml: wanted a file; found none."
 
 

@@ -174,9 +174,7 @@ def test_the_us_system_is_coherent() -> None:
 
 
 def test_every_dimension_of_a_kind_has_units() -> None:
-    assert {dimension for kind in KINDS.values() for dimension in kind.dimensions} == {
-        u.kind for u in UNITS.values()
-    }
+    assert {dimension for kind in KINDS.values() for dimension in kind.dimensions} == {u.kind for u in UNITS.values()}
 
 
 @pytest.mark.parametrize("kind", sorted(KINDS))
@@ -188,9 +186,7 @@ def test_examples_of_a_kind_are_read(kind: str) -> None:
 @pytest.mark.parametrize("spelling", sorted(SPELLINGS))
 def test_every_spelling_is_read_as_its_unit(spelling: str) -> None:
     wanted = unit(spelling)
-    kind = next(
-        name for name, kind in KINDS.items() if wanted.kind in kind.dimensions and not kind.references
-    )
+    kind = next(name for name, kind in KINDS.items() if wanted.kind in kind.dimensions and not kind.references)
     if wanted.kind == "pressure":
         kind = "pressure_difference"
     if wanted.name in ("1", "%"):

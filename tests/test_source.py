@@ -77,9 +77,7 @@ def test_records() -> None:
 def test_defaults() -> None:
     read = loads(changed(("units: SI", "units: US")), "a.yaml")
     assert (read.paper, read.status) == ("Letter", "preliminary")
-    assert [(r.revision, r.date, r.reason) for r in read.revisions] == [
-        ("A", date(2026, 11, 16), "preliminary")
-    ]
+    assert [(r.revision, r.date, r.reason) for r in read.revisions] == [("A", date(2026, 11, 16), "preliminary")]
 
 
 def test_numbers_that_look_like_numbers_stay_text() -> None:
@@ -102,9 +100,7 @@ def test_an_own_source_is_not_held_to_the_status_of_another() -> None:
 
 
 def test_an_assumed_value_does_not_inherit_a_source() -> None:
-    read = loads(
-        changed(("normal: 2.10 m", "normal: {value: 2.10 m, status: assumed, note: usual}")), "a.yaml"
-    )
+    read = loads(changed(("normal: 2.10 m", "normal: {value: 2.10 m, status: assumed, note: usual}")), "a.yaml")
     assert read.supply.level is not None and read.supply.level.normal is not None
     normal = read.supply.level.normal
     assert (normal.source, normal.status, normal.note) == ("", "assumed", "usual")
@@ -281,11 +277,7 @@ def test_damaged_text_raises_nothing_but_a_fault(seed: int) -> None:
         for _ in range(chance.randint(1, 4)):
             a, b = sorted(chance.randrange(len(text)) for _ in range(2))
             b = min(b, a + chance.choice((1, 1, 5, 40)))
-            text = (
-                text[:a]
-                + chance.choice(("", "", chance.choice(WORDS), text[a:b] * 2, text[b : b + 30]))
-                + text[b:]
-            )
+            text = text[:a] + chance.choice(("", "", chance.choice(WORDS), text[a:b] * 2, text[b : b + 30])) + text[b:]
         raw = text.encode("utf-8", "surrogatepass")
         if chance.random() < 0.1:
             at = chance.randrange(len(raw))
@@ -314,9 +306,7 @@ def test_the_schema_is_one() -> None:
 
 def test_every_key_of_the_schema_is_described() -> None:
     for where, part in subschemas(schema()):
-        for name, value in (
-            part.get("properties", {}).items() if isinstance(part.get("properties"), dict) else ()
-        ):
+        for name, value in part.get("properties", {}).items() if isinstance(part.get("properties"), dict) else ():
             described = {**schema()["$defs"].get(value.get("$ref", "").rpartition("/")[2], {}), **value}
             assert described.get("description"), f"{where}: {name}"
 
@@ -374,8 +364,7 @@ def test_choices_of_the_schema_are_those_of_the_tables() -> None:
     assert set(sections["material"]["enum"]) == set(lookup.ROUGHNESS)
     element = schema()["$defs"]["element"]["properties"]
     variants = {
-        kind: {v.split(" ")[0] for k, v in fitting_set.CRANE if k == kind}
-        for kind in ("valve", "tee", "entrance")
+        kind: {v.split(" ")[0] for k, v in fitting_set.CRANE if k == kind} for kind in ("valve", "tee", "entrance")
     }
     assert set(element["type"]["enum"]) == variants["valve"]
     assert set(element["flow"]["enum"]) == variants["tee"]

@@ -38,13 +38,19 @@ def test_wheel_makes_a_package_elsewhere(wheel: Path, tmp_path: Path) -> None:
     venv.create(tmp_path / "env", with_pip=False)
     bin_folder = "Scripts" if os.name == "nt" else "bin"
     python = tmp_path / "env" / bin_folder / "python"
-    purelib = Path(subprocess.check_output([python, "-c", "import sysconfig; print(sysconfig.get_path('purelib'))"], text=True).strip())
+    purelib = Path(
+        subprocess.check_output(
+            [python, "-c", "import sysconfig; print(sysconfig.get_path('purelib'))"], text=True
+        ).strip()
+    )
     zipfile.ZipFile(wheel).extractall(purelib)
     (purelib / "lent.pth").write_text(sysconfig.get_path("purelib") + "\n")
     sample = tmp_path / "input.yaml"
     shutil.copy(ROOT / "sample_inputs" / "d_blanketed_hot_water_vessel.yaml", sample)
     environment = {k: v for k, v in os.environ.items() if k != "PYTHONPATH"}
-    where = subprocess.check_output([python, "-c", "import calcpack; print(calcpack.__file__)"], cwd=tmp_path, env=environment, text=True)
+    where = subprocess.check_output(
+        [python, "-c", "import calcpack; print(calcpack.__file__)"], cwd=tmp_path, env=environment, text=True
+    )
     assert Path(where.strip()).is_relative_to(tmp_path)
     command = [python, "-m", "calcpack", "draft", sample.name, "-o", "package.pdf"]
     done = subprocess.run(command, cwd=tmp_path, env=environment, capture_output=True, text=True)

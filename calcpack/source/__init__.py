@@ -47,7 +47,5 @@ def _once(faults: Iterable[Fault], name: str) -> list[Fault]:
     kept = sorted(first.values(), key=lambda fault: (fault.line, fault.column))
     if len(kept) > MAX_FAULTS:
         more = f"{len(kept) - MAX_FAULTS} more after these"
-        kept[MAX_FAULTS:] = [
-            Fault(name, kept[MAX_FAULTS].line, 1, "", "a file with fewer faults", more, "", "count")
-        ]
+        kept[MAX_FAULTS:] = [Fault(name, kept[MAX_FAULTS].line, 1, "", "a file with fewer faults", more, "", "count")]
     return kept

@@ -121,9 +121,7 @@ def build(root: Mapping, read: dict[Mark, Quantity], raw: bytes, name: str) -> C
     """The records of a checked tree; ``read`` holds the quantities by the mark of their text."""
     top = _Branch(root, "", Provenance(), read)
     head = top.branch("calculation")
-    current = Revision(
-        revision=head.text("revision"), date=head.day("date"), reason=head.text("status", "preliminary")
-    )
+    current = Revision(revision=head.text("revision"), date=head.day("date"), reason=head.text("status", "preliminary"))
     system: Any = head.text("units")
     paper: Any = head.text("paper", "Letter" if system == "US" else "A4")
     return Calculation(
@@ -209,9 +207,7 @@ def _supply(at: _Branch) -> Supply:
 
 
 def _pipe(at: _Branch) -> Pipe:
-    return Pipe(
-        size=at.text("size"), schedule=at.text("schedule"), bore=at.given("bore"), provenance=at.provenance
-    )
+    return Pipe(size=at.text("size"), schedule=at.text("schedule"), bore=at.given("bore"), provenance=at.provenance)
 
 
 def _line(at: _Branch) -> Line:
@@ -283,9 +279,7 @@ def _npsh_required(at: _Branch) -> NpshRequired:
 
 def _intake(at: _Branch) -> Intake:
     reference: Any = at.text("reference")
-    return Intake(
-        inlet_diameter=at.must("inlet_diameter"), reference=reference, elevation=at.must("elevation")
-    )
+    return Intake(inlet_diameter=at.must("inlet_diameter"), reference=reference, elevation=at.must("elevation"))
 
 
 def _criteria(at: _Branch) -> Criteria:

@@ -39,9 +39,7 @@ def _origins(view: View) -> Iterator[Fault]:
                     else "add the document to `sources`, and cite its id and the place in it"
                 )
                 wanted = (
-                    f"the id of a source ({listed(known)})"
-                    if known
-                    else "the id of a source listed under `sources`"
+                    f"the id of a source ({listed(known)})" if known else "the id of a source listed under `sources`"
                 )
                 yield view.fault(cited, below(key, "source"), wanted, shown(cited.text), hint, "source")
             if isinstance(status, Scalar) and status.text == "assumed" and not origin.note:
@@ -92,15 +90,8 @@ def _dates(view: View) -> Iterator[Fault]:
     for address, item in places:
         node = item.get("date") if isinstance(item, Mapping) else None
         day = _day(node)
-        if (
-            isinstance(node, Scalar)
-            and day is None
-            and len(node.text) == 10
-            and node.text.replace("-", "").isdigit()
-        ):
-            yield view.fault(
-                node, below(address, "date"), "a day of the calendar", shown(node.text), "", "date"
-            )
+        if isinstance(node, Scalar) and day is None and len(node.text) == 10 and node.text.replace("-", "").isdigit():
+            yield view.fault(node, below(address, "date"), "a day of the calendar", shown(node.text), "", "date")
         elif node and day and issued and day > issued and address.startswith("readings"):
             wanted = f"a day not later than the calculation's date, {issued}"
             yield view.fault(node, below(address, "date"), wanted, shown(str(day)), "", "date")
@@ -113,17 +104,13 @@ def _revisions(view: View) -> Iterator[Fault]:
         return
     if current.text not in entries:
         wanted = f"an entry for the current revision, {shown(current.text)}"
-        yield view.fault(
-            listing, "revisions", wanted, listed(map(shown, entries)) or "none", "add it", "revision"
-        )
+        yield view.fault(listing, "revisions", wanted, listed(map(shown, entries)) or "none", "add it", "revision")
         return
     name, item = entries[current.text]
     entry, issued = _day(item.get("date")), _day(view.at("calculation", "date"))
     if entry and issued and entry != issued:
         wanted = f"the date of the calculation, {issued}, for its current revision"
-        yield view.fault(
-            item.get("date") or item, f"revisions[{name}].date", wanted, shown(str(entry)), "", "date"
-        )
+        yield view.fault(item.get("date") or item, f"revisions[{name}].date", wanted, shown(str(entry)), "", "date")
 
 
 def _order(view: View) -> Iterator[Fault]:
@@ -135,9 +122,7 @@ def _order(view: View) -> Iterator[Fault]:
         ("liquid.temperature", view.at("liquid", "temperature"), ("average", "normal", "highest")),
         ("pump.flow", view.at("pump", "flow"), ("normal", "highest")),
     ]
-    groups += [
-        (f"{address}.drop", element.get("drop"), ("clean", "fouled")) for address, element in view.elements()
-    ]
+    groups += [(f"{address}.drop", element.get("drop"), ("clean", "fouled")) for address, element in view.elements()]
     for address, node, names in groups:
         held = [(name, view.quantity(name, node=node)) for name in names if isinstance(node, Mapping)]
         present = [(name, value) for name, value in held if value]

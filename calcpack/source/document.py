@@ -83,9 +83,7 @@ def _whole(path: Path, wanted: str, found: str, suggestion: str = "") -> InputFa
 def _decode(raw: bytes, name: str) -> str:
     wanted = "text in UTF-8"
     if raw.startswith((b"\xff\xfe", b"\xfe\xff")):
-        raise InputFault(
-            [Fault(name, 1, 1, "", wanted, "UTF-16", "save the file again as UTF-8", "encoding")]
-        )
+        raise InputFault([Fault(name, 1, 1, "", wanted, "UTF-16", "save the file again as UTF-8", "encoding")])
     try:
         text = raw.decode("utf-8-sig")
     except UnicodeDecodeError as error:
@@ -187,9 +185,7 @@ class _Builder:
             "quoted scalar": "close the quotation marks",
             "undefined alias": "write the value out; * has a meaning of its own in YAML",
         }
-        hint = next(
-            (hint for part, hint in hints.items() if part in problem or part in (error.context or "")), ""
-        )
+        hint = next((hint for part, hint in hints.items() if part in problem or part in (error.context or "")), "")
         if "undefined alias" in problem:
             problem = "an alias, * with a name"
         return self._stop(mark, "a YAML file", f"broken notation ({problem.strip()})", hint)
@@ -237,17 +233,11 @@ def _notation(root: Mapping, name: str) -> Iterator[Fault]:
 
 
 def _ambiguous(node: Scalar, key: str, name: str) -> Iterator[Fault]:
-    why = (
-        next((why for pattern, why in _AMBIGUOUS_PATTERNS if pattern.fullmatch(node.text)), "")
-        if node.plain
-        else ""
-    )
+    why = next((why for pattern, why in _AMBIGUOUS_PATTERNS if pattern.fullmatch(node.text)), "") if node.plain else ""
     if not why:
         return
     if not node.text:
-        yield Fault(
-            name, *node.mark, key, "a value", "none", "write a value, or leave the key out", "empty value"
-        )
+        yield Fault(name, *node.mark, key, "a value", "none", "write a value, or leave the key out", "empty value")
     else:
         found = f"{shown(node.text)}, {why}"
         number = f", if a number is meant, `{node.text.lstrip('-+0_') or 0}`" if node.text.isdigit() else ""

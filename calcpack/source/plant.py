@@ -22,10 +22,7 @@ def check_plant(view: View) -> Iterator[Fault]:
 
 def _bores(view: View) -> Iterator[Fault]:
     """A bore is a size with its schedule, or is given; a section has a roughness."""
-    taps = [
-        (f"{address}.gauge.tap", view.at("gauge", "tap", node=reading))
-        for address, reading in view.readings()
-    ]
+    taps = [(f"{address}.gauge.tap", view.at("gauge", "tap", node=reading)) for address, reading in view.readings()]
     for address, node in [*view.sections(), *taps]:
         if not isinstance(node, Mapping):
             continue
@@ -101,9 +98,7 @@ def _barometer(view: View) -> Iterator[Fault]:
         return
     barometer, elevation = site.get("barometer"), site.get("elevation")
     if isinstance(barometer, Mapping) and not any(barometer.get(name) for name in ("lowest", "normal")):
-        yield view.fault(
-            barometer, "site.barometer", "`lowest`, `normal` or both", "neither", "", "barometer"
-        )
+        yield view.fault(barometer, "site.barometer", "`lowest`, `normal` or both", "neither", "", "barometer")
     elif not barometer and not elevation:
         wanted = "`barometer`, or `elevation` with `weather_allowance`"
         yield view.fault(
@@ -131,9 +126,7 @@ def _liquid(view: View) -> Iterator[Fault]:
     if not isinstance(liquid, Mapping):
         return
     temperature, name = liquid.get("temperature"), liquid.get("name")
-    if isinstance(temperature, Mapping) and not any(
-        temperature.get(each) for each in ("average", "normal", "highest")
-    ):
+    if isinstance(temperature, Mapping) and not any(temperature.get(each) for each in ("average", "normal", "highest")):
         wanted = "`average`, `normal` or `highest`"
         yield view.fault(temperature, "liquid.temperature", wanted, "none of them", "add `highest`", "liquid")
     if not isinstance(name, Scalar) or name.text in ("", "water"):
@@ -159,9 +152,7 @@ def _margin(view: View) -> Iterator[Fault]:
     margin = view.at("criteria", "npsh_margin")
     if isinstance(margin, Mapping) and not margin.get("ratio") and not margin.get("difference"):
         wanted = "`ratio`, `difference` or both"
-        yield view.fault(
-            margin, "criteria.npsh_margin", wanted, "neither", "add `ratio: 1.10` or the like", "criteria"
-        )
+        yield view.fault(margin, "criteria.npsh_margin", wanted, "neither", "add `ratio: 1.10` or the like", "criteria")
     ratio = view.quantity("criteria", "npsh_margin", "ratio")
     node = view.at("criteria", "npsh_margin", "ratio")
     if ratio and node and ratio.number < 1:
@@ -172,21 +163,13 @@ def _margin(view: View) -> Iterator[Fault]:
 
 def _readings(view: View) -> Iterator[Fault]:
     """What a reading needs for the plant it was taken on."""
-    strained = [
-        view.text("name", node=e) for _, e in view.elements() if view.text("kind", node=e) == "strainer"
-    ]
+    strained = [view.text("name", node=e) for _, e in view.elements() if view.text("kind", node=e) == "strainer"]
     kind = view.text("supply", "kind")
     for address, reading in view.readings():
         gauge, level, surface = (reading.get(name) for name in ("gauge", "level", "surface_pressure"))
-        if (
-            isinstance(gauge, Mapping)
-            and view.text("leg", node=gauge) == "dry"
-            and not gauge.get("tap_elevation")
-        ):
+        if isinstance(gauge, Mapping) and view.text("leg", node=gauge) == "dry" and not gauge.get("tap_elevation"):
             wanted = "`tap_elevation` beside a dry leg: the pressure acts at the tap, not at the gauge"
-            yield view.fault(
-                gauge, f"{address}.gauge.tap_elevation", wanted, "none", "add `tap_elevation`", "reading"
-            )
+            yield view.fault(gauge, f"{address}.gauge.tap_elevation", wanted, "none", "add `tap_elevation`", "reading")
         yield from _gauge(view, address, reading)
         if strained and not reading.get("strainers"):
             wanted = f"`strainers: clean` or `strainers: fouled`, since the line has {listed(strained)}"

@@ -24,10 +24,7 @@ def correct(root: Mapping, file: str) -> tuple[Mapping, list[Fault]]:
 def _correct(node: Node, part: Schema, key: str, file: str, faults: list[Fault]) -> Node:
     if isinstance(node, Sequence) and "items" in part:
         inner = definition(part["items"])[0]
-        items = (
-            _correct(item, inner, f"{key}[{label(item, n)}]", file, faults)
-            for n, item in enumerate(node.items)
-        )
+        items = (_correct(item, inner, f"{key}[{label(item, n)}]", file, faults) for n, item in enumerate(node.items))
         return Sequence(node.mark, tuple(items), node.oddity)
     if not isinstance(node, Mapping) or "properties" not in part and "additionalProperties" not in part:
         return node
@@ -43,9 +40,7 @@ def _correct(node: Node, part: Schema, key: str, file: str, faults: list[Fault])
                 continue
             name = Scalar(name.mark, meant, name.plain, name.oddity)
         found = below_key(part, name.text)
-        entries.append(
-            (name, _correct(value, found[0], below(key, name.text), file, faults) if found else value)
-        )
+        entries.append((name, _correct(value, found[0], below(key, name.text), file, faults) if found else value))
     return Mapping(node.mark, tuple(entries), node.oddity)
 
 
@@ -61,11 +56,5 @@ def _fault(name: Scalar, meant: str, node: Mapping, part: Schema, key: str, file
     plain = [each for each in allowed(node, part) if each not in PROVENANCE]
     wanted = f"the key `{meant}`" if meant else f"one of the keys {listed(plain)}{scope}"
     found = f"{shown(name.text)}, which is no key here"
-    hint = (
-        f"write `{meant}`"
-        if meant
-        else f"leave it out{scope}"
-        if name.text in part.get("properties", {})
-        else ""
-    )
+    hint = f"write `{meant}`" if meant else f"leave it out{scope}" if name.text in part.get("properties", {}) else ""
     return Fault(file, *name.mark, below(key, name.text), wanted, found, hint, "unknown key")

@@ -112,9 +112,7 @@ def _value(place: _Place, error: ValidationError) -> Iterator[Fault]:
     elif rule in ("minLength", "minItems"):
         yield place.fault("at least one item" if rule == "minItems" else "a text", "none", "", "empty value")
     elif rule == "maxLength":
-        yield place.fault(
-            f"at most {error.validator_value} characters", f"{len(place.text)}", "shorten it", "text"
-        )
+        yield place.fault(f"at most {error.validator_value} characters", f"{len(place.text)}", "shorten it", "text")
     elif rule in ("minimum", "maximum"):
         bounds = f"{part.get('minimum', '')} to {part.get('maximum', '')}"
         yield place.fault(f"a whole number from {bounds}", place.found, "", "number")

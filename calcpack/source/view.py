@@ -53,7 +53,5 @@ class View:
         for name, reading in self.items("readings"):
             yield f"readings[{name}]", reading
 
-    def fault(
-        self, node: Node, key: str, wanted: str, found: str, suggestion: str = "", kind: str = "check"
-    ) -> Fault:
+    def fault(self, node: Node, key: str, wanted: str, found: str, suggestion: str = "", kind: str = "check") -> Fault:
         return Fault(self.file, *node.mark, key, wanted, found, suggestion, kind)
