@@ -3,7 +3,6 @@
 from __future__ import annotations
 
 import argparse
-import os
 import sys
 from collections.abc import Sequence
 from pathlib import Path
@@ -11,7 +10,10 @@ from typing import Any, NoReturn
 
 from . import __version__, assess, draft, verify
 from .faults import Fault, InputFault
+from .output import resolve, write
 
+#: Bytes beyond which no file is a package.
+LARGEST_PACKAGE = 200 * 10**6
 PASSED, NOT_MET, AT_FAULT, DISAGREES = 0, 1, 2, 3
 _EPILOG = (
     "exit codes: 0 every rule met or not applicable; 1 a rule not met or not assessed; 2 input at fault; "
@@ -74,8 +76,8 @@ def _passed(record: dict[str, Any]) -> int:
 
 
 def _draft(source: Path, output: Path | None) -> int:
-    target = output or Path(source.name).with_suffix(".pdf")
-    _check_target(target, source)
+    target = output or Path(Path(source.name or "package").stem + ".pdf")
+    real = resolve(target, source)
     _progress("computing and setting the pages")
     try:
         package = draft(source)
@@ -85,7 +87,7 @@ def _draft(source: Path, output: Path | None) -> int:
         raise InputFault([_missing_library(error)]) from None
     finally:
         _progress("")
-    _write(target, package.pdf)
+    write(real, package.pdf)
     print(_verdict(package.record))
     print(target)
     return _passed(package.record)
@@ -108,6 +110,10 @@ def _verify(package: Path) -> int:
     from .reader import NotAPackage
 
     try:
+        if package.exists() and not package.is_file():
+            raise NotAPackage("a folder, a device or a pipe")
+        if package.exists() and package.stat().st_size > LARGEST_PACKAGE:
+            raise NotAPackage(f"a file larger than {LARGEST_PACKAGE // 10**6} MB")
         report = verify(package.read_bytes())
     except (OSError, NotAPackage) as error:
         reason = error.strerror if isinstance(error, OSError) else str(error)
@@ -130,67 +136,8 @@ def _verdict(record: dict[str, Any]) -> str:
 
 def _progress(words: str) -> None:
     """One line on a terminal, overwritten; nothing where the output goes elsewhere."""
-    if sys.stderr.isatty():
+    if sys.stderr is not None and sys.stderr.isatty():
         print(f"\r\033[K{words}{' …' if words else ''}", end="", file=sys.stderr, flush=True)
-
-
-def _check_target(target: Path, source: Path) -> None:
-    """Refuse a target that cannot be written before the pages are set, not after."""
-    found = ""
-    if target.is_dir():
-        found = "a folder"
-    elif not target.parent.is_dir():
-        found = f"no folder {target.parent}"
-    elif target.exists() and target.samefile(source):
-        found = "the input file itself"
-    elif not os.access(target if target.exists() else target.parent, os.W_OK):
-        found = "no permission to write there"
-    if found:
-        raise InputFault(
-            [Fault(str(target), 0, 0, "-o", "a file that can be written", found, "name another path with -o")]
-        )
-
-
-def _write(target: Path, content: bytes) -> None:
-    """Write all of it or nothing: a crash in the middle leaves the old file."""
-    import tempfile
-
-    try:
-        handle, name = tempfile.mkstemp(dir=target.parent, prefix=f".{target.name}.")
-    except OSError as error:
-        raise _unwritable(target, error) from None
-    temporary = Path(name)
-    try:
-        with os.fdopen(handle, "wb") as stream:
-            stream.write(content)
-            stream.flush()
-            os.fsync(stream.fileno())
-        mask = os.umask(0)
-        os.umask(mask)
-        temporary.chmod(0o666 & ~mask)
-        temporary.replace(target)
-    except OSError as error:
-        temporary.unlink(missing_ok=True)
-        raise _unwritable(target, error) from None
-    except BaseException:
-        temporary.unlink(missing_ok=True)
-        raise
-
-
-def _unwritable(target: Path, error: OSError) -> InputFault:
-    return InputFault(
-        [
-            Fault(
-                str(target),
-                0,
-                0,
-                "-o",
-                "a file that can be written",
-                error.strerror or str(error),
-                "name another path with -o",
-            )
-        ]
-    )
 
 
 def _missing_library(error: OSError) -> Fault:

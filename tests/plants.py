@@ -125,9 +125,16 @@ def changed(document: Document, changes: Mapping[str, Any]) -> Document:
     return made
 
 
+class _InFull(yaml.SafeDumper):
+    """Writes a part that stands twice twice: the tool reads no aliases."""
+
+    def ignore_aliases(self, data: Any) -> bool:
+        return True
+
+
 def written(document: Document) -> bytes:
     """The file's bytes."""
-    return yaml.safe_dump(document, allow_unicode=True, sort_keys=False).encode()
+    return yaml.dump(document, Dumper=_InFull, allow_unicode=True, sort_keys=False).encode()
 
 
 def studied(document: Document) -> Study:

@@ -11,6 +11,8 @@ from pathlib import Path
 from random import Random
 from typing import Any
 
+from plants import INTAKE, plant, recorded
+
 from calcpack.page.pdf import render
 from calcpack.reader.bands import ACCENT, INK, MM, NUMBER, SECOND, Band, bands
 from calcpack.reader.glyphs import Glyph, Sheet, sheets
@@ -21,7 +23,9 @@ from calcpack.record import assemble, canonical
 from calcpack.source import load
 from calcpack.study import run
 
-SAMPLES = {path.name[0]: path for path in sorted((Path(__file__).parent.parent / "sample_inputs").glob("*.yaml"))}
+SAMPLES = {
+    path.name[0]: path for path in sorted((Path(__file__).parent.parent / "sample_inputs").glob("*.yaml"))
+}
 Record = dict[str, Any]
 Json = dict[str, Any]
 
@@ -64,7 +68,7 @@ def lines(made: Record) -> Iterator[Json]:
 
 
 def next_digit(value: str, place: int = -1) -> str:
-    """``value`` with one significant digit changed to its successor; ``place`` counts the digits of the mantissa."""
+    """``value`` with one digit of its mantissa, the one at ``place``, changed to its successor."""
     mantissa, e, power = value.partition("E")
     at = [i for i, c in enumerate(mantissa) if c.isdigit()][place]
     return f"{mantissa[:at]}{(int(mantissa[at]) + 1) % 10}{mantissa[at + 1 :]}{e}{power}"
@@ -85,15 +89,21 @@ def recomputed_glyphs(found: Sequence[Sheet]) -> list[tuple[int, str, Glyph]]:
 def _checked(band: Band) -> list[Glyph]:
     section = band.address.partition(".")[0]
     if section == "4":
-        used = [g for g in band.column(98, 129) if g.colour == ACCENT or not (g.size > 8.7 and _below(band, g))]
+        used = [
+            g for g in band.column(98, 129) if g.colour == ACCENT or not (g.size > 8.7 and _below(band, g))
+        ]
         return [*band.column(*NUMBER), *band.column(72, 98), *used]
     if section == "9":
-        sides = [g for edges in (LEFT, RIGHT) for g in band.column(*edges) if g.size > 7.9 or g.colour == ACCENT]
+        sides = [
+            g for edges in (LEFT, RIGHT) for g in band.column(*edges) if g.size > 7.9 or g.colour == ACCENT
+        ]
         sides = [g for g in sides if g.bold or not _prose(band, g)]
         margin = [g for g in band.column(*MARGIN) if g.x > band.edge + MARGIN[0] * MM]
         return [*band.column(*NUMBER), *sides, *margin, *picture(band, *TEXT).glyphs]
     if is_losses(band):
-        cells = [g for edges in (*FACTORS, LOSS) for g in band.column(*edges) if not g.serif and g.colour != SECOND]
+        cells = [
+            g for edges in (*FACTORS, LOSS) for g in band.column(*edges) if not g.serif and g.colour != SECOND
+        ]
         cells = [g for g in cells if not picture(band, *SUM).glyphs or g.x > band.edge + LOSS[0] * MM]
         return [*band.column(*NUMBER), *cells, *band.column(*RECORD), *picture(band, *SUM).glyphs]
     if section == "8":
@@ -120,7 +130,11 @@ def other(glyph: Glyph, random: Random) -> str:
         if glyph.char in family:
             return random.choice([c for c in family if c != glyph.char])
     letters = "abcdefghikmnpqstuvwxyzABDEFGHKLMNPQRSTVZ"
-    return random.choice("0123456789") if glyph.char == "." else random.choice([c for c in letters if c != glyph.char])
+    return (
+        random.choice("0123456789")
+        if glyph.char == "."
+        else random.choice([c for c in letters if c != glyph.char])
+    )
 
 
 def with_glyph(found: Sequence[Sheet], number: int, glyph: Glyph, **changes: Any) -> list[Sheet]:
@@ -133,7 +147,7 @@ def with_glyph(found: Sequence[Sheet], number: int, glyph: Glyph, **changes: Any
 
 
 def falsified(made: Record) -> tuple[Record, dict[str, str]]:
-    """A record with one falsehood in each of many lines, and address -> words the reader should find there."""
+    """A record with one falsehood in each of many lines; address -> words the reader should find there."""
     made = copy.deepcopy(made)
     taken: set[str] = set()
     expected: dict[str, str] = {}
@@ -145,9 +159,16 @@ def falsified(made: Record) -> tuple[Record, dict[str, str]]:
         return line
 
     def equation(x: Json) -> bool:
-        return bool(x["kind"] == "equation" and len(x["operands"]) > 1 and "sum" not in x["formula"] and "h_V" not in x["formula"])
+        return bool(
+            x["kind"] == "equation"
+            and len(x["operands"]) > 1
+            and "sum" not in x["formula"]
+            and "h_V" not in x["formula"]
+        )
 
-    line = pick(lambda x: equation(x) and x["formula"].count("/") == 1, "the form with numbers gives another result")
+    line = pick(
+        lambda x: equation(x) and x["formula"].count("/") == 1, "the form with numbers gives another result"
+    )
     line["value"] = next_digit(line["value"])
     line = pick(equation, "differs from line")
     line["operands"][0]["value"] = next_digit(line["operands"][0]["value"], 0)
@@ -167,7 +188,42 @@ def falsified(made: Record) -> tuple[Record, dict[str, str]]:
     line["formula"] = next_digit(line["formula"][: line["formula"].rindex(")")]) + ")"
     line = pick(lambda x: x["kind"] == "lookup" and x["operands"], "gives another value")
     line["value"] = next_digit(line["value"])
-    line = pick(lambda x: x["kind"] == "lookup" and not x["operands"], "the entry is not the result")
-    line["function"], line["headline"]["text"] = line["function"], next_digit(line["headline"]["text"], 0)
-    expected[line["address"]] = "the headline is not the result of record"
+    line = pick(
+        lambda x: x["kind"] == "lookup" and not x["operands"], "the headline is not the result of record"
+    )
+    line["headline"]["text"] = next_digit(line["headline"]["text"], 0)
+    line = pick(lambda x: x["kind"] == "root", "the residual at")
+    line["residuals"][0][1] = next_digit(line["residuals"][0][1])
     return made, expected
+
+
+_BY = {"source": "S1", "status": "verified"}
+_OIL = {
+    "name": "oil",
+    "temperature": {"highest": "104 °F", **_BY},
+    "density": {"value": "54.3 lb/ft³", **_BY},
+    "viscosity": {"value": "300 cP", **_BY},
+    "vapour_pressure": {"value": "0.03 psi absolute", **_BY},
+}
+_HIGH = {"elevation": {"value": "1600 m", **_BY}, "weather_allowance": {"value": "2 kPa", **_BY}}
+_GAS = {"lowest": "22 kPa gauge", **_BY}
+_COLUMN = {"lowest": "29.5 inHg absolute", **_BY}
+_US = {"calculation.units": "US"}
+_MIXED = {"pump.flow.highest": "880 gpm", "supply.level.lowest": "5 ft", "site.barometer": _COLUMN}
+#: Plants unlike the samples: name -> changes to the invented plant, whether it has a line, how many readings.
+PLANTS: dict[str, tuple[dict[str, Any], bool, int]] = {
+    "US, mixed units": ({**_US, **_MIXED}, True, 0),
+    "standard atmosphere": ({"site": _HIGH}, True, 0),
+    "blanketed": ({"supply.kind": "gas_blanketed", "supply.pressure": _GAS, "intake": INTAKE}, True, 0),
+    "viscous, laminar": ({**_US, "pump.flow.highest": "400 UK gal/min", "liquid": _OIL}, True, 0),
+    "vacuum at the gauge": ({"readings.0.gauge.pressure": "4 inHg vacuum"}, True, 1),
+    "contingency": ({"line.friction_contingency": {"value": "10 %", **_BY}}, True, 0),
+    "readings only": ({**_US, "calculation.paper": "A4"}, False, 2),
+}  # fmt: skip
+
+
+def plant_package(name: str) -> tuple[Record, bytes]:
+    """Record and package of one of :data:`PLANTS`."""
+    changes, line, readings = PLANTS[name]
+    made: Record = json.loads(canonical(recorded(plant(changes, line=line, readings=readings))))
+    return made, render(made, [])

@@ -38,14 +38,16 @@ def printed(settings: Sequence[Setting], rows: int = 12) -> bytes:
         f'src="data:image/svg+xml;base64,{base64.b64encode(s.svg.encode()).decode()}"></div>'
         for s in settings
     ]
-    style = f"{faces()}@page{{size:250pt {ROW * rows}pt;margin:0}}body{{margin:0}}div{{height:{ROW}pt;overflow:hidden}}"
-    return pdf(f"<meta charset=utf-8><style>{style}</style>{''.join(body)}")
+    style = f"@page{{size:250pt {ROW * rows}pt;margin:0}}body{{margin:0}}div{{height:{ROW}pt}}"
+    return pdf(f"<meta charset=utf-8><style>{faces()}{style}</style>{''.join(body)}")
 
 
 def pdf(html: str) -> bytes:
     """A page of HTML as a PDF file."""
     with warnings.catch_warnings():
-        warnings.filterwarnings("ignore", "HarfBuzz-Subset", DeprecationWarning)  # which library cuts fonts is no matter
+        warnings.filterwarnings(
+            "ignore", "HarfBuzz-Subset", DeprecationWarning
+        )  # which library cuts fonts is no matter
         from weasyprint import HTML
     made = HTML(string=html).write_pdf()
     assert made is not None
@@ -89,7 +91,8 @@ class Trees:
         if r.random() < 0.15:
             text = f"0.{'0' * r.randrange(0, 4)}{whole}"
         if r.random() < 0.2:
-            text = f"{whole[0]}{'.' + whole[1:] if len(whole) > 1 else ''}E{r.choice(('-', ''))}{r.randrange(1, 13)}"
+            mantissa = f"{whole[0]}.{whole[1:]}".rstrip(".")
+            text = f"{mantissa}E{r.choice(('-', ''))}{r.randrange(1, 13)}"
         return ("-" if signed and r.random() < 0.15 else "") + text
 
     def tree(self, depth: int, power: int = 0) -> Node:

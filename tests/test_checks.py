@@ -42,7 +42,7 @@ def amount(text: str) -> Fraction:
     """A text of the file in SI, by pint: independent of our own units."""
     head, _, name = text.partition(" ")
     number, name = Fraction(head), _CONVENTIONAL.get(name, name)
-    return Fraction((_pint().Quantity(number, name)).to_base_units().magnitude) if name else number
+    return number * Fraction((1 * _pint().parse_expression(name)).to_base_units().magnitude) if name else number
 
 
 def allowed(tolerance: str, expected: str) -> Fraction:
@@ -55,6 +55,7 @@ def allowed(tolerance: str, expected: str) -> Fraction:
 
 
 def entered(ledger: Ledger, symbol: str, text: str, number: int = 0) -> Value:
+    """An input as typed."""
     kind = NOMENCLATURE[symbol].kind
     if symbol == "p_g":
         kind = "gauge_pressure"
@@ -69,7 +70,9 @@ def computed(check: Check, system: str) -> dict[str, Value]:
     for symbol, text in check.get("inputs", {}).items():
         many = isinstance(text, list)
         read = [entered(ledger, symbol, each, n) for n, each in enumerate(text if many else [text])]
-        values[symbol] = read if many else read[0]
+        # A look-up takes its temperature as typed, a formula the coherent unit.
+        coherent = read if symbol == "T" else [ledger.convert(each) for each in read]
+        values[symbol] = coherent if many else coherent[0]
     for symbol in check.get("constants", []):
         values[symbol] = ledger.constant(symbol)
     if "bore" in check:

@@ -13,7 +13,7 @@ from pathlib import Path
 import pytest
 
 import calcpack
-from calcpack import cli
+from calcpack import cli, output
 from calcpack.faults import InputFault
 
 ROOT = Path(__file__).resolve().parent.parent
@@ -92,7 +92,7 @@ def test_write_fails_late_and_leaves_the_old_file(tmp_path: Path, monkeypatch: p
 
     monkeypatch.setattr(os, "fsync", full)
     with pytest.raises(InputFault, match="No space left"):
-        cli._write(target, b"x" * 1000)
+        output.write(target, b"x" * 1000)
     assert target.read_bytes() == b"the old package"
     assert [p.name for p in tmp_path.iterdir()] == ["p.pdf"]
 

@@ -101,11 +101,10 @@ def test_a_record_made_after_others_is_the_same() -> None:
 
 
 def test_a_caller_s_decimal_context_changes_nothing() -> None:
-    before = canonical(recorded(plant(readings=1)))
     with localcontext() as context:
         context.prec = 5
         context.rounding = "ROUND_UP"
-        assert canonical(recorded(plant(readings=1))) == before
+        assert canonical(calcpack.assess(SAMPLES[2])) == canonical(record(SAMPLES[2]))
 
 
 CHANGES: tuple[dict[str, Any], ...] = (

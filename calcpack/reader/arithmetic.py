@@ -120,6 +120,8 @@ def exact(tree: Tree) -> Fraction:
             return exact(a) * exact(b)
         case Op("/", (a, b)) if exact(b):
             return exact(a) / exact(b)
-        case Op("**", (a, Number(x))) if x == int(x) and abs(x) <= 12 and exact(a):
-            return exact(a) ** int(x)
+        case Op("**", (a, Number(x))) if x == int(x) and abs(x) <= 12:
+            base = exact(a)
+            if base and base.numerator.bit_length() + base.denominator.bit_length() < 2000:
+                return base ** int(x)
     raise Undefined("the form is not a ratio of whole numbers")

@@ -18,6 +18,7 @@ from .units import converted, factor, named
 
 COLUMNS = (14.0, 23.0, 41.0, 61.0, 105.0)
 _LABEL = re.compile(r"C[1-9]\d*")
+ROW_PITCH = 13.0  # farthest that a second row of a cell stands below the first (points)
 _IN_FULL = "in full: "
 
 
@@ -47,13 +48,17 @@ def _cells(band: Band) -> list[list[str]]:
     """Label, units, factor and the small print below it, row by row; a factor may take two rows."""
     edges = [band.edge + (x - 0.3) * MM for x in COLUMNS]
     found: list[list[str]] = []
-    inside = False
+    inside, y = False, 0.0
     for row in rows(g for g in band.glyphs if edges[0] <= g.x < edges[-1]):
         label, before, after, times = (
             [g for g in row.glyphs if low <= g.x < high] for low, high in zip(edges, edges[1:], strict=False)
         )
         if label:
-            inside = not label[0].serif and label[0].colour == INK and bool(_LABEL.fullmatch(text(label)))
+            plain = not label[0].serif and not label[0].bold and label[0].colour == INK
+            inside = plain and bool(_LABEL.fullmatch(text(label)))
+        elif y - row.y > ROW_PITCH:
+            inside = False
+        y = row.y
         if label and inside:
             found.append([text(label), text(before), text(after), "", ""])
         if inside:

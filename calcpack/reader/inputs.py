@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from dataclasses import dataclass
 
-from .bands import ACCENT, INK, Band
+from .bands import ACCENT, Band
 from .book import Book
 from .line import cited
 from .text import rows, scalar, symbol, words
@@ -31,9 +31,9 @@ def read_input(band: Band) -> Input:
     used = band.column(*AS_USED)
     by = cited(used) if any(g.colour == ACCENT for g in used) else ""
     given = _quantity(words(band.column(*AS_GIVEN)))
-    own = rows(g for g in used if g.colour == INK)
+    own = " ".join(str(row) for row in rows(used) if not any(g.colour == ACCENT for g in row.glyphs))
     shown = symbol([g for g in band.column(*SYMBOL) if g.serif])
-    return Input(band.sheet, band.address, shown, given, _quantity(str(own[0]) if own else ""), by)
+    return Input(band.sheet, band.address, shown, given, _quantity(own), by)
 
 
 def _quantity(printed: str) -> Quantity:

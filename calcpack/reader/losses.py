@@ -13,7 +13,7 @@ from .bands import ACCENT, ADDRESS, INK, NUMBER, SECOND, Band
 from .book import Book
 from .failures import Unread
 from .line import cited, picture, whole
-from .picture import forms
+from .picture import Form, forms
 from .text import is_number, rows, scalar, words
 from .tree import Number, Op, Symbol, Tree, symbols
 from .units import Quantity, named
@@ -54,6 +54,9 @@ def read_row(band: Band, table: Table, book: Book) -> bool:
         if not ADDRESS.fullmatch(above):
             raise Unread("a row of losses without an address")
         _agree(band, f"row {label}", record, above, book)
+        repeated = cited([g for edges in FACTORS for g in band.column(*edges)])
+        if repeated != above:
+            book.note(band.sheet, "", f"row {label} names two lines", above, repeated)
         table.losses.append(record.value)
         return False
     _product(band, label, record, table, book)
@@ -95,7 +98,7 @@ def _product(band: Band, label: str, record: Quantity, table: Table, book: Book)
 def _total(band: Band, record: Quantity, table: Table, book: Book) -> None:
     """The sum: its numbers are the rows above it, in their order."""
     found = forms(picture(band, *SUM))
-    if len(found) != 2 or not (isinstance(found[0].right, Op) and found[0].right.name == "sum"):
+    if not _equations(found) or not (isinstance(found[0].right, Op) and found[0].right.name == "sum"):
         raise Unread("a total that is no sum")
     book.uses(band.sheet, band.address, (s for x in (found[0].left, found[0].right) if x for s in symbols(x)))
     if not table.losses or found[1].right != _sum(table.losses):
@@ -107,6 +110,11 @@ def _total(band: Band, record: Quantity, table: Table, book: Book) -> None:
     table.losses.clear()
 
 
+def _equations(found: Sequence[Form]) -> bool:
+    """Whether ``found`` are a symbolic form and a form with numbers of one equation."""
+    return len(found) == 2 and isinstance(found[0].left, Symbol) and all(x.relation == "=" for x in found)
+
+
 def _sum(terms: Sequence[Decimal]) -> Tree:
     numbers: list[Tree] = [Number(x) for x in terms]
     return reduce(lambda a, b: Op("+", (a, b)), numbers)
@@ -114,7 +122,7 @@ def _sum(terms: Sequence[Decimal]) -> Tree:
 
 def worked(band: Band, table: Table, book: Book) -> None:
     """Check the row worked in full that ``band`` holds, if it holds one.  Raises ``Unread``."""
-    head = next((row for row in rows(band.glyphs) if WORKED.search(str(row))), None)
+    head = next((row for row in rows(g for g in band.glyphs if g.bold) if WORKED.search(str(row))), None)
     if head is None:
         return
     below = tuple(g for g in band.glyphs if g.y < head.y)
@@ -128,8 +136,8 @@ def worked(band: Band, table: Table, book: Book) -> None:
     numbers, loss, unit = table.factors[label[1]]
     part = Band(band.sheet, band.edge, band.head, below, band.bars)
     printed = forms(picture(part, 14.0, 150.0))
-    if len(printed) != 2 or not isinstance(printed[0].left, Symbol):
-        raise Unread(f"row {label[1]} worked in full has {len(printed)} forms")
+    if not _equations(printed):
+        raise Unread(f"row {label[1]} worked in full is no equation in symbols and in numbers")
     book.uses(band.sheet, "", symbols(printed[0].right))
     factors = _factors(printed[1].right)
     if factors not in (numbers, numbers[1:]) or len(_factors(printed[0].right)) != len(factors):

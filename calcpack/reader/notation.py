@@ -69,7 +69,7 @@ def items(marks: Marks) -> list[Item]:
         content = [g for g in glyphs if bar.left <= g.middle <= bar.right]
         bars = [b for b in bars if b not in inner]
         glyphs = [g for g in glyphs if g not in content]
-        sign = next((g for g in glyphs if g.char == "√" and _meets(g, bar)), None)
+        sign = next((g for g in glyphs if g.char == "√" and meets(g, bar)), None)
         if sign is not None:
             glyphs.remove(sign)
             found.append(Root(sign, bar, Marks(tuple(content), tuple(inner))))
@@ -78,7 +78,8 @@ def items(marks: Marks) -> list[Item]:
     return sorted([*found, *glyphs], key=_left)
 
 
-def _meets(sign: Glyph, bar: Bar) -> bool:
+def meets(sign: Glyph, bar: Bar) -> bool:
+    """Whether ``bar`` goes on from the top of a root sign."""
     near = 0.12 * sign.size
     return abs(sign.top - bar.top) < near and abs(sign.right - bar.left) < near
 

@@ -7,7 +7,7 @@ from dataclasses import dataclass
 
 from .failures import Unread
 from .glyphs import Bar, Glyph
-from .notation import Marks, Root, baseline, items, read
+from .notation import Marks, baseline, items, meets, read
 from .tree import Tree
 
 RELATIONS = "=≥≤><"
@@ -52,8 +52,8 @@ def rows(marks: Marks) -> list[Marks]:
 
     Space beside the bar of a fraction parts its terms, not rows.
     """
-    roots = [i.bar for i in _all_roots(marks)]
-    bars = [b for b in marks.bars if b not in roots]
+    signs = [g for g in marks.glyphs if g.char == "√"]
+    bars = [b for b in marks.bars if not any(meets(sign, b) for sign in signs)]
     parts: list[Glyph | Bar] = [*marks.glyphs, *marks.bars]
     reach = sorted([(p.top, p.bottom) for p in parts], reverse=True)
     cuts, low = [], reach[0][1]
@@ -65,20 +65,6 @@ def rows(marks: Marks) -> list[Marks]:
     for high, deep in zip([float("inf"), *cuts], [*cuts, float("-inf")], strict=True):
         glyphs = tuple(g for g in marks.glyphs if deep < g.top <= high)
         found.append(Marks(glyphs, tuple(b for b in marks.bars if deep < b.top <= high)))
-    return found
-
-
-def _all_roots(marks: Marks) -> list[Root]:
-    """Every root of a picture of any number of rows."""
-    signs = [g for g in marks.glyphs if g.char == "√"]
-    found = []
-    for sign in signs:
-        near = 0.12 * sign.size
-        bar = next(
-            (b for b in marks.bars if abs(sign.top - b.top) < near and abs(sign.right - b.left) < near), None
-        )
-        if bar is not None:
-            found.append(Root(sign, bar, Marks(())))
     return found
 
 

@@ -64,7 +64,7 @@ _SPELLINGS = {
     "fps": "ft/s", "lbf/in²": "psi", "psf": "lbf/ft²", "torr": "Torr", "mH₂O": "mH2O", "mmH₂O": "mmH2O",
     "ftH₂O": "ftH2O", "inH₂O": "inH2O", "kg/l": "kg/L", "lbm/ft³": "lb/ft³", "lbm/(ft·s)": "lb/(ft·s)",
     "degC": "°C", "deg C": "°C", "degF": "°F", "deg F": "°F", "degR": "°R", "deg R": "°R",
-    "rpm": "r/min", "rev/min": "r/min", "1/min": "r/min", "1/s": "s⁻¹", "um": "µm", "μm": "µm",
+    "rpm": "r/min", "rev/min": "r/min", "1/min": "r/min", "1/s": "s⁻¹", "1": "", "um": "µm", "μm": "µm",
 }  # fmt: skip
 _REFERENCE = re.compile(r" (gauge|gage|absolute|abs|vacuum)$|(?<=psi|bar|kPa|MPa)(g|a|\(g\)|\(a\))$")
 

@@ -6,10 +6,10 @@ from dataclasses import dataclass
 
 from ..ledger import Ledger
 from ..lookup import CONSTANTS
-from ..rules import Check, margin, submergence, temperature
+from ..rules import Check, margin, submergence, temperature, without_numbers
 from ..source.inputs import Calculation, Provenance
 from ..value import Value
-from . import need, npsh
+from . import need, npsh, plausible
 from .entry import Entry
 from .npsh import Available
 from .state import State, as_found, warmest, worst_case
@@ -80,6 +80,7 @@ def run(calculation: Calculation) -> Study:
         ledger.part(f"Carried to the worst case: {reading.name}", worst.scope)
         at_reading, at_worst = npsh.surface(entry, state), npsh.surface(entry, worst)
         judged.append(npsh.carried(entry, found, at_reading, at_worst, f"{reading.name}, carried to the worst case"))
+    plausible.check(entry)
     ledger.part("What the pump needs", worst.scope)
     needed = need.needed(entry)
     for available in judged:
@@ -104,6 +105,11 @@ def run(calculation: Calculation) -> Study:
 def _margin(available: Available, needed: need.Needed, calculation: Calculation) -> Check:
     asked = calculation.criteria.ratio or calculation.criteria.difference
     assert asked is not None, "source asks for a margin"
+    if available.doubt:
+        return without_numbers(
+            margin.NPSH_MARGIN, "not assessed", available.doubt, about=available.about, criterion=needed.criterion,
+            source=_cited(asked), left=available.npsh,
+        )  # fmt: skip
     return margin.check(
         available.npsh, needed.limit, about=available.about, flow=available.flow, at_flow=needed.at_flow,
         criterion=needed.criterion, governs=needed.governs, source=_cited(asked),

@@ -95,13 +95,15 @@ def _section(
     assert line is not None, "a section stands in a line"
     entry.ledger.group(f"Velocity, {about}")
     pipe = flow_in(entry, flow, bore_of(entry, section.pipe, section, about), about)
-    rows: dict[str, tuple[str, str, Mapping[str, Value] | Value]] = {}
+    rows: dict[int, tuple[str, str, Mapping[str, Value] | Value]] = {}
     # Worked out kind by kind, so that like stands with like on the page; the table keeps the order of flow.
-    for element in sorted(section.elements, key=lambda e: {"pipe": 0, "strainer": 2}.get(e.kind, 1)):
+    for place, element in sorted(
+        enumerate(section.elements), key=lambda e: {"pipe": 0, "strainer": 2}.get(e[1].kind, 1)
+    ):
         if element.kind == "strainer":
             entry.ledger.group(f"Strainer, element {element.id}")
             loss = _strainer(entry, state, flow, liquid, element)
-            rows[element.id] = (label(line, section, element), f"{element.name or 'Strainer'}, {state.strainers}", loss)
+            rows[place] = (label(line, section, element), f"{element.name or 'Strainer'}, {state.strainers}", loss)
             continue
         if element.kind == "pipe":
             entry.ledger.group(f"Friction in the straight pipe, {about}")
@@ -112,8 +114,8 @@ def _section(
         operands = {"K": k, "h_V": pipe.velocity_head}
         if element.count > 1:
             operands["n"] = entry.count(element)
-        rows[element.id] = (label(line, section, element), words, operands)
-    return [rows[element.id] for element in section.elements]
+        rows[place] = (label(line, section, element), words, operands)
+    return [rows[place] for place in sorted(rows)]
 
 
 def _pipe(

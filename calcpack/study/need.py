@@ -9,7 +9,7 @@ from ..source.inputs import Intake
 from ..value import Value
 from .entry import Entry
 from .liquid import temperature_of
-from .npsh import Available
+from .npsh import Available, near
 from .state import State, warmest
 
 
@@ -89,6 +89,7 @@ def submergence(entry: Entry, state: State, flow: Value) -> Submergence:
     level = entry.value(state.level, "z_s", "Level of the surface, lowest")
     line = entry.value(intake.elevation, "z_r", f"Elevation of the {reference(intake)}")
     there_is = ledger.apply("submergence", {"z_s": level, "z_r": line}, f"the {reference(intake)}", key_result=True)
+    near(entry, there_is, intake.elevation, f"the {reference(intake)}")
     return Submergence(there_is, least)
 
 
@@ -115,6 +116,12 @@ def cost_of_temperature(entry: Entry, state: State) -> Value | None:
 
 
 def highest_temperature(entry: Entry) -> Value | None:
-    """The highest temperature expected, where the file gives it."""
+    """The highest temperature expected, where the file gives it; a warmer reading goes before what was expected."""
     extreme, given = warmest(entry.calculation)
-    return entry.value(given, "T", "Temperature of the liquid, highest") if extreme == "highest" else None
+    if extreme != "highest":
+        return None
+    warmer = [r for r in entry.calculation.readings if r.temperature.quantity.si() > given.quantity.si()]
+    if warmer:
+        hottest = max(warmer, key=lambda r: r.temperature.quantity.si())
+        return entry.value(hottest.temperature, "T", f"Temperature of the liquid, {hottest.name}")
+    return entry.value(given, "T", "Temperature of the liquid, highest")

@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from dataclasses import dataclass
 
-from ..source.inputs import Reading
+from ..source.inputs import Given, Reading
 from ..value import Value
 from .entry import Entry
 from .line import bore_of, flow_in, losses
@@ -27,13 +27,17 @@ class Surface:
 
 @dataclass(frozen=True)
 class Available:
-    """A result to judge: NPSH available, what it describes, and the flow and temperature it holds at."""
+    """A result to judge: NPSH available, what it describes, and the flow and temperature it holds at.
+
+    ``doubt`` says why it cannot be judged, where it cannot.
+    """
 
     about: str
     npsh: Value
     flow: Value
     temperature: Value
     losses: Value | None = None
+    doubt: str = ""
 
 
 def flow_of(entry: Entry, state: State) -> Value:
@@ -68,7 +72,21 @@ def surface(entry: Entry, state: State) -> Surface:
     word = "lowest" if state.barometer is None else state.name
     level = entry.value(state.level, "z_s", f"Level of the surface, {word}")
     static = ledger.apply("static_head", {"z_s": level, "z_d": datum(entry)})
+    near(entry, static, state.level, "the pump's datum")
     return Surface(liquid, flow_of(entry, state), level, surface_head, vapour_head, static)
+
+
+#: Distance, m, within which levels, inlets and pumps of one suction side lie; farther is two datums mixed up.
+FARTHEST = 500
+#: Head, m, by which a reading may exceed what the surface offers before it contradicts it: more than a gauge's error.
+CREDIBLE = 0.2
+
+
+def near(entry: Entry, distance: Value, at: Given, what: str) -> None:
+    """Refuse a level too far from ``what`` to belong to one suction side."""
+    if abs(distance.shadow) > FARTHEST:
+        entry.refuse(at, f"a level within {FARTHEST} m of {what}", f"{entry.ledger.shown(distance)} between them",
+                     "every elevation of a file counts from its one datum")  # fmt: skip
 
 
 def design(entry: Entry, state: State, about: str) -> Available:
@@ -129,4 +147,7 @@ def carried(entry: Entry, found: Available, reading: Surface, worst: Surface, ab
             f"The reading {found.about} shows more head than the surface offers (line {inferred.address})",
             "losses cannot be negative: level, gauge, its elevation, barometer or datum is in doubt",
         )
-    return Available(about, npsh, worst.flow, worst.liquid.temperature)
+    doubt = ""
+    if inferred.shadow < -CREDIBLE:
+        doubt = f"the reading shows {ledger.shown(inferred).lstrip('-')} more head than the surface offers (line {inferred.address})"
+    return Available(about, npsh, worst.flow, worst.liquid.temperature, doubt=doubt)
