@@ -13,6 +13,7 @@ from typing import Any
 from ..number import rounded
 from .drawing import ACCENT, INK, PALE, SECOND, TINT, Drawing, text_width
 from .numerals import SANS_GAP, numeral
+from .text import cut
 
 WIDTH = 132.0
 TALLEST = 122.0  # room for the heads, mm
@@ -118,6 +119,10 @@ def _axis(d: Drawing, scale: Scale) -> None:
     )
 
 
+#: Room for a name in the figure, mm.
+NAME_ROOM = 34.0
+
+
 def _spread(wanted: Sequence[float], pitch: float) -> list[float]:
     """Label heights as near to ``wanted`` (ascending) as a pitch between them allows."""
     out: list[float] = []
@@ -132,7 +137,7 @@ def _supply(d: Drawing, scale: Scale, sketch: Mapping[str, Any]) -> None:
     if not levels:
         y = scale.y(float(sketch["pump"]["elevation"]))
         d.circle(TANK + 8, y, 2.2)
-        d.label(TANK, y - 4.0, name, bold=True)
+        d.label(TANK, y - 4.0, _cut(name, NAME_ROOM), bold=True)
         return
     lowest, floor = float(levels[-1]["value"]), _pipe_start(sketch) - 3.5 * scale.ratio / MILLIMETRES[scale.unit]
     right, bottom, top = PIPE - 6, scale.y(floor), scale.y(float(levels[0]["value"])) - 5.0
@@ -166,7 +171,12 @@ def _two_lines(words: str, room: float) -> list[str]:
     parts, first = words.split(" "), ""
     while parts and text_width(f"{first} {parts[0]}", bold=True) <= room:
         first = f"{first} {parts.pop(0)}".strip()
-    return [first, " ".join(parts)] if first else [words]
+    lines = [first, " ".join(parts)] if first else [words]
+    return [_cut(line, room) for line in lines]
+
+
+def _cut(words: str, room: float) -> str:
+    return cut(words, lambda shorter: text_width(shorter, bold=True) <= room)
 
 
 def _pipe_start(sketch: Mapping[str, Any]) -> float:
@@ -197,7 +207,7 @@ def _pipe(d: Drawing, scale: Scale, sketch: Mapping[str, Any]) -> None:
         d.label(x, below + 0.9, str(i + 1), "middle", size=2.5)
     d.circle(PUMP, end, 3.2, 0.4)
     d.line(f"M{PUMP - 1.2} {end + 1.4:.2f}L{PUMP + 1.6} {end:.2f}L{PUMP - 1.2} {end - 1.4:.2f}Z", 0.25)
-    d.label(PUMP, end + 6.2, sketch["pump"]["name"], "middle", bold=True)
+    d.label(PUMP, end + 6.2, _cut(sketch["pump"]["name"], NAME_ROOM), "middle", bold=True)
     if gauge := sketch["gauge"]:
         x, y = PUMP - 7.0, scale.y(float(gauge["elevation"]))
         d.between(x, end - half if y < end else end + half, x, y, 0.2)

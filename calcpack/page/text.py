@@ -8,7 +8,7 @@ from __future__ import annotations
 
 import re
 import unicodedata
-from collections.abc import Mapping
+from collections.abc import Callable, Mapping
 from functools import cache
 from typing import Any
 
@@ -126,3 +126,12 @@ def symbol_width(shown: Display, size: float) -> float:
 def display(nomenclature: list[dict[str, Any]]) -> dict[str, Display]:
     """How each symbol of the record's nomenclature is written."""
     return {n["name"]: Display(n["base"], n["sub"], n["upright"]) for n in nomenclature}
+
+
+def cut(words: str, fits: Callable[[str], bool]) -> str:
+    """``words``, or as much of them as fits with an ellipsis."""
+    if fits(words):
+        return words
+    while words and not fits(words + "…"):
+        words = words[:-1]
+    return words.rstrip() + "…"

@@ -206,9 +206,5 @@ def _wrapped(body: str, room: float) -> list[str]:
 
 
 def cut(words: str, room: float, size: float) -> str:
-    """``words`` shortened to ``room`` points, with an ellipsis where something is left out."""
-    if metrics.width(metrics.SANS_REGULAR, size, words) <= room:
-        return words
-    while words and metrics.width(metrics.SANS_REGULAR, size, words + "…") > room:
-        words = words[:-1]
-    return words.rstrip() + "…"
+    """``words`` shortened to ``room`` points."""
+    return text.cut(words, lambda shorter: metrics.width(metrics.SANS_REGULAR, size, shorter) <= room)

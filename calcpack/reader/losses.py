@@ -19,7 +19,8 @@ from .tree import Number, Op, Symbol, Tree, symbols
 from .units import Quantity, named
 
 LABEL, FACTORS = (14.0, 21.0), ((64.0, 76.0), (76.0, 96.0), (96.0, 114.0))
-LOSS, RECORD, SUM = (114.0, 129.0), (129.0, 150.0), (21.0, 150.0)
+#: The loss is semibold and may lean to the left, over the column of h_V.
+LOSS, RECORD, SUM = (96.0, 129.0), (129.0, 150.0), (21.0, 150.0)
 WORKED = re.compile(r"Row (\S+) worked in full")
 _UNIT = re.compile(r"loss, (\S+)")
 
@@ -65,7 +66,7 @@ def read_row(band: Band, table: Table, book: Book) -> bool:
 
 def _reported(band: Band, record: Quantity, book: Book) -> None:
     """The loss as shown large against its digits of record."""
-    shown = whole(words(g for g in band.column(*LOSS) if g.bold and not g.serif))
+    shown = whole(words(g for g in band.column(*LOSS) if g.bold and not g.serif and g.colour == INK))
     if rounded(record.value, shown) != shown:
         found = rounded(record.value, shown)
         book.note(band.sheet, band.address, "the loss shown is not the result of record", shown, found)
@@ -82,7 +83,7 @@ def _product(band: Band, label: str, record: Quantity, table: Table, book: Book)
     numbers = []
     for name, edges, unit in zip(("n", "K", "h_V"), FACTORS, units, strict=True):
         cell = band.column(*edges)
-        number = whole(words(g for g in cell if g.colour == INK))
+        number = whole(words(g for g in cell if g.colour == INK and not g.bold))
         numbers.append(number)
         if name == "n" and number == 1 and not any(g.colour == ACCENT for g in cell):
             continue
