@@ -23,11 +23,26 @@ TOTAL_WIDTH, WORKED_WIDTH = 91.0, 118.0  # room for the formula of the total, an
 ROW_FORMULAS = ("n * K * h_V", "K * h_V")
 VERDICTS = ("met", "not met", "not applicable", "not assessed")
 POINT_EDGE = 8.0  # decimal points in the columns 'as given' and 'as used' of the inputs (mm)
+GIVEN_WIDTH, USED_WIDTH = 24.5, 29.5  # room in these columns (mm)
+
+
+def _width(words: str) -> float:
+    return metrics.width(metrics.SANS_REGULAR, 8.8, words)
+
+
+def _indent(value: str) -> float:
+    whole = numeral(value.partition(".")[0].upper().partition("E")[0]).text("\u00a0")
+    return max(0.0, POINT_EDGE * POINT - _width(whole))
 
 
 def _aligned(value: str) -> str:
-    whole = numeral(value.partition(".")[0].upper().partition("E")[0]).text("\u00a0")
-    return f"{max(0.0, POINT_EDGE * POINT - metrics.width(metrics.SANS_REGULAR, 8.8, whole)):.1f}pt"
+    return f"{_indent(value):.1f}pt"
+
+
+def _joint(value: str, unit: str, room: float) -> Markup:
+    """What stands between a number and its unit: a space, or a new row where the column is too narrow for both."""
+    together = _indent(value) + _width(f"{numeral(value).text(chr(0xA0))} {unit}")
+    return Markup("&nbsp;") if together <= room * POINT else Markup("<br>")
 
 
 def _split(given: str) -> tuple[str, str]:
@@ -44,6 +59,7 @@ def input_row(line: Mapping[str, Any], context: Context) -> dict[str, Any]:
     p, used = line.get("provenance") or {}, line["used"]
     number, words = _split(line["given"])
     unit, _, reference = words.partition(" ")
+    shown = text.unit(used["unit"])
     status = p.get("status", "") if line["kind"] == "given" else "constant"
     return {
         "address": line["address"],
@@ -51,11 +67,11 @@ def input_row(line: Mapping[str, Any], context: Context) -> dict[str, Any]:
         "title": line["title"],
         "source": _origin(line),
         "number": text.number(number) if number else "",
-        "unit": unit if number else "",
+        "unit": _joint(number, unit, GIVEN_WIDTH) + unit if number and unit else "",
         "words": reference if number else words,
         "indent": _aligned(number) if number else "0",
         "used": text.number(used["value"]),
-        "used_unit": text.unit(used["unit"]),
+        "used_unit": _joint(used["value"], shown, USED_WIDTH) + shown if shown else "",
         "used_indent": _aligned(used["value"]),
         "link": context.link(used["address"]) if used["address"] != line["address"] else "",
         "mark": glyphs.status(status) if status != "constant" else "",

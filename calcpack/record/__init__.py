@@ -10,7 +10,7 @@ from collections.abc import Iterator
 
 from .. import __version__, formula
 from ..lookup import library
-from ..rules import largest_drift
+from ..rules import ALLOWED, reported_decimals
 from ..source.inputs import Given
 from ..study import Study
 from ..symbols import NOMENCLATURE
@@ -191,7 +191,7 @@ def _rounding(study: Study) -> list[Json]:
         shadow = float(v.shadow / v.unit.factor)
         rows.append({
             "address": v.address, "what": title, "record": number(v.record), "shadow": short(shadow), "unit": v.unit.name,
-            "drift": f"{drift(v):.1E}", "limit": f"{largest_drift(v.record):f}",
+            "drift": f"{drift(v):.1E}", "limit": f"{ALLOWED[reported_decimals(v) or 0]:f}",
         })  # fmt: skip
     return rows
 

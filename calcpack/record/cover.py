@@ -9,7 +9,7 @@ from .. import formula
 from ..ledger import Ledger
 from ..number import rounded
 from ..quantity import PLANT
-from ..rules import Check, largest_drift, reported_decimals
+from ..rules import ALLOWED, Check, reported_decimals
 from ..study import Study
 from ..symbols import NOMENCLATURE
 from ..value import Value, drift, in_unit
@@ -30,12 +30,12 @@ def _check(ledger: Ledger, c: Check, address: str, references: References) -> Js
     rising = c.rule.tree.op in (">=", ">")
     names = formula.names(c.rule.tree)
     margin = None
-    if c.margin is not None and c.left is not None:
+    if c.margin is not None and c.left is not None and c.right is not None:
         kind = NOMENCLATURE[names[0]].kind
         plant = PLANT[ledger.system][_STEP.get(kind, kind)][0]
         step = Value(address, names[0], c.margin, 0.0, ledger.coherent(names[0]), "")
         shown = in_unit(step, plant) if kind not in _STEP else c.margin
-        x = rounded(shown, reported_decimals(shown), "down")
+        x = rounded(shown, min(_decimals(c.left), _decimals(c.right)), "down")
         margin = {
             "value": number(c.margin), "unit": ledger.coherent(names[0]).name, "headline": {"text": str(x), "unit": plant.name},
             "percent": None if c.percent is None else str(rounded(c.percent, 1, "down")),
@@ -58,6 +58,11 @@ def _check(ledger: Ledger, c: Check, address: str, references: References) -> Js
     }
 
 
+def _decimals(v: Value) -> int:
+    """Decimals of a reported side; a side that cannot be judged is shown without any."""
+    return reported_decimals(v) or 0
+
+
 def _side(ledger: Ledger, v: Value | None, symbol: str, toward: str) -> Json | None:
     if v is None:
         return None
@@ -68,7 +73,7 @@ def _side(ledger: Ledger, v: Value | None, symbol: str, toward: str) -> Json | N
     else:
         plant = PLANT[ledger.system][NOMENCLATURE[v.symbol].kind][0]
         shown = in_unit(v, plant)
-        headline = {"text": str(rounded(shown, reported_decimals(shown), toward)), "unit": plant.name}
+        headline = {"text": str(rounded(shown, _decimals(v), toward)), "unit": plant.name}
     return {"symbol": symbol, "name": v.title, **value(v), "headline": headline}
 
 
@@ -144,5 +149,5 @@ def _rounding(study: Study) -> str:
         return ""
     worst = max(sides, key=drift)
     unit = worst.unit.name
-    limit = largest_drift(worst.record)
+    limit = ALLOWED[_decimals(worst)]
     return f"largest effect of line rounding on a result: {drift(worst):.6f} {unit} (line {worst.address}); limit {limit:f} {unit}"

@@ -9,7 +9,7 @@ from typing import Literal
 from .. import formula
 from ..arithmetic import InDecimal, InFloat, evaluate
 from ..formula import Bin, Cmp, FormulaError
-from ..number import last_unit, of_record
+from ..number import of_record
 from ..references import Cite
 from ..symbols import DIMENSIONS, NOMENCLATURE
 from ..value import Value, drift
@@ -53,14 +53,13 @@ class Check:
     percent: Decimal | None = None
 
 
-def reported_decimals(x: Decimal) -> int:
-    """Decimals at which a side is reported: two, and fewer where that would be more than five digits."""
-    return max(0, min(2, 4 - x.adjusted())) if x else 2
+#: Decimals at which a side may be reported, and the drift that each allows: a tenth of its last digit.
+ALLOWED = {decimals: Decimal(1).scaleb(-decimals - 1) for decimals in (2, 1, 0)}
 
 
-def largest_drift(x: Decimal) -> Decimal:
-    """How far line rounding may move a side: a tenth of the last digit reported."""
-    return max(Decimal("0.001"), last_unit(x)) if x else Decimal("0.001")
+def reported_decimals(v: Value) -> int | None:
+    """Decimals at which line rounding lets a side be reported, two at most; ``None`` where it allows none."""
+    return next((decimals for decimals, most in ALLOWED.items() if drift(v) <= most), None)
 
 
 def compare(
@@ -85,7 +84,7 @@ def compare(
         if not right.record or NOMENCLATURE[b].kind == "temperature"
         else evaluate(_PERCENT, {"M": margin, "N_L": abs(right.record)}, InDecimal())
     )
-    drifted = any(drift(v) > largest_drift(v.record) for v in (left, right))
+    drifted = reported_decimals(left) is None or reported_decimals(right) is None
     verdict: Verdict = "met" if record else "not met"
     reason = met if record else not_met
     if record != shadow:
@@ -96,7 +95,7 @@ def compare(
     elif drifted:
         verdict, reason = (
             "not assessed",
-            "within rounding: line rounding moves a side by more than a tenth of its last digit reported",
+            "within rounding: line rounding moves a side by more than a tenth of a whole unit",
         )
     return Check(rule, about, verdict, reason, criterion, source, left, right, margin, percent)
 
