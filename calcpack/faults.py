@@ -6,6 +6,9 @@ from collections.abc import Iterable
 from dataclasses import dataclass
 from difflib import get_close_matches
 
+#: Letters of Hangul that show nothing, though they count as letters.
+FILLERS = "\u115f\u1160\u3164\uffa0"
+
 
 @dataclass(frozen=True)
 class Fault:
@@ -36,7 +39,7 @@ class InputFault(Exception):
 def format_fault(fault: Fault) -> str:
     """The fault in one line: ``file:line:column: key: wanted …; found …. Suggestion: …``."""
     place = fault.file if fault.line == 0 else f"{fault.file}:{fault.line}:{fault.column}"
-    key = "".join(c if c.isprintable() else " " for c in fault.key[:120])
+    key = visible(fault.key[:120])
     parts = [place, key, f"wanted {fault.wanted}; found {fault.found}."]
     text = ": ".join(part for part in parts if part)
     end = "" if fault.suggestion.endswith("?") else "."
@@ -65,9 +68,12 @@ def did_you_mean(word: str, choices: Iterable[str]) -> str:
 
 def shown(text: str, length: int = 60) -> str:
     """``text`` in quotation marks, for a message: cut when long, invisible characters written out."""
-    cut = text if len(text) <= length else text[: length - 1] + "…"
-    visible = "".join(c if c.isprintable() else f"<U+{ord(c):04X}>" for c in cut)
-    return f"“{visible}”"
+    return f"“{visible(text if len(text) <= length else text[: length - 1] + '…')}”"
+
+
+def visible(text: str) -> str:
+    """``text`` with its invisible characters, and halves of characters, written out: ``a<U+200B>b``."""
+    return "".join(c if c.isprintable() and c not in FILLERS else f"<U+{ord(c):04X}>" for c in text)
 
 
 def listed(words: Iterable[str]) -> str:

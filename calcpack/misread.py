@@ -4,7 +4,7 @@ from __future__ import annotations
 
 import re
 import unicodedata
-from decimal import Decimal
+from decimal import Context, Decimal
 from fractions import Fraction
 
 from .faults import listed, nearest, shown
@@ -27,8 +27,10 @@ _MEANT = {
 }  # fmt: skip
 #: Letters of another alphabet that look like ours.
 _LOOK_ALIKE = str.maketrans("аВСсеКкМмНоОРрТтх", "aBCceKkMmHoOPpTtx")
+#: Digits of a typed number.
+MOST_DIGITS = 10
 _FRACTION = re.compile(r"(?:([0-9]{1,4})[ -])?([0-9]{1,3})/([0-9]{1,3})(?![0-9.,/])")
-_GROUPED = re.compile(r"[+\-\u2212]?[0-9]{1,3}(?:[ \u00a0\u202f'’][0-9]{3})+(?:\.[0-9]+)?(?![0-9.,])")
+_GROUPED = re.compile(r"[+\-\u2212]?[0-9]{1,3}(?:[ '’][0-9]{3})+(?:\.[0-9]+)?(?![0-9.,])")
 _COMMA = re.compile(r"([+\-\u2212]?[0-9]+),([0-9]+)(?![0-9.,])")
 
 
@@ -71,14 +73,16 @@ def unknown_unit(number: str, name: str, reference: str | None, kind: str, wante
     return QuantityFault("unit", wanted, f"{shown(text)}: the unit {shown(name)} is not known", hint)
 
 
+def too_long(number: str, rest: str, wanted: str, text: str) -> QuantityFault:
+    """A number of more digits than a column of the pages holds, or than anything is measured to."""
+    short = Context(prec=MOST_DIGITS).create_decimal(number).normalize()
+    found = f"{shown(text)}, which has more"
+    hint = f"write `{short:g}{rest}`" if abs(short.adjusted()) < 100 else ""
+    return QuantityFault("number", f"{wanted}, in at most ten digits", found, hint)
+
+
 def unreadable(text: str, wanted: str, kind: str) -> QuantityFault:
     """Why a text does not begin with one plain number, as far as that can be told."""
-    odd = next((c for c in text if not c.isprintable() or (c.isspace() and c != " ")), "")
-    if odd:
-        name = unicodedata.name(odd, f"U+{ord(odd):04X}").lower()
-        clean = re.sub(" +", " ", "".join(" " if c.isspace() else c for c in text if c.isspace() or c.isprintable()))
-        hint = f"write `{clean.strip()}` with ordinary spaces"
-        return QuantityFault("character", wanted, f"{shown(text)}, with a hidden character ({name})", hint)
     if not text:
         return QuantityFault("number", wanted, "nothing")
     comma, grouped = _COMMA.match(text), _GROUPED.match(text)
@@ -95,7 +99,7 @@ def unreadable(text: str, wanted: str, kind: str) -> QuantityFault:
         hint = f"write `{float(value):g}{text[fraction.end() :]}`"
         return QuantityFault("number", wanted, f"{shown(text)}: fractions are not read", hint)
     if grouped:
-        joined = re.sub("[ \u00a0\u202f'’]", "", grouped.group()) + text[grouped.end() :]
+        joined = re.sub("[ '’]", "", grouped.group()) + text[grouped.end() :]
         return QuantityFault("number", wanted, f"{shown(text)}: thousands are not grouped", f"write `{joined}`")
     if re.match(r"[+\-\u2212]?(nan|inf|\.nan|\.inf)", text, re.IGNORECASE):
         return QuantityFault("number", wanted, f"{shown(text)}, which is not a finite number")

@@ -9,10 +9,11 @@ import re
 from dataclasses import dataclass
 from decimal import Decimal
 from fractions import Fraction
+from functools import cache
 
 from .faults import listed, shown
 from .kinds import BARE, KINDS, Kind, Reference
-from .misread import QuantityFault, unknown_unit, unreadable, with_units
+from .misread import MOST_DIGITS, QuantityFault, too_long, unknown_unit, unreadable, with_units
 from .units import CARRIED, COHERENT, PLANT, SPELLINGS, Unit, conversion, unit
 
 __all__ = ["COHERENT", "KINDS", "PLANT", "Quantity", "QuantityFault", "Unit", "conversion", "parse", "unit"]
@@ -43,8 +44,8 @@ _REFERENCES: dict[str, Reference] = {
     "vacuum": "vacuum",
 }
 _MINUS = ("-", "\u2212")
-#: A number as it must be typed.  Digits are capped so that no text can ask for a number of unreasonable size.
-_NUMBER = re.compile(r"([+\-\u2212]?)([0-9]{1,30}(?:\.[0-9]{1,30})?(?:[eE][+\-]?[0-9]{1,2})?)(?![0-9.,eE/])")
+#: A number as it must be typed.  Its exponent is capped so that no text can ask for a number of unreasonable size.
+_NUMBER = re.compile(r"([+\-\u2212]?)([0-9]+(?:\.[0-9]+)?(?:[eE][+\-]?[0-9]{1,2})?)(?![0-9.,eE/])")
 #: No gauge on Earth reads lower than this below its barometer: no barometer recorded is above 1 090 hPa.
 _FULL_VACUUM = Fraction(110_000)
 
@@ -75,13 +76,15 @@ def parse(text: str, kind: str) -> Quantity:
     wanted = f"{asked.words}, such as {listed(asked.examples)}"
     text = text.strip(" \t\r\n")
     match = _NUMBER.match(text)
-    if match is None or not _ascii_space(text):
+    if match is None:
         raise unreadable(text, wanted, kind)
     sign, digits = match.groups()
     typed = ("-" if sign in _MINUS else "") + digits if sign and Decimal(digits) else digits
     rest = text[match.end() :].strip(" \t")
     if rest[:1].isdigit() and rest not in SPELLINGS:
         raise unreadable(text, wanted, kind)
+    if len(re.sub("[eE].*|[.]", "", digits.removeprefix("0."))) > MOST_DIGITS:
+        raise too_long(typed, text[match.end() :], wanted, text)
     name, reference = _split_reference(rest, text, wanted)
     if kind in BARE and not rest:
         name = "1"
@@ -97,12 +100,9 @@ def parse(text: str, kind: str) -> Quantity:
         raise QuantityFault("dimension", wanted, f"{shown(text)}: {found.name} measures {measures}")
     value = Quantity(Decimal(typed), typed, found, reference)
     _check_reference(value, asked, wanted, text)
-    _check_range(value, asked, wanted, text)
+    _check_existence(value, asked, wanted, text)
+    _check_size(value, asked, text)
     return value
-
-
-def _ascii_space(text: str) -> bool:
-    return all(c.isprintable() and (c == " " or not c.isspace()) for c in text)
 
 
 def _split_reference(rest: str, text: str, wanted: str) -> tuple[str, Reference | None]:
@@ -137,14 +137,30 @@ def _check_reference(value: Quantity, asked: Kind, wanted: str, text: str) -> No
 _COUNTS = {"gauge": "the barometer", "absolute": "zero pressure", "vacuum": "the barometer downwards"}
 
 
-#: Powers of ten beyond which a number is a slip of the hand.
+#: Powers of ten beyond which a number is a slip of the hand, whatever its kind.
 _LARGEST_POWER = 12
 
 
-def _check_range(value: Quantity, asked: Kind, wanted: str, text: str) -> None:
-    """Refuse what cannot exist."""
+@cache
+def _size(text: str) -> Fraction:
+    """A limit of a range in SI."""
+    number, _, name = text.partition(" ")
+    return Fraction(number) * unit(name or "1").factor
+
+
+def _check_size(value: Quantity, asked: Kind, text: str) -> None:
+    """Refuse what is not met in practice: the unit is most often the slip."""
+    hint = "check the unit and the decimal point" if value.unit.name != "1" else "check the decimal point"
+    lowest, highest = asked.ranges[asked.dimensions.index(value.unit.kind)] if asked.ranges else ("", "")
+    if (lowest and value.si() < _size(lowest)) or (highest and value.si() > _size(highest)):
+        limits = f"from {lowest} to {highest}" if lowest else f"of at most {highest}"
+        raise QuantityFault("range", f"{asked.words}, {limits}", shown(text), hint)
     if value.number and abs(value.number.adjusted()) > _LARGEST_POWER:
-        raise QuantityFault("range", wanted, f"{shown(text)}, which is no size met in practice")
+        raise QuantityFault("range", asked.words, f"{shown(text)}, which is no size met in practice", hint)
+
+
+def _check_existence(value: Quantity, asked: Kind, wanted: str, text: str) -> None:
+    """Refuse what cannot exist."""
     si = value.si()
     if value.unit.kind == "temperature" and si < 0:
         raise QuantityFault("range", wanted, f"{shown(text)}, which is below absolute zero (-273.15 °C, -459.67 °F)")

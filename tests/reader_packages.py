@@ -218,6 +218,7 @@ PLANTS: dict[str, tuple[dict[str, Any], bool, int]] = {
     "viscous, laminar": ({**_US, "pump.flow.highest": "400 UK gal/min", "liquid": _OIL}, True, 0),
     "vacuum at the gauge": ({"readings.0.gauge.pressure": "4 inHg vacuum"}, True, 1),
     "contingency": ({"line.friction_contingency": {"value": "10 %", **_BY}}, True, 0),
+    "small loss": ({"line.sections.0.elements.3.K": "0.001"}, True, 0),
     "readings only": ({**_US, "calculation.paper": "A4"}, False, 2),
 }  # fmt: skip
 

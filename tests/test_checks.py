@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import re
 from decimal import Decimal
 from fractions import Fraction
 from functools import cache
@@ -17,18 +18,13 @@ from calcpack.catalog import EQUATION
 from calcpack.fitting_set import CRANE
 from calcpack.ledger import Ledger
 from calcpack.number import last_unit
-from calcpack.quantity import parse
-from calcpack.symbols import NOMENCLATURE
+from calcpack.quantity import Quantity, parse, unit
 from calcpack.value import Value
 
 Check = dict[str, Any]
 FILE: dict[str, Any] = yaml.safe_load((Path(__file__).parent / "checks.yaml").read_text("utf-8"))
 CHECKS: list[Check] = FILE["checks"]
 PROVENANCE = {"retrieved", "library", "derived", "memory"}
-#: Kinds of quantity under which the text of a symbol's kind is read.
-_TYPED = {"ratio": "coefficient", "pressure": "pressure", "length": "elevation", "bore": "roughness"}
-
-
 #: Columns at their conventional density, written out for pint.
 _CONVENTIONAL = {"inHg": "13595.1*kg/m**3*g_0*inch"}
 
@@ -55,11 +51,9 @@ def allowed(tolerance: str, expected: str) -> Fraction:
 
 
 def entered(ledger: Ledger, symbol: str, text: str, number: int = 0) -> Value:
-    """An input as typed."""
-    kind = NOMENCLATURE[symbol].kind
-    if symbol == "p_g":
-        kind = "gauge_pressure"
-    return ledger.given(symbol, f"{symbol} {number}", parse(text, _TYPED.get(kind, kind)))
+    """An input as typed; a figure of a book may have more digits, or another size, than a plant's file takes."""
+    head, _, name = re.sub(" (absolute|gauge)$", "", text).partition(" ")
+    return ledger.given(symbol, f"{symbol} {number}", Quantity(Decimal(head), head, unit(name or "1")))
 
 
 def computed(check: Check, system: str) -> dict[str, Value]:

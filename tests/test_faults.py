@@ -7,7 +7,7 @@ from pathlib import Path
 
 import pytest
 
-from calcpack.faults import Fault, InputFault, did_you_mean, format_fault, listed, nearest, shown
+from calcpack.faults import Fault, InputFault, did_you_mean, format_fault, listed, nearest, shown, visible
 from calcpack.source import load
 
 FOLDER = Path(__file__).parent.parent / "sample_inputs" / "faults"
@@ -35,7 +35,78 @@ EXPECTED: dict[str, list[tuple[str, str, str, str]]] = {
     "not_a_number": [("length: nan m", "line.sections[P1].elements[2].length", "not a finite number", "")],
     "coefficient_nan": [("K: .nan", "line.sections[P1].elements[1].K", "plain number", "")],
     "negative_flow": [("-118 m³/h", "readings[1].flow", "above zero", "")],
-    "hidden_character": [("0.30\u00a0m", "readings[1].gauge.elevation", "no-break space", "`0.30 m`")],
+    "hidden_character": [('elevation: "0.30', "readings[1].gauge.elevation", "zero width space", "delete")],
+    "hidden_escapes": [
+        ("owner:", "calculation.owner", "U+0000, which is hidden and U+001B", "delete"),
+        ('"S2\\u202e"', "sources.S2", "right-to-left override", "delete"),
+        ('name: "Wash', "supply.name", "U+E0041 (tag", "delete"),
+        ('name: "suction', "line.sections[P1].name", "U+115F (hangul", "delete"),
+    ],
+    "hidden_in_comment": [
+        ("# criteria", NOWHERE, "U+061C (arabic letter mark)", "delete"),
+        ("name: suction", NOWHERE, "U+115F (hangul", "delete"),
+    ],
+    "other_letters": [
+        ("owner:", "calculation.owner", "“落” (U+843D)", "transliterate"),
+        ("T-3", "supply.name", "Latin, Greek or Cyrillic", "transliterate"),
+        ("name: P-3", "pump.name", "(U+1F4A7)", "transliterate"),
+        ("\uff14.2 m", "pump.npsh_required.value", "(U+FF14)", "`4.2 m`"),
+    ],
+    "ids_that_differ_by_spaces": [
+        ("kind: elbow", "line.sections[P1].elements[V1].id", "after line 38", ""),
+    ],
+    "blank_texts": [
+        ("owner:", "calculation.owner", "a text", ""),
+        ("project:", "calculation.project", "a text", ""),
+        ("name: |", "supply.name", "a text", ""),
+    ],
+    "long_past_dates": [
+        ("1926-11-16", "calculation.date", "not before 1950-01-01", "check the year"),
+        ("0206-10-02", "readings[1].date", "not before 1950-01-01", "check the year"),
+    ],
+    "date_without_dashes": [
+        ("20261116", "calculation.date", "year first, such as", "`2026-11-16`"),
+        ("2026/10/2", "readings[1].date", "year first, such as", "`2026-10-02`"),
+    ],
+    "whole_numbers": [
+        ("angle: 90.0", "line.sections[P1].elements[3].angle", "a whole number", "`90`"),
+        ("angle: 90.0", "line.sections[P1].elements[3].count", "a whole number", "`2`"),
+    ],
+    "too_many_digits": [
+        ("4.20000000001 m", "pump.npsh_required.value", "at most ten digits", "`4.2 m`"),
+        ("0.000000000006 km", "criteria.npsh_margin.difference", "at most ten digits", "`6e-12 km`"),
+    ],
+    "sizes_not_met": [
+        ("120 km", "site.elevation", "from -15 km to 15 km", "check the unit"),
+        ("1.7 bar", "site.weather_allowance", "of at most 20 kPa", "check the unit"),
+        ("30000 °C", "liquid.temperature.highest", "from 1 K to 900 K", "check the unit"),
+        ("bore: 154 m", "line.sections[P1].bore", "from 2 mm to 20 m", "check the unit"),
+        ("roughness: 0.5 m", "line.sections[P1].roughness", "of at most 100 mm", "check the unit"),
+        ("K: 5e6", "line.sections[P1].elements[1].K", "of at most 100000", "check the decimal"),
+        ("9500 km", "line.sections[P1].elements[2].length", "of at most 100 km", "check the unit"),
+        ("15000000 m³/h", "pump.flow.highest", "from 1e-9 m³/s to 1000 m³/s", "check the unit"),
+        ("4200 m", "pump.npsh_required.value", "of at most 500 m", "check the unit"),
+        ("1480000 r/min", "pump.npsh_required.speed", "of at most 100000 r/min", "check the unit"),
+        ("ratio: 110", "criteria.npsh_margin.ratio", "of at most 100", "check the decimal"),
+        ("1002 kPa", "readings[1].barometer", "from 20 kPa to 110 kPa", "check the unit"),
+        ("2500 MPa", "readings[1].gauge.pressure", "of at most 100 MPa", "check the unit"),
+    ],
+    "mixed_measures": [
+        ("22 kPa gauge", "supply.pressure.normal", "a gauge pressure, as for `lowest`", "both as an absolute"),
+        ("15 kPa", "line.sections[P1].elements[5].drop.fouled", "as for `clean`", "both as a head"),
+    ],
+    "long_texts": [
+        ("title: Wash", "calculation.title", "at most 120 characters", "shorten"),
+        ("12345678901", "calculation.revision", "at most 10 characters", "shorten"),
+        ("P-3 A/B and", "pump.name", "at most 80 characters", "shorten"),
+    ],
+    "schedule_near_miss": [
+        ("schedule: std", "line.sections[P1].schedule", "such as STD", "`STD`"),
+        ("schedule: Sch 40", "readings[1].gauge.tap.schedule", "such as STD", "`40`"),
+    ],
+    "two_entrances": [
+        ("shape: bell", "line.sections[P1].elements[4]", "one entrance, at the supply", "the supply of the second")
+    ],
     "reversed_text": [("\u202e", NOWHERE, "U+202E", "delete")],
     "ambiguous_scalar": [
         ("0123", "sources.S1.edition", "base 8", '`"0123"`'),
@@ -100,7 +171,7 @@ EXPECTED: dict[str, list[tuple[str, str, str, str]]] = {
         ("S9 2.1", "liquid.temperature.source", "S1 or S2", "`sources`"),
         ("schedul:", "line.sections[P1].schedul", "`schedule`", "`schedule`"),
         ("length: 9.5}", "line.sections[P1].elements[2].length", "a value needs its unit", "`9.5 m`"),
-        ("mm water", "pump.npsh_required.value", "a head", ""),
+        ("mm water", "pump.npsh_required.value", "a head of the liquid", ""),
         ("100.2 kPa", "readings[1].barometer", "absolute", "`100.2 kPa absolute`"),
         ("gauge: {pressure", "readings[1].gauge.elevation", "`elevation`", "elevation: "),
     ],
@@ -172,6 +243,7 @@ def test_nearest() -> None:
 
 def test_texts_in_messages() -> None:
     assert shown("5\u200bm") == "“5<U+200B>m”"
+    assert visible("a\udce9 \u115f\n.yaml") == "a<U+DCE9> <U+115F><U+000A>.yaml"
     assert len(shown("x" * 1000)) == 62
     assert listed(["a"]) == "a"
     assert listed(["a", "b", "c"]) == "a, b or c"

@@ -20,7 +20,7 @@ LAYERS = (
     "equations catalog rules lookup root ledger value source fitting_set",
     "study",
     "record table",
-    "page reader cli __main__ __init__",
+    "page reader cli output __main__ __init__",
 )
 LAYER = {room: number for number, rooms in enumerate(LAYERS, 1) for room in rooms.split()}
 #: Libraries and the only rooms that may import them.

@@ -191,7 +191,7 @@ def test_every_spelling_is_read_as_its_unit(spelling: str) -> None:
         kind = "pressure_difference"
     if wanted.name in ("1", "%"):
         kind = {"1": "ratio", "%": "percentage"}[wanted.name]
-    text = "1.5" if wanted.name == "1" else f"1.5 {spelling}"
+    text = "1.5" if wanted.name == "1" else f"{500 if kind == 'temperature' else 1.5} {spelling}"
     assert parse(text, kind).unit is wanted
 
 
@@ -212,9 +212,9 @@ def test_every_spelling_is_read_as_its_unit(spelling: str) -> None:
         ("0.8 mPa.s", "viscosity", "0.8", "mPa·s", None),
         ("0.8 cSt", "viscosity", "0.8", "cSt", None),
         ("3 psig", "pressure", "3", "psi", "gauge"),
-        ("11.93 psi absolute", "absolute_pressure", "11.93", "psi", "absolute"),
-        ("11.93 psia", "absolute_pressure", "11.93", "psi", "absolute"),
-        ("1.013 bar abs", "absolute_pressure", "1.013", "bar", "absolute"),
+        ("11.93 psi absolute", "barometer", "11.93", "psi", "absolute"),
+        ("11.93 psia", "barometer", "11.93", "psi", "absolute"),
+        ("1.013 bar abs", "barometer", "1.013", "bar", "absolute"),
         ("-13.5 kPa gauge", "gauge_pressure", "-13.5", "kPa", "gauge"),
         ("5 inHg vacuum", "gauge_pressure", "5", "inHg", "vacuum"),
         ("0.4 m", "drop", "0.4", "m", None),
@@ -258,19 +258,19 @@ def test_temperatures_are_exact() -> None:
         ("20 ℃", "temperature", "unit", "`20 °C`"),
         ("118 m3/hr", "flow", "unit", "`118 m³/h`"),
         ("3 KPA gauge", "pressure", "unit", "`3 kPa gauge`"),
-        ("10 lb/in2", "absolute_pressure", "unit", "`10 psi absolute`"),
+        ("10 lb/in2", "barometer", "unit", "`10 psi absolute`"),
         ('14.5"', "bore", "unit", "`14.5 in`"),
         ("3 \u043cm", "length", "unit", "`3 mm`"),
         ("3 m", "coefficient", "dimension", ""),
         ("3 gal/min", "length", "dimension", ""),
         ("110 %", "ratio", "dimension", ""),
         ("22 kPa", "pressure", "reference", "`22 kPa gauge` or `22 kPa absolute`"),
-        ("22 kPa gauge", "absolute_pressure", "reference", ""),
+        ("22 kPa gauge", "barometer", "reference", ""),
         ("22 kPa gauge", "pressure_difference", "reference", "`22 kPa`"),
         ("5 m gauge", "length", "reference", "`5 m`"),
         ("3 psia gauge", "pressure", "reference", ""),
         ("5 inHg vacuum", "pressure", "reference", ""),
-        ("-2 kPa absolute", "absolute_pressure", "range", ""),
+        ("-2 kPa absolute", "barometer", "range", ""),
         ("-2 kPa absolute", "pressure", "range", "`-2 kPa gauge`"),
         ("-5 inHg vacuum", "gauge_pressure", "range", "`5 inHg vacuum`"),
         ("40 inHg vacuum", "gauge_pressure", "range", ""),
@@ -280,8 +280,29 @@ def test_temperatures_are_exact() -> None:
         ("0 mm", "bore", "range", ""),
         ("-0.1", "coefficient", "range", ""),
         ("5 °C", "temperature_difference", "unit", ""),
-        ("5\u00a0m", "length", "character", "`5 m`"),
-        ("5\u200bm", "length", "character", ""),
+        ("5\u00a0m", "length", "unit", "`5 m`"),
+        ("5\u200bm", "length", "unit", "`5 m`"),
+        ("12345678901 m", "length", "number", "`1.23456789e+10 m`"),
+        ("0.12345678901 mm", "bore", "number", "`0.123456789 mm`"),
+        ("-1.0000000000000 m", "elevation", "number", "`-1 m`"),
+        ("0.0000000000012 m", "length", "number", "`1.2e-12 m`"),
+        ("1e13 m", "length", "range", "check the unit"),
+        ("1e-13 m", "roughness", "range", "check the unit"),
+        ("1.99 mm", "diameter", "range", "check the unit"),
+        ("20.1 m", "diameter", "range", "check the unit"),
+        ("110.1 kPa absolute", "barometer", "range", "check the unit"),
+        ("19.9 kPa absolute", "barometer", "range", "check the unit"),
+        ("0.09 Pa absolute", "vapour_pressure", "range", "check the unit"),
+        ("101 MPa absolute", "pressure", "range", "check the unit"),
+        ("1.01e5 kPa gauge", "gauge_pressure", "range", "check the unit"),
+        ("299 kg/m³", "liquid_density", "range", "check the unit"),
+        ("1001 Pa·s", "viscosity", "range", "check the unit"),
+        ("1.1 m²/s", "viscosity", "range", "check the unit"),
+        ("501 m", "drop", "range", "check the unit"),
+        ("101 MPa", "drop", "range", "check the unit"),
+        ("201 %", "percentage", "range", "check the unit"),
+        ("101", "margin_ratio", "range", "check the decimal point"),
+        ("-15.1 km", "elevation", "range", "check the unit"),
         ("\uff15 m", "length", "character", "`5 m`"),
     ],
 )
@@ -291,6 +312,27 @@ def test_refused(text: str, kind: str, fault: str, word: str) -> None:
     assert caught.value.kind == fault
     assert word in caught.value.suggestion
     assert KINDS[kind].words in caught.value.wanted
+
+
+@pytest.mark.parametrize("kind", sorted(kind for kind in KINDS if KINDS[kind].ranges))
+def test_a_range_for_each_dimension_holds_its_own_ends(kind: str) -> None:
+    asked = KINDS[kind]
+    assert len(asked.ranges) == len(asked.dimensions)
+    reference = f" {asked.references[-1]}" if asked.references and asked.references[-1] != "vacuum" else ""
+    reference = reference or (" gauge" if asked.references else "")
+    for dimension, limits in zip(asked.dimensions, asked.ranges, strict=True):
+        for limit in filter(None, limits):
+            value = parse(limit + reference, kind)
+            assert value.unit.kind == dimension
+            beyond = value.number * (Decimal("0.999") if limit == limits[0] and value.number > 0 else Decimal("1.001"))
+            with pytest.raises(QuantityFault, match="check the") as caught:
+                parse(f"{beyond} {value.unit.name}{reference}".removesuffix(" 1"), kind)
+            assert caught.value.kind == "range"
+
+
+def test_ten_digits_are_enough() -> None:
+    for text in ("1234567890 Pa", "0.1234567890 Pa", "0.0000000001 Pa", "123456.7890e2 Pa"):
+        assert parse(text, "pressure_difference").text == text.removesuffix(" Pa")
 
 
 def test_a_fault_says_what_the_unit_measures() -> None:

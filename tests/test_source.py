@@ -3,7 +3,9 @@
 from __future__ import annotations
 
 import hashlib
+import os
 import random
+import unicodedata
 from datetime import date
 from pathlib import Path
 from typing import Any
@@ -11,10 +13,12 @@ from typing import Any
 import jsonschema
 import pytest
 import yaml
+from fontTools.ttLib import TTFont
 
 from calcpack.faults import InputFault
 from calcpack.kinds import KINDS
 from calcpack.source import MAX_FAULTS, document, load, loads
+from calcpack.source.characters import objection
 from calcpack.source.inputs import Given
 from calcpack.source.schema import parts, quantities, schema
 
@@ -113,9 +117,183 @@ def test_a_byte_order_mark_and_windows_line_ends_are_accepted() -> None:
     assert read.pump.datum_elevation.line == loads(BASE.encode(), "a.yaml").pump.datum_elevation.line
 
 
-def test_utf16_is_named() -> None:
-    with pytest.raises(InputFault, match="UTF-16"):
-        loads(BASE.encode("utf-16"), "a.yaml")
+@pytest.mark.parametrize(
+    ("encoding", "found"),
+    [
+        ("utf-16", "found UTF-16."),
+        ("utf-32", "found UTF-32."),
+        ("utf-16-le", "UTF-16 or UTF-32"),
+        ("utf-16-be", "UTF-16 or UTF-32"),
+        ("utf-32-be", "UTF-16 or UTF-32"),
+    ],
+)
+def test_another_encoding_is_named(encoding: str, found: str) -> None:
+    with pytest.raises(InputFault, match=found):
+        loads(BASE.encode(encoding), "a.yaml")
+
+
+def test_texts_are_made_alike_where_they_are_read() -> None:
+    raw = changed(
+        ("owner: Larch Mill (invented)", 'owner: "\\u00a0Larch  Mill\t(invented) "'),
+        ("project: Larch Mill wash water (invented)", "project: |\n    Larch Mill\n    wash\u2003water\n"),
+        ("name: P-3 A/B", "name: Pompe d'eau re\u0301serve\u0301e"),
+        ("date: 2026-11-16", 'date: "2026-11-16\\n"'),
+        ("elevation: 0.30 m", "elevation: 0.30\u00a0m"),
+        ("normal: 2.10 m, source: S1 2.2", 'normal: 2.10 m, source: "S1\u00a0 2.2 "'),
+        ("  S2: {title", '  "S2 ": {title'),
+    )
+    read = loads(raw, "a.yaml")
+    assert (read.owner, read.project) == ("Larch Mill (invented)", "Larch Mill wash water")
+    assert read.pump.name == "Pompe d'eau réservée"
+    assert (read.date, read.raw) == (date(2026, 11, 16), raw)
+    assert (read.readings[0].gauge.elevation.text, read.sources[1].id) == ("0.30 m", "S2")
+    assert read.supply.level is not None and read.supply.level.lowest is not None
+    assert (read.supply.level.lowest.source, read.supply.level.lowest.place) == ("S1", "2.2")
+
+
+def test_a_comment_may_hold_any_letters() -> None:
+    assert loads(changed(("sources:", "sources:  # 泵房 خزان 👩\u200d🔧 ⚠\ufe0f \U0001fae9")), "a.yaml").sources
+
+
+@pytest.mark.parametrize(
+    ("escape", "name"),
+    [
+        (r"\0", "U+0000"),
+        (r"\a", "U+0007"),
+        (r"\e", "U+001B"),
+        (r"\x7f", "U+007F"),
+        (r"\N", "U+0085"),
+        (r"\L", "U+2028"),
+        (r"\u00ad", "U+00AD"),
+        (r"\u200d", "U+200D"),
+        (r"\u202e", "U+202E"),
+        (r"\u3164", "U+3164"),
+        (r"\uE000", "U+E000"),
+        (r"\uFEFF", "U+FEFF"),
+        (r"\uFFFF", "U+FFFF"),
+        (r"\u0378", "U+0378"),
+        (r"\U000E0041", "U+E0041"),
+        (r"\u0332", "U+0332"),
+        (r"\uFE0F", "U+FE0F"),
+    ],
+)
+def test_an_escape_hides_nothing(escape: str, name: str) -> None:
+    """In a value, in a key, and as all of a text; one fault each, at its own place."""
+    with pytest.raises(InputFault) as caught:
+        loads(
+            changed(
+                ("owner: Larch Mill (invented)", f'owner: "Larch{escape} Mill"'),
+                ("project: Larch Mill wash water (invented)", f'project: "{escape}"'),
+                ("status: preliminary", f'"status{escape}": preliminary'),
+            ),
+            "a.yaml",
+        )
+    faults = caught.value.faults
+    assert [fault.kind for fault in faults] == ["character"] * 3
+    assert all(name in fault.found for fault in faults)
+
+
+@pytest.mark.parametrize("loader", ["CSafeLoader", "SafeLoader"])
+@pytest.mark.parametrize("escape", [r"\ud83d\ude00", r"\U00110000", r"\UFFFFFFFF"])
+def test_an_escape_that_is_no_character(escape: str, loader: str, monkeypatch: pytest.MonkeyPatch) -> None:
+    monkeypatch.setattr(document, "_LOADER", getattr(yaml, loader))
+    with pytest.raises(InputFault) as caught:
+        loads(changed(("owner: Larch Mill (invented)", f'owner: "{escape}"')), "a.yaml")
+    (fault,) = caught.value.faults
+    assert fault.kind in ("yaml", "character")
+    assert "quotation" not in fault.suggestion
+
+
+def test_hidden_characters_on_every_line_are_counted_after_a_hundred() -> None:
+    faults = refused("# \u202ea\n".encode() * 3 * MAX_FAULTS)
+    assert len(faults) == MAX_FAULTS + 1
+
+
+def test_what_is_hidden_is_told_even_where_the_notation_is_broken() -> None:
+    raw = changed(("sources:", "sources:  # a\u202eb"), ("kind: open", "kind: [open"))
+    assert refused(raw) == [("", "character"), ("", "yaml")]
+
+
+def test_the_letters_allowed_are_those_of_the_fonts() -> None:
+    """Every letter the fonts share is allowed, and the alphabets allowed are in the fonts as far as they are in use."""
+    fonts = (Path(__file__).parent.parent / "templates" / "fonts").glob("*.ttf")
+    held = set.intersection(*({chr(c) for c in TTFont(path).getBestCmap()} for path in fonts))
+    letters = {c for c in held if unicodedata.category(c) in ("Lu", "Ll", "Lo", "Nd")}
+    refused = {c for c in letters if objection(c)}
+    assert all(objection(unicodedata.normalize("NFKC", c)) is None for c in refused), "ligatures and the like only"
+    in_use = "".join(map(chr, [*range(0x20, 0x7F), *range(0xA1, 0xAD), *range(0xAE, 0x180), *range(0x386, 0x3CF)]))
+    in_use += "".join(map(chr, range(0x400, 0x460))) + "–—‘’“”„•…€≈≠≤≥−√∞Δ°³²·µ½ẞỳ"
+    assert not [c for c in in_use if objection(c) and unicodedata.category(c) != "Cn"]
+    missing = [c for c in in_use if c not in held and unicodedata.category(c) != "Cn"]
+    assert len(missing) < 0.02 * len(in_use), missing
+    assert all(objection(c) for c in "泵خזּ💧ก\u0905ツ한ﬁ４")
+
+
+@pytest.mark.parametrize(
+    ("old", "new", "wanted"),
+    [
+        ("readings:\n", "readings:\n", "at most 20 readings"),
+        ("sources:\n", "sources:\n", "at most 100 sources"),
+    ],
+)
+def test_lists_have_an_end(old: str, new: str, wanted: str) -> None:
+    more = "".join(f"  X{n}: {{title: sheet}}\n" for n in range(99)) if "sources" in old else ""
+    text = BASE.replace(old, new + more)
+    if "readings" in old:
+        head, _, entry = text.partition("readings:\n")
+        entry = entry.rstrip() + "\n"
+        text = head + "readings:\n" + "".join(entry.replace("commissioning", f"test {n}") for n in range(21))
+    with pytest.raises(InputFault) as caught:
+        loads(text.encode(), "a.yaml")
+    (fault,) = caught.value.faults
+    assert fault.wanted == wanted
+    assert fault.found in ("21", "101")
+
+
+def _elements(section: str, count: int) -> str:
+    return "".join(f"        - {{id: {section}{n}, kind: pipe, length: 1 m}}\n" for n in range(count))
+
+
+def test_a_line_has_an_end() -> None:
+    head, _, rest = BASE.partition("    - id: P1\n")
+    section, _, tail = rest.partition("        - {id: 1, kind: entrance")
+    pump = tail[tail.index("pump:\n") :]
+    one = f"    - id: P1\n{section}"
+    lines = {n: "".join(one.replace("P1", f"P{s}") + _elements("e", n) for s in range(4)) for n in (50, 51, 61)}
+    many = "".join(one.replace("P1", f"P{s}") + _elements("e", 1) for s in range(21))
+    pump = pump.replace("    strainers: clean\n", "")
+    assert loads((head + lines[50] + pump).encode(), "a.yaml").line is not None
+    assert refused((head + lines[51] + pump).encode()) == [("line.sections[P3].elements[e47]", "count")]
+    assert [key for key, _ in refused((head + lines[61] + pump).encode())][0] == "line.sections[P0].elements"
+    assert refused((head + many + pump).encode()) == [("line.sections", "count")]
+
+
+def test_a_whole_number_as_a_revision_is_a_text() -> None:
+    assert refused(changed(("revision: A", "revision: 12345678901"))) == [("calculation.revision", "text")]
+    assert refused(changed(("schedule: 40", "schedule: 4000"))) == [
+        ("line.sections[P1].schedule", "text"),
+        ("readings[1].gauge.tap.schedule", "text"),
+    ]
+
+
+@pytest.mark.parametrize(
+    ("old", "new", "hint"),
+    [
+        ("size: DN 150\n", "size: dn150\n", "`DN 150`"),
+        ("schedule: 40\n", "schedule: xs\n", "`XS`"),
+        ("schedule: 40\n", "schedule: SCH40\n", "`40`"),
+        ("date: 2026-11-16", "date: 2026.11.16", "`2026-11-16`"),
+        ("date: 2026-11-16", "date: 16.11.2026", ""),
+        ("size: DN 150\n", "size: 150\n", ""),
+        ("owner: Larch Mill (invented)", "owner: 77", '`"77"`'),
+    ],
+)
+def test_the_form_meant_is_suggested(old: str, new: str, hint: str) -> None:
+    with pytest.raises(InputFault) as caught:
+        loads(changed((old, new)), "a.yaml")
+    (fault,) = caught.value.faults
+    assert hint in fault.suggestion
+    assert bool(hint) == bool(fault.suggestion)
 
 
 @pytest.mark.parametrize(
@@ -142,6 +320,13 @@ def test_utf16_is_named() -> None:
             [("revisions[1].date", "date")],
         ),
         ([("S1: {title", "1S: {title"), ("S1 ", "S2 ")], [("sources", "text")]),
+        ([("S1: {title", "s2: {title"), ("S1 ", "S2 ")], [("sources.S2", "duplicate id")]),
+        (
+            [("radius: long, count: 2", 'radius: long, angle: "90"')],
+            [("line.sections[P1].elements[3].angle", "choice")],
+        ),
+        ([("radius: long, count: 2", "radius: long, angle: 60")], [("line.sections[P1].elements[3].angle", "choice")]),
+        ([("date: 2026-10-02", "date: 1949-12-31")], [("readings[1].date", "date")]),
         ([("count: 2", "count: 0")], [("line.sections[P1].elements[3].count", "number")]),
         ([("count: 2", "count: two")], [("line.sections[P1].elements[3].count", "number")]),
         ([("size: DN 150\n", "size: 150 mm\n")], [("line.sections[P1].size", "text")]),
@@ -181,6 +366,38 @@ def test_a_folder_is_not_a_file(tmp_path: Path) -> None:
 def test_a_missing_file(tmp_path: Path) -> None:
     with pytest.raises(InputFault, match="no file of that name"):
         load(tmp_path / "none.yaml")
+
+
+def test_no_file_named() -> None:
+    with pytest.raises(InputFault, match="found no file named"):
+        load("")
+
+
+def test_a_pipe_is_read_only_where_it_was_handed_over(tmp_path: Path) -> None:
+    named = tmp_path / "a.yaml"
+    os.mkfifo(named)
+    for path in (named, Path("/dev/null")):
+        with pytest.raises(InputFault, match="wanted a regular file"):
+            load(path)
+    read, write = os.pipe()
+    try:
+        os.write(write, BASE.encode())
+        os.close(write)
+        assert load(f"/dev/fd/{read}").number == "LM-04-C-011"
+    finally:
+        os.close(read)
+
+
+def test_a_name_that_is_not_utf8(tmp_path: Path) -> None:
+    path = tmp_path / os.fsdecode(b"caf\xe9\n.yaml")
+    path.write_bytes(BASE.encode())
+    read = load(path)
+    assert read.path == "caf<U+DCE9><U+000A>.yaml"
+    assert read.named.encode("utf-8").endswith(b".yaml")
+    path.write_bytes(b"a: 1\n")
+    with pytest.raises(InputFault) as caught:
+        load(path)
+    assert all(fault.file == read.named for fault in caught.value.faults)
 
 
 def test_a_name_no_file_can_have() -> None:

@@ -5,7 +5,7 @@ from __future__ import annotations
 import random
 import re
 from collections.abc import Iterator
-from decimal import Decimal
+from decimal import Context, Decimal
 from fractions import Fraction
 from functools import cache
 from pathlib import Path
@@ -22,7 +22,7 @@ from calcpack.faults import InputFault
 from calcpack.fitting_set import CRANE
 from calcpack.lookup import ROUGHNESS
 from calcpack.number import last_unit
-from calcpack.rules import largest_drift
+from calcpack.rules import reported_decimals
 from calcpack.source.schema import schema
 from calcpack.study import Study
 from calcpack.value import drift
@@ -175,8 +175,8 @@ def test_the_published_consistency_case_holds_at_any_velocity(velocity: float) -
     """A lift of 3 m with 1.2 m of loss at 20 °C and 101.325 kPa leaves 5.9123 m by either route (tests/checks.yaml, N-consistency)."""
     diameter = (4 * 200 / 3600 / velocity / 3.141592653589793) ** 0.5
     coefficient = 1.2 / (velocity**2 / 2 / 9.80665)
-    only = [{"id": "F", "kind": "fitting", "name": "all of the line", "K": f"{coefficient:.9f}"}]
-    document = plant({**STATE, SECTION + "bore": f"{diameter * 1000:.9f} mm", SECTION + "elements": only})
+    only = [{"id": "F", "kind": "fitting", "name": "all of the line", "K": f"{coefficient:.8g}"}]
+    document = plant({**STATE, SECTION + "bore": f"{diameter * 1000:.9g} mm", SECTION + "elements": only})
     study = studied(document)
     gauge = (101325 - 998.1618 * 9.80665 * (3.0 + 1.2 + velocity**2 / 2 / 9.80665) - 101325) / 1000
     both = studied(
@@ -185,7 +185,7 @@ def test_the_published_consistency_case_holds_at_any_velocity(velocity: float) -
             {
                 **STATE,
                 SECTION + "elements": only,
-                SECTION + "bore": f"{diameter * 1000:.9f} mm",
+                SECTION + "bore": f"{diameter * 1000:.9g} mm",
                 "readings.0.level": "-3.0 m",
                 "readings.0.temperature": "20 °C",
                 "readings.0.barometer": "101.325 kPa absolute",
@@ -193,7 +193,7 @@ def test_the_published_consistency_case_holds_at_any_velocity(velocity: float) -
                     "pressure": f"{gauge:.4f} kPa gauge",
                     "elevation": "0 m",
                     "leg": "filled",
-                    "tap": {"bore": f"{diameter * 1000:.9f} mm"},
+                    "tap": {"bore": f"{diameter * 1000:.9g} mm"},
                 },
             },
         )
@@ -263,7 +263,7 @@ def test_the_order_of_elements_changes_nothing_beyond_rounding(document: Documen
 def test_line_rounding_stays_far_below_a_reported_digit(document: Document, units: str) -> None:
     study = studied(changed(document, {"calculation.units": units}))
     for value in (study.judged[0].npsh, study.need.limit):
-        assert drift(value) < largest_drift(value.record)
+        assert reported_decimals(value) == 2 and drift(value) < Decimal("0.001")
     assert verdicts(study)["npsh_margin"] != "not assessed"
 
 
@@ -333,7 +333,7 @@ def registry() -> pint.UnitRegistry[Any]:
 
 
 def restated(of: Any) -> Any:
-    """Every quantity of a document in the other system, exact to 25 digits, by pint."""
+    """Every quantity of a document in the other system, to the ten digits a file takes, by pint."""
     if isinstance(of, dict):
         return {key: restated(value) for key, value in of.items()}
     if isinstance(of, list):
@@ -344,8 +344,8 @@ def restated(of: Any) -> Any:
     number, unit, reference = match.groups()
     frm, to = (_PINT.get(u, u) for u in (unit, _OTHER[unit]))
     exact = Fraction(registry().Quantity(Fraction(number), frm).to(to).magnitude)
-    digits = Decimal(exact.numerator) / Decimal(exact.denominator)
-    return f"{digits:.20f} {_OTHER[unit]}{reference or ''}"
+    digits = Context(prec=9).divide(Decimal(exact.numerator), Decimal(exact.denominator)).normalize()
+    return f"{digits:f} {_OTHER[unit]}{reference or ''}"
 
 
 def as_typed(path: Path) -> Document:
@@ -366,7 +366,7 @@ def test_a_sample_restated_in_the_other_units_says_the_same(path: Path) -> None:
         assert (a.left is None) == (b.left is None)
         if a.left is not None and b.left is not None and a.right is not None and b.right is not None:
             for x, y in ((a.left, b.left), (a.right, b.right)):
-                assert x.shadow == pytest.approx(y.shadow, rel=1e-9), "full precision"
+                assert x.shadow == pytest.approx(y.shadow, rel=1e-7), "full precision, on nine digits typed"
                 size = float(x.unit.factor), float(y.unit.factor)
                 assert float(x.record) * size[0] == pytest.approx(float(y.record) * size[1], abs=1e-3), "within drift"
 
@@ -685,6 +685,51 @@ def test_readings_that_show_more_than_the_surface_offers_are_a_finding() -> None
     assert any("more head than the surface offers" in text for text in study.findings)
 
 
+def test_readings_in_doubt_are_not_judged() -> None:
+    """A reading that shows a gain where there can only be loss settles nothing."""
+    study = studied(plant({"readings.0.gauge.pressure": "40 kPa gauge"}, line=False, readings=1))
+    (check,) = [c for c in study.checks if c.rule.name == "npsh_margin"]
+    assert check.verdict == "not assessed" and "more head than the surface offers" in check.reason
+
+
+BEYOND = (
+    ("barometer", "99.9 kPa absolute", "below the lowest"),
+    ("level", "1.49 m", "below the lowest"),
+    ("flow", "201 m³/h", "above the highest"),
+    ("temperature", "25.1 °C", "above the highest"),
+)
+
+
+@pytest.mark.parametrize(("key", "read", "word"), BEYOND)
+def test_a_reading_beyond_the_extremes_of_the_file_is_a_finding(key: str, read: str, word: str) -> None:
+    base = studied(plant(readings=1))
+    study = studied(plant({f"readings.0.{key}": read}, readings=1))
+    assert not any("the file states" in text for text in base.findings)
+    (told,) = [text for text in study.findings if "the file states" in text]
+    assert key in told and read in told and word in told
+
+
+def test_a_reading_warmer_than_expected_goes_before_what_was_expected() -> None:
+    study = studied(plant({"readings.0.temperature": "27 °C"}, readings=1))
+    assert verdicts(study)["highest_temperature"] == "not met"
+
+
+UNLIKE_WATER = (("density", "850 kg/m³", True), ("density", "1025 kg/m³", False), ("vapour_pressure", "3.17 psi absolute", True),
+                ("vapour_pressure", "3.1 kPa absolute", False))  # fmt: skip
+
+
+@pytest.mark.parametrize(("name", "cited", "finding"), UNLIKE_WATER)
+def test_a_cited_property_that_water_does_not_have_is_a_finding(name: str, cited: str, finding: bool) -> None:
+    study = studied(plant({f"liquid.{name}": {"value": cited, "source": "S1"}}))
+    assert any("is not that of water" in text for text in study.findings) is finding
+
+
+def test_a_difference_between_model_and_reading_is_a_finding() -> None:
+    study = studied(plant(readings=2))
+    told = [text for text in study.findings if "than the model" in text]
+    assert len(told) == 2 == len(study.differences)
+
+
 def test_a_line_without_entrance_is_a_finding() -> None:
     study = studied(plant({SECTION + "elements": [{"id": "P", "kind": "pipe", "length": "3 m"}]}))
     assert any("no entrance" in text for text in study.findings)
@@ -722,6 +767,8 @@ REFUSED: dict[str, dict[str, Any]] = {
     },
     "a pump that needs nothing": {"pump.npsh_required.value": "0 m"},
     "a margin below what the pump needs": {"criteria.npsh_margin": {"ratio": "0.9"}},
+    "a level on another datum": {"supply.level.lowest": "1250 m"},
+    "an inlet on another datum": {"intake": INTAKE | {"elevation": "1250 m"}},
     "ice": {"liquid.temperature.highest": "-1 °C"},
     "steam": {"liquid.temperature.highest": "340 °C"},
 }
@@ -738,21 +785,24 @@ def test_a_gauge_below_absolute_zero_is_refused() -> None:
     assert "readings[1].gauge.pressure" in faults(plant(reading, line=False, readings=1))
 
 
-#: Ordinary hot-water plants: temperature, vessel pressure 5 % above boiling.
-HOT = (("US", "240 °F", "28 psi absolute"), ("US", "267 °F", "43 psi absolute"), ("US", "303 °F", "76 psi absolute"), ("US", "353 °F", "146 psi absolute"),
-       ("SI", "116.3 °C", "190 kPa absolute"), ("SI", "150.7 °C", "510 kPa absolute"), ("SI", "303 °F", "76 psi absolute"))  # fmt: skip
+@pytest.mark.parametrize("units", ["SI", "US"])
+@pytest.mark.parametrize("fahrenheit", range(240, 391, 10))
+def test_hot_water_can_be_judged(fahrenheit: int, units: str) -> None:
+    """Line rounding must not keep an ordinary plant, a vessel 5 % above boiling, from a verdict that is not in doubt."""
+    from CoolProp.CoolProp import PropsSI
 
-
-@pytest.mark.parametrize(("units", "temperature", "pressure"), HOT)
-def test_hot_water_can_be_judged(units: str, temperature: str, pressure: str) -> None:
-    """Line rounding must not keep an ordinary plant from a verdict."""
-    vessel = {
+    boiling = PropsSI("P", "T", (fahrenheit + 459.67) / 1.8, "Q", 0, "Water") / 6894.757
+    vessel = {"lowest": f"{boiling * 1.05 + 4:.1f} psi absolute", "source": "S1", "status": "verified"}
+    changes = {
+        "calculation.units": units,
+        "liquid.temperature.highest": f"{fahrenheit} °F",
         "supply.kind": "gas_blanketed",
-        "supply.pressure": {"lowest": pressure, "source": "S1"},
-        "supply.level.lowest": "8 m",
+        "supply.pressure": vessel,
+        "supply.level.lowest": "27.3 ft",
     }
-    study = studied(plant({"calculation.units": units, "liquid.temperature.highest": temperature, **vessel}))
-    assert verdicts(study)["npsh_margin"] in ("met", "not met"), study.checks[0].reason
+    study = studied(plant(changes))
+    (check,) = [c for c in study.checks if c.rule.name == "npsh_margin"]
+    assert check.verdict in ("met", "not met"), check.reason
 
 
 def choices(name: str, key: str) -> list[str]:
@@ -764,9 +814,10 @@ def offered() -> Iterator[tuple[str, Document]]:
     """Every choice the schema offers for a line."""
     for material in choices("section", "material"):
         yield material, {SECTION + "material": material}
-    for kind, key in (("valve", "type"), ("tee", "flow"), ("entrance", "shape")):
+    for place, kind, key in ((2, "valve", "type"), (2, "tee", "flow"), (0, "entrance", "shape")):
         for each in choices("element", key):
-            yield f"{kind} {each}", {SECTION + "elements.2": {"id": "3", "kind": kind, key: each}}
+            element = {"id": f"{place + 1}", "kind": kind, key: each}
+            yield f"{kind} {each}", {f"{SECTION}elements.{place}": element}
     for radius, angle in (("standard", 90), ("standard", 45), ("long", 90)):
         yield (
             f"elbow {radius} {angle}",

@@ -13,6 +13,8 @@ from .tree import Tree
 RELATIONS = "=≥≤><"
 #: Clear space that separates two rows, less what the ink of a curved glyph takes of it (points).
 CLEAR = 1.8
+#: Height of a fraction's bar, and how far at least the ink of its terms reaches away from it (em).
+RULE, ABOVE, BELOW = 0.06, 0.3, 0.4
 
 
 @dataclass(frozen=True)
@@ -50,15 +52,17 @@ def forms(marks: Marks) -> list[Form]:
 def rows(marks: Marks) -> list[Marks]:
     """The rows of a picture from the top, parted by clear space.
 
-    Space beside the bar of a fraction parts its terms, not rows.
+    A fraction's bar counts with the space to its terms, which is no space between rows.
     """
     signs = [g for g in marks.glyphs if g.char == "√"]
-    bars = [b for b in marks.bars if not any(meets(sign, b) for sign in signs)]
-    parts: list[Glyph | Bar] = [*marks.glyphs, *marks.bars]
-    reach = sorted([(p.top, p.bottom) for p in parts], reverse=True)
+    reach = [(g.top, g.bottom) for g in marks.glyphs]
+    for bar in marks.bars:
+        em = 0.0 if any(meets(sign, bar) for sign in signs) else bar.height / RULE
+        reach.append((bar.top + ABOVE * em, bar.bottom - BELOW * em))
+    reach.sort(reverse=True)
     cuts, low = [], reach[0][1]
     for top, bottom in reach:
-        if low - top > CLEAR and not any(abs(b.bottom - low) < 0.01 or abs(b.top - top) < 0.01 for b in bars):
+        if low - top > CLEAR:
             cuts.append((low + top) / 2)
         low = min(low, bottom)
     found = []
@@ -109,7 +113,7 @@ def _joined(before: Marks, row: Marks, y: float, body: float) -> Marks:
     dy = y - baseline(items(row), body)
     parts: list[Glyph | Bar] = [*before.glyphs, *before.bars]
     edge = max(p.right for p in parts)
-    dx = edge + 0.3 * body - min(g.x for g in row.glyphs)
+    dx = edge + 0.3 * body - min([*(g.x for g in row.glyphs), *(b.left for b in row.bars)])
     glyphs = tuple(
         g._replace(
             x=g.x + dx,

@@ -5,10 +5,11 @@ from __future__ import annotations
 from collections.abc import Iterable
 from pathlib import Path
 
-from ..faults import Fault, InputFault
+from ..faults import Fault, InputFault, visible
 from .build import build
 from .checks import check_document
-from .document import parse, read_bytes
+from .document import parse
+from .file import read_bytes
 from .inputs import Calculation
 from .plant import check_plant
 from .schema import quantities
@@ -28,8 +29,12 @@ def load(path: str | Path) -> Calculation:
 
 
 def loads(raw: bytes, name: str) -> Calculation:
-    """Read the bytes of an input file; ``name`` is how faults name it."""
-    typed, notation = parse(raw, name)
+    """Read the bytes of an input file; ``name`` is how faults name it, with what cannot be printed written out."""
+    name = visible(name)
+    try:
+        typed, notation = parse(raw, name)
+    except InputFault as stop:
+        raise InputFault(_once(stop.faults, name)) from None
     root, spelling = correct(typed, name)
     read, unread = quantities(root, name)
     view = View(root, read, name)

@@ -48,12 +48,12 @@ def inherit(node: Node, above: Provenance) -> Provenance:
     if not source and own["status"] != "assumed":
         source, place = above.source, above.place
     note, confirm = own["note"] or above.note, own["confirm"] or above.confirm
-    return Provenance(source=source, place=place.strip(), status=status, note=note, confirm=confirm)
+    return Provenance(source=source, place=place, status=status, note=note, confirm=confirm)
 
 
 def _text(node: Node, name: str) -> str:
     found = node.get(name) if isinstance(node, Mapping) else None
-    return found.text.strip() if isinstance(found, Scalar) else ""
+    return found.text if isinstance(found, Scalar) else ""
 
 
 @dataclass(frozen=True)
@@ -83,7 +83,7 @@ class _Branch:
         origin = inherit(node, self.provenance)
         return Given(
             key=below(self.key, name),
-            text=scalar.text.strip(),
+            text=scalar.text,
             quantity=self.read[scalar.mark],
             line=scalar.mark[0],
             column=scalar.mark[1],

@@ -31,7 +31,7 @@ def _origins(view: View) -> Iterator[Fault]:
         origin = inherit(node, above)
         if isinstance(node, Mapping):
             cited, status = node.get("source"), node.get("status")
-            if isinstance(cited, Scalar) and cited.text.strip() and origin.source not in known:
+            if isinstance(cited, Scalar) and cited.text and origin.source not in known:
                 near = nearest(origin.source, known)
                 hint = (
                     f"did you mean `{near}`?"
@@ -63,15 +63,20 @@ def _unique(view: View) -> Iterator[Fault]:
         ("name", list(view.readings())),
         ("revision", [(f"revisions[{n}]", r) for n, r in view.items("revisions")]),
     ]
-    for name, items in groups:
+    marks = [(name, [(below(address, name), item.get(name)) for address, item in items]) for name, items in groups]
+    listing = view.at("sources")
+    entries = listing.entries if isinstance(listing, Mapping) else ()
+    marks.append(("id", [(below("sources", name.text), name) for name, _ in entries]))
+    for name, each in marks:
         first: dict[str, int] = {}
-        for address, item in items:
-            own = item.get(name)
-            if isinstance(own, Scalar) and own.text in first:
-                found = f"{shown(own.text)} again, after line {first[own.text]}"
-                yield view.fault(own, below(address, name), f"each {name} once", found, "", "duplicate id")
-            elif isinstance(own, Scalar):
-                first[own.text] = own.mark[0]
+        for address, own in each:
+            if not isinstance(own, Scalar):
+                continue
+            if own.text.casefold() in first:
+                wanted = f"each {name} once, whether in capitals or not"
+                found = f"{shown(own.text)} again, after line {first[own.text.casefold()]}"
+                yield view.fault(own, address, wanted, found, "", "duplicate id")
+            first.setdefault(own.text.casefold(), own.mark[0])
 
 
 def _day(node: Node | None) -> date | None:
@@ -81,8 +86,12 @@ def _day(node: Node | None) -> date | None:
         return None
 
 
+#: Nothing calculated here was issued or measured before; an earlier date is a slip.
+_EARLIEST = date(1950, 1, 1)
+
+
 def _dates(view: View) -> Iterator[Fault]:
-    """Every date is a day of the calendar; no test is later than the calculation that uses it."""
+    """Every date is a day of the calendar, not long past; no test is later than the calculation that uses it."""
     places = [("calculation", view.at("calculation"))]
     places += [(f"revisions[{name}]", item) for name, item in view.items("revisions")]
     places += list(view.readings())
@@ -92,6 +101,9 @@ def _dates(view: View) -> Iterator[Fault]:
         day = _day(node)
         if isinstance(node, Scalar) and day is None and len(node.text) == 10 and node.text.replace("-", "").isdigit():
             yield view.fault(node, below(address, "date"), "a day of the calendar", shown(node.text), "", "date")
+        elif node and day and day < _EARLIEST:
+            wanted = f"a day not before {_EARLIEST}"
+            yield view.fault(node, below(address, "date"), wanted, shown(str(day)), "check the year", "date")
         elif node and day and issued and day > issued and address.startswith("readings"):
             wanted = f"a day not later than the calculation's date, {issued}"
             yield view.fault(node, below(address, "date"), wanted, shown(str(day)), "", "date")
@@ -113,8 +125,17 @@ def _revisions(view: View) -> Iterator[Fault]:
         yield view.fault(item.get("date") or item, f"revisions[{name}].date", wanted, shown(str(entry)), "", "date")
 
 
+#: What a value counts as; the values of one group can only be compared when they count alike.
+_MEASURES = {
+    "gauge": "a gauge pressure",
+    "absolute": "an absolute pressure",
+    "pressure": "a pressure difference",
+    "length": "a head",
+}
+
+
 def _order(view: View) -> Iterator[Fault]:
-    """Extremes stand in their order."""
+    """Extremes are measured alike and stand in their order."""
     groups: list[tuple[str, Node | None, tuple[str, ...]]] = [
         ("supply.level", view.at("supply", "level"), ("lowest", "normal", "highest")),
         ("supply.pressure", view.at("supply", "pressure"), ("lowest", "normal")),
@@ -127,8 +148,12 @@ def _order(view: View) -> Iterator[Fault]:
         held = [(name, view.quantity(name, node=node)) for name in names if isinstance(node, Mapping)]
         present = [(name, value) for name, value in held if value]
         for (low, a), (high, b) in pairwise(present):
-            if a.reference == b.reference and a.unit.kind == b.unit.kind and a.si() > b.si():
-                place = view.at(high, node=node)
-                assert place is not None
+            place = view.at(high, node=node)
+            assert place is not None
+            ours, theirs = (_MEASURES.get(v.reference or v.unit.kind, v.unit.kind) for v in (a, b))
+            if ours != theirs:
+                wanted, hint = f"{ours}, as for `{low}`", f"write both as {ours} or both as {theirs}"
+                yield view.fault(place, f"{address}.{high}", wanted, theirs, hint, "measure")
+            elif a.si() > b.si():
                 found = f"{b.text} {b.unit.name}, below {low} ({a.text} {a.unit.name})"
                 yield view.fault(place, f"{address}.{high}", f"a value not below `{low}`", found, "", "order")

@@ -9,15 +9,15 @@ from __future__ import annotations
 
 import re
 from collections.abc import Iterator
-from pathlib import Path
 from typing import Any
 
 import yaml
 
 from ..faults import Fault, InputFault, shown
-from .nodes import Mapping, Mark, Node, Scalar, Sequence, walk
+from .characters import normal, objection
+from .file import decode
+from .nodes import Mapping, Mark, Node, Scalar, Sequence, below, walk
 
-MAX_BYTES = 1_000_000
 MAX_DEPTH = 20
 MAX_NODES = 20_000
 
@@ -31,34 +31,8 @@ _AMBIGUOUS = (
     (r"(?i:[-+]?\.?(?:inf|infinity)|\.?nan)", "not a finite number"),
 )
 _AMBIGUOUS_PATTERNS = tuple((re.compile(pattern), why) for pattern, why in _AMBIGUOUS)
-#: Characters that hide text or turn its direction, and control characters other than tab and line ends.
-_HIDDEN = re.compile(
-    "[\x00-\x08\x0b\x0c\x0e-\x1f\x7f-\x9f\u00ad\u200b\u200e\u200f\u2028-\u202e\u2060\u2066-\u2069\ufeff]"
-)
 _WHOLE, _DECIMALS = re.compile(r"[-+\u2212]?[0-9]+"), re.compile(r"[0-9]+(?: .*)?")
 _LOADER: Any = getattr(yaml, "CSafeLoader", yaml.SafeLoader)
-
-
-def read_bytes(path: Path) -> bytes:
-    """The file's content.  Raises :class:`InputFault` where it cannot be read, is empty or is too large."""
-    try:
-        if path.is_dir():
-            raise _whole(path, "an input file", "a folder", "name the YAML file inside it")
-        with path.open("rb") as file:
-            raw = file.read(MAX_BYTES + 1)
-    except FileNotFoundError:
-        raise _whole(path, "an input file", "no file of that name") from None
-    except (OSError, ValueError) as error:
-        reason = getattr(error, "strerror", None) or str(error)
-        raise _whole(path, "a file that can be read", reason[:1].lower() + reason[1:]) from None
-    if len(raw) > MAX_BYTES:
-        raise _whole(
-            path,
-            f"a file of at most {MAX_BYTES // 1000} kB",
-            "a larger one",
-            "an input file is a few pages of text",
-        )
-    return raw
 
 
 def parse(raw: bytes, name: str) -> tuple[Mapping, list[Fault]]:
@@ -66,45 +40,12 @@ def parse(raw: bytes, name: str) -> tuple[Mapping, list[Fault]]:
 
     Raises :class:`InputFault` where there is no tree at all: not UTF-8, broken YAML, too deep, nothing in it.
     """
-    text = _decode(raw, name)
-    root = _Builder(name).build(text)
-    if not isinstance(root, Mapping):
-        found = "a list" if isinstance(root, Sequence) else shown(root.text)
-        raise InputFault(
-            [Fault(name, *root.mark, "", "keys and values, beginning with `calculation:`", found, "", "yaml")]
-        )
-    return root, list(_notation(root, name))
-
-
-def _whole(path: Path, wanted: str, found: str, suggestion: str = "") -> InputFault:
-    return InputFault([Fault(str(path), 0, 0, "", wanted, found, suggestion, "file")])
-
-
-def _decode(raw: bytes, name: str) -> str:
-    wanted = "text in UTF-8"
-    if raw.startswith((b"\xff\xfe", b"\xfe\xff")):
-        raise InputFault([Fault(name, 1, 1, "", wanted, "UTF-16", "save the file again as UTF-8", "encoding")])
+    text, hidden = decode(raw, name)
     try:
-        text = raw.decode("utf-8-sig")
-    except UnicodeDecodeError as error:
-        before = raw[: error.start].decode("utf-8", "replace")
-        mark = _mark_at(before, len(before))
-        found = f"the byte {raw[error.start]:02X}, which is not UTF-8"
-        hint = "save the file again as UTF-8 (° and ³ are the usual cause)"
-        raise InputFault([Fault(name, *mark, "", wanted, found, hint, "encoding")]) from None
-    hidden = _HIDDEN.search(text)
-    if hidden:
-        mark = _mark_at(text, hidden.start())
-        found = f"the hidden character U+{ord(hidden.group()):04X}"
-        raise InputFault([Fault(name, *mark, "", "visible text", found, "delete it", "character")])
-    if not text.strip():
-        raise InputFault([Fault(name, 1, 1, "", "an input file", "an empty file", "", "empty")])
-    return text
-
-
-def _mark_at(text: str, offset: int) -> Mark:
-    before = text[:offset]
-    return before.count("\n") + 1, offset - (before.rfind("\n") + 1) + 1
+        root = _Builder(name).build(text)
+    except InputFault as stop:
+        raise InputFault([*hidden, *stop.faults]) from None
+    return root, [*hidden, *_notation(root, name)]
 
 
 class _Builder:
@@ -114,7 +55,7 @@ class _Builder:
         self._name = name
         self._nodes = 0
 
-    def build(self, text: str) -> Node:
+    def build(self, text: str) -> Mapping:
         root: Node | None = None
         try:
             events = yaml.parse(text, Loader=_LOADER)
@@ -132,8 +73,15 @@ class _Builder:
             raise self._broken(error) from None
         except yaml.YAMLError as error:
             raise self._stop((1, 1), "a YAML file", str(error).splitlines()[0], "") from None
+        except (ValueError, OverflowError):
+            # the parser in Python does not guard the number of an escape
+            found = "broken notation (an escape that is no character)"
+            raise self._stop((1, 1), "a YAML file", found, "write the character itself") from None
         if root is None:
             raise InputFault([Fault(self._name, 1, 1, "", "an input file", "only comments", "", "empty")])
+        if not isinstance(root, Mapping):
+            found = "a list" if isinstance(root, Sequence) else shown(root.text)
+            raise self._stop(root.mark, "keys and values, beginning with `calculation:`", found, "")
         return root
 
     def _node(self, event: Any, events: Iterator[Any], depth: int) -> Node:
@@ -161,7 +109,8 @@ class _Builder:
                 entries.append((key, value))
                 _rejoin(entries)
             return Mapping(mark, tuple(entries), oddity)
-        return Scalar(mark, getattr(event, "value", ""), getattr(event, "style", None) in (None, ""), oddity)
+        typed = getattr(event, "value", "")
+        return Scalar(mark, normal(typed), getattr(event, "style", None) in (None, ""), oddity, typed)
 
     def _stop(self, mark: Mark, wanted: str, found: str, suggestion: str) -> InputFault:
         return InputFault([Fault(self._name, *mark, "", wanted, found, suggestion, "yaml")])
@@ -182,6 +131,8 @@ class _Builder:
             "could not find expected ':'": "write `key: value`, with a space after the colon",
             "did not find expected key": "indent the keys of one mapping alike",
             "<block end>": "indent the keys of one mapping alike",
+            "Unicode character escape": "leave the character out, or transliterate it; an escape stands for one character",
+            "unknown escape": "inside double quotation marks write \\\\ for a backslash, or use single ones",
             "quoted scalar": "close the quotation marks",
             "undefined alias": "write the value out; * has a meaning of its own in YAML",
         }
@@ -200,7 +151,8 @@ def _rejoin(entries: list[tuple[Scalar, Node]]) -> None:
     whole = isinstance(before, Scalar) and before.plain and _WHOLE.fullmatch(before.text)
     if empty and whole and _DECIMALS.fullmatch(key.text):
         assert isinstance(before, Scalar)
-        entries[-2:] = [(name, Scalar(before.mark, f"{before.text},{key.text}"))]
+        typed = f"{before.typed},{key.typed}"
+        entries[-2:] = [(name, Scalar(before.mark, normal(typed), typed=typed))]
 
 
 def _mark(event: Any) -> Mark:
@@ -227,9 +179,16 @@ def _notation(root: Mapping, name: str) -> Iterator[Fault]:
             hint = "write the value out where it stands"
             yield Fault(name, *node.mark, key, "plain text", shown(node.oddity), hint, "notation")
         elif isinstance(node, Scalar):
+            yield from _characters(node, key, name)
             yield from _ambiguous(node, key, name)
         elif isinstance(node, Mapping):
             yield from _keys(node, key, name)
+
+
+def _characters(node: Scalar, key: str, name: str) -> Iterator[Fault]:
+    bad = objection(node.typed)
+    if bad:
+        yield Fault(name, *node.mark, key, *bad, "character")
 
 
 def _ambiguous(node: Scalar, key: str, name: str) -> Iterator[Fault]:
@@ -255,7 +214,8 @@ def _ambiguous(node: Scalar, key: str, name: str) -> Iterator[Fault]:
 def _keys(node: Mapping, key: str, name: str) -> Iterator[Fault]:
     first: dict[str, Mark] = {}
     for each, _ in node.entries:
-        address = f"{key}.{each.text}" if key else each.text
+        address = below(key, each.text)
+        yield from _characters(each, address, name)
         if each.oddity:
             yield Fault(name, *each.mark, address, "a plain key", shown(each.oddity), "", "notation")
         elif each.text == "<<":

@@ -245,7 +245,8 @@ class Calculation:
     """A whole input file.
 
     ``line`` with ``supply.level`` gives the design route, ``readings`` the measured one, and one is there.
-    ``path`` is the file's name without its folder, ``named`` the path as it was asked for (faults say it), ``raw`` its bytes, ``sha256`` their digest in hexadecimal.
+    ``path`` is the file's name without its folder, ``named`` the path as it was asked for (faults say it), both with
+    what cannot be printed written out; ``raw`` its bytes, ``sha256`` their digest in hexadecimal.
     """
 
     number: str

@@ -11,12 +11,16 @@ Mark = tuple[int, int]
 
 @dataclass(frozen=True)
 class Scalar:
-    """A value as typed; ``plain`` when it stands without quotation marks."""
+    """A value or a key; ``plain`` when it stands without quotation marks.
+
+    ``text`` has single spaces and no hidden characters (:func:`.characters.normal`); ``typed`` is for faults alone.
+    """
 
     mark: Mark
     text: str
     plain: bool = True
     oddity: str = ""
+    typed: str = ""
 
 
 @dataclass(frozen=True)

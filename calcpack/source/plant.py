@@ -13,11 +13,22 @@ from .inputs import Provenance
 from .nodes import Mapping, Scalar, below
 from .view import View
 
+#: Elements of a line, in all its sections: more do not make one suction line.
+MAX_ELEMENTS = 200
+
 
 def check_plant(view: View) -> Iterator[Fault]:
     """Every fault of the plant's description."""
-    for each in (_bores, _entrances, _routes, _barometer, _liquid, _margin, _readings):
+    for each in (_elements, _bores, _entrances, _routes, _barometer, _liquid, _margin, _readings):
         yield from each(view)
+
+
+def _elements(view: View) -> Iterator[Fault]:
+    elements = list(view.elements())
+    if len(elements) > MAX_ELEMENTS:
+        address, element = elements[MAX_ELEMENTS]
+        wanted, hint = f"at most {MAX_ELEMENTS} elements in all sections", "put equal ones into one, with `count`"
+        yield view.fault(element, address, wanted, f"{len(elements)}", hint, "count")
 
 
 def _bores(view: View) -> Iterator[Fault]:
@@ -57,9 +68,18 @@ def _bores(view: View) -> Iterator[Fault]:
 
 
 def _entrances(view: View) -> Iterator[Fault]:
+    """A line has one entrance at most, and its loss is found in one way."""
+    first = ""
     for address, element in view.elements():
+        if view.text("kind", node=element) != "entrance":
+            continue
+        if first:
+            wanted = "one entrance, at the supply"
+            hint = "a tank or a basin between two lines is the supply of the second"
+            yield view.fault(element, address, wanted, f"a second one, after {first}", hint, "entrance")
+        first = first or address
         given = [name for name in ("shape", "K") if element.get(name)]
-        if view.text("kind", node=element) == "entrance" and len(given) != 1:
+        if len(given) != 1:
             found = "both" if given else "neither"
             yield view.fault(
                 element,

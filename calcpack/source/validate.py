@@ -26,6 +26,10 @@ def _validator() -> Draft202012Validator:
     return Draft202012Validator(schema())
 
 
+#: Address, part of the schema and name of the definition of each node, by its ``id``.
+_Known = dict[int, tuple[str, Schema, str]]
+
+
 @dataclass(frozen=True)
 class _Place:
     file: str
@@ -51,19 +55,25 @@ class _Place:
 def validate(root: Mapping, file: str) -> Iterator[Fault]:
     """The faults of a tree whose unknown keys have been dealt with (:mod:`.spelling`)."""
     known = {id(node): (key, part, kind) for key, node, part, kind in parts(root)}
-    for error in _validator().iter_errors(_instance(root)):
+    for error in _validator().iter_errors(_instance(root, known)):
         node = _at(root, error)
         if id(node) in known:
             place = _Place(file, node, *known[id(node)])
             yield from _missing(place, error) if error.validator == "required" else _value(place, error)
 
 
-def _instance(node: Node) -> Any:
-    """The tree as JSON would hold it: plain whole and decimal numbers as numbers, everything else as text."""
+def _instance(node: Node, known: _Known) -> Any:
+    """The tree as JSON would hold it: plain numbers as numbers, everything else as text.
+
+    A whole number where a text may stand too, such as a revision, is held to the rules of that text.
+    """
     if isinstance(node, Mapping):
-        return {name.text: _instance(value) for name, value in reversed(node.entries)}
+        return {name.text: _instance(value, known) for name, value in reversed(node.entries)}
     if isinstance(node, Sequence):
-        return [_instance(item) for item in node.items]
+        return [_instance(item, known) for item in node.items]
+    kinds = known[id(node)][1].get("type") if id(node) in known else None
+    if kinds == ["string", "integer"] and not _DECIMAL.fullmatch(node.text):
+        return node.text
     if node.plain and _INTEGER.fullmatch(node.text):
         return int(node.text)
     return Decimal(node.text) if node.plain and _DECIMAL.fullmatch(node.text) else node.text
@@ -111,6 +121,11 @@ def _value(place: _Place, error: ValidationError) -> Iterator[Fault]:
         yield _type(place)
     elif rule in ("minLength", "minItems"):
         yield place.fault("at least one item" if rule == "minItems" else "a text", "none", "", "empty value")
+    elif rule in ("maxItems", "maxProperties"):
+        wanted = f"at most {error.validator_value} {place.key.rpartition('.')[2]}"
+        yield place.fault(
+            wanted, f"{len(_words(error.instance))}", "leave out what the calculation does not need", "count"
+        )
     elif rule == "maxLength":
         yield place.fault(f"at most {error.validator_value} characters", f"{len(place.text)}", "shorten it", "text")
     elif rule in ("minimum", "maximum"):
@@ -119,7 +134,7 @@ def _value(place: _Place, error: ValidationError) -> Iterator[Fault]:
     elif "propertyNames" in error.schema_path:
         yield place.fault(part["propertyNames"]["description"], shown(str(error.instance)), "", "text")
     else:
-        yield place.fault(_described(part), place.found, "", "text")
+        yield place.fault(_described(part), place.found, _respelt(place.text, part), "text")
 
 
 def _described(part: Schema) -> str:
@@ -127,6 +142,22 @@ def _described(part: Schema) -> str:
     about = str(part.get("description", "another value")).partition(". ")[0].rstrip(".")
     examples = [str(each) for each in part.get("examples", [])]
     return about[:1].lower() + about[1:] + (f", such as {listed(examples)}" if examples else "")
+
+
+def _respelt(text: str, part: Schema) -> str:
+    """What was probably meant where a text has not the form asked for: ``std`` for ``STD``, ``DN150`` for ``DN 150``."""
+    tries = (
+        text.upper(),
+        re.sub(r"(?<=[A-Z])(?=[0-9])", " ", text.upper()),
+        re.sub(r"^SCH(EDULE)?[. ]*", "", text.upper()),
+        re.sub(r"^([0-9]{4})[ ./-]?([0-9]{1,2})[ ./-]?([0-9]{1,2})$", _year_first, text),
+    )
+    meant = next((each for each in tries if "pattern" in part and re.search(part["pattern"], each)), "")
+    return f"did you mean `{meant}`?" if meant else ""
+
+
+def _year_first(found: re.Match[str]) -> str:
+    return f"{found[1]}-{found[2]:>02}-{found[3]:>02}"
 
 
 def _type(place: _Place) -> Fault:
@@ -144,6 +175,10 @@ def _type(place: _Place) -> Fault:
             f"keys and values ({listed(names)})" if names else "keys and values", place.found, hint, "type"
         )
     if kinds == "integer":
-        return place.fault("a whole number", place.found, "", "number")
+        whole, _, decimals = place.text.partition(".")
+        hint = f"write `{whole}`" if _INTEGER.fullmatch(whole) and decimals and not decimals.strip("0") else ""
+        return place.fault("a whole number", place.found, hint, "number")
     hint = f'put it in quotation marks: `"{place.text}"`' if place.text else ""
+    if "pattern" in part and not re.search(part["pattern"], place.text):
+        hint = _respelt(place.text, part)
     return place.fault(_described(part), place.found, hint, "type")
