@@ -15,7 +15,11 @@ _TWELVE = Context(prec=12, rounding=ROUND_HALF_EVEN)
 _SIX = Context(prec=DIGITS, rounding=ROUND_HALF_EVEN)
 _WIDE = Context(prec=50)
 MINUS = "\u2212"
-TIMES_TEN = "\u00d710"
+
+
+def typeset_minus(text: str) -> str:
+    """A quantity as typed, with a true minus sign for a sentence."""
+    return MINUS + text[1:] if text.startswith("-") else text
 
 
 def _unit(exponent: int) -> Decimal:

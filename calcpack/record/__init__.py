@@ -10,6 +10,7 @@ from collections.abc import Iterator
 
 from .. import __version__, formula
 from ..lookup import library
+from ..number import typeset_minus
 from ..rules import ALLOWED, reported_decimals
 from ..source.inputs import Given
 from ..study import Study
@@ -151,7 +152,7 @@ def _limits(study: Study) -> list[Json]:
         ]
     address = {x.key: x.value.address for x in study.ledger.inputs}
     return [
-        {"what": what, "limit": f"{word} {g.text}", "address": address.get(g.key, "")}
+        {"what": what, "limit": f"{word} {typeset_minus(g.text)}", "address": address.get(g.key, "")}
         for what, word, g in rows
         if g is not None
     ]

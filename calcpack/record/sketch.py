@@ -31,6 +31,7 @@ def sketch(study: Study) -> Json:
         for s, v in result.operands
     ]
     level = of("z_s")
+    extreme = "lowest" if level is not None and level.title.endswith("lowest") else "as read"
     elements = []
     if c.line is not None:
         elements = [
@@ -51,7 +52,7 @@ def sketch(study: Study) -> Json:
         "unit": ledger.coherent("z").name,
         "state": _state(study, result),
         "supply": {"name": c.supply.name, "kind": c.supply.kind,
-                   "levels": [{"name": level.title, "value": number(level.record)}] if level is not None else []},
+                   "levels": [{"name": f"level, {extreme}", "value": number(level.record)}] if level is not None else []},
         "datum": c.datum,
         "pump": {"name": c.pump.name, "elevation": text(of("z_d"))},
         "intake": inlet,
@@ -64,7 +65,7 @@ def sketch(study: Study) -> Json:
 
 
 def _state(study: Study, result: Line) -> str:
-    return next(p.scope for p in study.ledger.parts if result in p.blocks)
+    return next(f"{p.title} ({p.scope})" for p in study.ledger.parts if result in p.blocks)
 
 
 def _length(unit: Unit, given: Given) -> str:

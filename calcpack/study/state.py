@@ -4,6 +4,7 @@ from __future__ import annotations
 
 from dataclasses import dataclass
 
+from ..number import typeset_minus
 from ..source.inputs import Calculation, Given, Reading
 
 
@@ -38,11 +39,11 @@ def worst_case(calculation: Calculation) -> State:
     pressure = c.supply.pressure.lowest if c.supply.pressure else None
     highest = c.pump.flow.highest
     assert highest is not None, "the schema asks for the highest flow"
-    words = [f"flow {highest.text}", f"{name} temperature {temperature.text}"]
+    words = [f"flow {typeset_minus(highest.text)}", f"{name} temperature {typeset_minus(temperature.text)}"]
     if level is not None:
-        words.insert(0, f"lowest level {level.text}")
+        words.insert(0, f"lowest level {typeset_minus(level.text)}")
     if pressure is not None:
-        words.append(f"lowest pressure {pressure.text}")
+        words.append(f"lowest pressure {typeset_minus(pressure.text)}")
     if c.line and any(e.kind == "strainer" for s in c.line.sections for e in s.elements):
         words.append("strainer fouled")
     return State("worst case", ", ".join(words), highest, temperature, level, pressure, None, "fouled")
@@ -50,9 +51,13 @@ def worst_case(calculation: Calculation) -> State:
 
 def as_found(reading: Reading) -> State:
     """The state of a reading."""
-    words = [f"flow {reading.flow.text}", reading.temperature.text, f"barometer {reading.barometer.text}"]
+    words = [
+        f"flow {typeset_minus(reading.flow.text)}",
+        reading.temperature.text,
+        f"barometer {typeset_minus(reading.barometer.text)}",
+    ]
     if reading.level is not None:
-        words.insert(0, f"level {reading.level.text}")
+        words.insert(0, f"level {typeset_minus(reading.level.text)}")
     return State(
         reading.name,
         ", ".join(words),
