@@ -23,9 +23,7 @@ from calcpack.record import assemble, canonical
 from calcpack.source import load
 from calcpack.study import run
 
-SAMPLES = {
-    path.name[0]: path for path in sorted((Path(__file__).parent.parent / "sample_inputs").glob("*.yaml"))
-}
+SAMPLES = {path.name[0]: path for path in sorted((Path(__file__).parent.parent / "sample_inputs").glob("*.yaml"))}
 Record = dict[str, Any]
 Json = dict[str, Any]
 
@@ -89,21 +87,15 @@ def recomputed_glyphs(found: Sequence[Sheet]) -> list[tuple[int, str, Glyph]]:
 def _checked(band: Band) -> list[Glyph]:
     section = band.address.partition(".")[0]
     if section == "4":
-        used = [
-            g for g in band.column(98, 129) if g.colour == ACCENT or not (g.size > 8.7 and _below(band, g))
-        ]
+        used = [g for g in band.column(98, 129) if g.colour == ACCENT or not (g.size > 8.7 and _below(band, g))]
         return [*band.column(*NUMBER), *band.column(72, 98), *used]
     if section == "9":
-        sides = [
-            g for edges in (LEFT, RIGHT) for g in band.column(*edges) if g.size > 7.9 or g.colour == ACCENT
-        ]
+        sides = [g for edges in (LEFT, RIGHT) for g in band.column(*edges) if g.size > 7.9 or g.colour == ACCENT]
         sides = [g for g in sides if g.bold or not _prose(band, g)]
         margin = [g for g in band.column(*MARGIN) if g.x > band.edge + MARGIN[0] * MM]
         return [*band.column(*NUMBER), *sides, *margin, *picture(band, *TEXT).glyphs]
     if is_losses(band):
-        cells = [
-            g for edges in (*FACTORS, LOSS) for g in band.column(*edges) if not g.serif and g.colour != SECOND
-        ]
+        cells = [g for edges in (*FACTORS, LOSS) for g in band.column(*edges) if not g.serif and g.colour != SECOND]
         cells = [g for g in cells if not picture(band, *SUM).glyphs or g.x > band.edge + LOSS[0] * MM]
         return [*band.column(*NUMBER), *cells, *band.column(*RECORD), *picture(band, *SUM).glyphs]
     if section == "8":
@@ -130,11 +122,7 @@ def other(glyph: Glyph, random: Random) -> str:
         if glyph.char in family:
             return random.choice([c for c in family if c != glyph.char])
     letters = "abcdefghikmnpqstuvwxyzABDEFGHKLMNPQRSTVZ"
-    return (
-        random.choice("0123456789")
-        if glyph.char == "."
-        else random.choice([c for c in letters if c != glyph.char])
-    )
+    return random.choice("0123456789") if glyph.char == "." else random.choice([c for c in letters if c != glyph.char])
 
 
 def with_glyph(found: Sequence[Sheet], number: int, glyph: Glyph, **changes: Any) -> list[Sheet]:
@@ -166,9 +154,7 @@ def falsified(made: Record) -> tuple[Record, dict[str, str]]:
             and "h_V" not in x["formula"]
         )
 
-    line = pick(
-        lambda x: equation(x) and x["formula"].count("/") == 1, "the form with numbers gives another result"
-    )
+    line = pick(lambda x: equation(x) and x["formula"].count("/") == 1, "the form with numbers gives another result")
     line["value"] = next_digit(line["value"])
     line = pick(equation, "differs from line")
     line["operands"][0]["value"] = next_digit(line["operands"][0]["value"], 0)
@@ -188,9 +174,7 @@ def falsified(made: Record) -> tuple[Record, dict[str, str]]:
     line["formula"] = next_digit(line["formula"][: line["formula"].rindex(")")]) + ")"
     line = pick(lambda x: x["kind"] == "lookup" and x["operands"], "gives another value")
     line["value"] = next_digit(line["value"])
-    line = pick(
-        lambda x: x["kind"] == "lookup" and not x["operands"], "the headline is not the result of record"
-    )
+    line = pick(lambda x: x["kind"] == "lookup" and not x["operands"], "the headline is not the result of record")
     line["headline"]["text"] = next_digit(line["headline"]["text"], 0)
     line = pick(lambda x: x["kind"] == "root", "the residual at")
     line["residuals"][0][1] = next_digit(line["residuals"][0][1])

@@ -109,9 +109,7 @@ class Trees:
         if kind == "**":
             if power == 2:
                 return self.tree(0)
-            exponent = (
-                Num(str(r.randrange(2, 12))) if r.random() < 0.5 else self.tree(min(depth - 1, 2), power + 1)
-            )
+            exponent = Num(str(r.randrange(2, 12))) if r.random() < 0.5 else self.tree(min(depth - 1, 2), power + 1)
             return Bin("**", self.tree(depth - 1, power), exponent)
         if kind in "+-*/":
             return Bin(kind, self.tree(depth - 1, power), self.tree(depth - 1, power))

@@ -151,9 +151,7 @@ def test_what_is_no_number_is_not_read_as_one(text: str) -> None:
 def test_two_tables_of_units_agree(name: str) -> None:
     """The writer's table and the reader's were made apart, from the definitions."""
     mine, theirs = named("s⁻¹" if name == "1/s" else name), UNITS[name]
-    si = {unit.kind: other for other, unit in UNITS.items() if unit.factor == 1 and not unit.offset}[
-        theirs.kind
-    ]
+    si = {unit.kind: other for other, unit in UNITS.items() if unit.factor == 1 and not unit.offset}[theirs.kind]
     base = {"1/s": "s⁻¹", "1": ""}.get(si, si)
     assert converted(Fraction(7), mine, base) == (7 + theirs.offset) * theirs.factor
 
@@ -242,9 +240,7 @@ def unseen(name: str, seed: int, count: int) -> list[str]:
     for sheet, address, glyph in random.choices(pool, k=count):
         char = other(glyph, random)
         if read_back(with_glyph(found, sheet, glyph, char=char)).ok:
-            missed.append(
-                f"sheet {sheet}, line {address}: {glyph.char} to {char} at {glyph.x:.0f}, {glyph.y:.0f}"
-            )
+            missed.append(f"sheet {sheet}, line {address}: {glyph.char} to {char} at {glyph.x:.0f}, {glyph.y:.0f}")
     return missed
 
 
@@ -313,6 +309,4 @@ def test_the_reader_imports_nothing_else_of_ours() -> None:
     for path in folder.glob("*.py"):
         for node in ast.walk(ast.parse(path.read_text(encoding="utf-8"))):
             if isinstance(node, ast.ImportFrom):
-                assert node.level < 2 and (
-                    node.level == 1 or not (node.module or "").startswith("calcpack")
-                ), path.name
+                assert node.level < 2 and (node.level == 1 or not (node.module or "").startswith("calcpack")), path.name

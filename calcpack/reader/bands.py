@@ -65,9 +65,7 @@ def bands(sheets: Iterable[Sheet]) -> Iterator[Band]:
     """Every band of every sheet in order of reading."""
     for sheet in sheets:
         edge, head = paper_edge(sheet), ""
-        rules = sorted(
-            (b for b in sheet.bars if b.width > 120 * MM and b.height < 1.0), key=lambda b: -b.axis
-        )
+        rules = sorted((b for b in sheet.bars if b.width > 120 * MM and b.height < 1.0), key=lambda b: -b.axis)
         for above, below in zip((None, *rules), (*rules, None), strict=True):
             high = above.axis if above else float("inf")
             low = below.axis if below else float("-inf")

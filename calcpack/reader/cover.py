@@ -21,10 +21,6 @@ def check_cover(sheet: Sheet, verdicts: Sequence[str], book: Book) -> None:
     worst = next((word for word in ("not met", "not assessed") if word in verdicts), "met")
     if printed != worst:
         book.note(sheet.number, "", "the cover's verdict is not that of the rules", printed or "none", worst)
-    shown = [
-        tally for row in rows(sheet.glyphs) if (tally := {w: int(n) for n, w in _COUNT.findall(str(row))})
-    ]
+    shown = [tally for row in rows(sheet.glyphs) if (tally := {w: int(n) for n, w in _COUNT.findall(str(row))})]
     if Counter(verdicts) not in shown:
-        book.note(
-            sheet.number, "", "the cover's tally is not that of the rules", shown, dict(Counter(verdicts))
-        )
+        book.note(sheet.number, "", "the cover's tally is not that of the rules", shown, dict(Counter(verdicts)))

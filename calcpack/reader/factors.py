@@ -49,8 +49,6 @@ def printed_factor(text: str) -> Fraction:
 
 def same_factor(source: str, before: str, after: str) -> tuple[str, str] | None:
     """The factor printed at the head of ``source`` and the exact one, where they differ."""
-    text = (
-        source.partition("exact")[0].strip() or "1"
-    )  # a unit that differs by its zero alone prints no factor
+    text = source.partition("exact")[0].strip() or "1"  # a unit that differs by its zero alone prints no factor
     right = factor(before, after)
     return None if printed_factor(text) == right else (text, str(right))

@@ -46,9 +46,7 @@ def enter(row: Input, book: Book) -> None:
     book.enter(row.address, [row.given])
     book.uses(row.sheet, row.address, [row.symbol])
     if not row.by and row.used != row.given:
-        book.note(
-            row.sheet, row.address, "used otherwise than given, and no line converts it", row.used, row.given
-        )
+        book.note(row.sheet, row.address, "used otherwise than given, and no line converts it", row.used, row.given)
 
 
 def settle(row: Input, book: Book) -> None:

@@ -92,9 +92,7 @@ def entry(marks: Marks) -> Entry:
 
 def picture(band: Band, left: float, right: float) -> Marks:
     """The formula between two distances from the edge (mm): the serif but for the title, and the bars."""
-    glyphs = tuple(
-        g for g in band.column(left, right) if g.serif and g.colour == INK and not g.bold and not _title(g)
-    )
+    glyphs = tuple(g for g in band.column(left, right) if g.serif and g.colour == INK and not g.bold and not _title(g))
     return Marks(glyphs, tuple(band.inner_bars(left, right)))
 
 
@@ -152,8 +150,7 @@ def residuals(band: Band, glyphs: Sequence[Glyph]) -> tuple[Residual, ...]:
     found = []
     for row in rows(glyphs):
         cells = [
-            text([g for g in row.glyphs if low <= g.x < high])
-            for low, high in zip(edges, edges[1:], strict=False)
+            text([g for g in row.glyphs if low <= g.x < high]) for low, high in zip(edges, edges[1:], strict=False)
         ]
         label, tried, residual = cells
         if not label or not residual.startswith("residual "):

@@ -46,9 +46,7 @@ def look_up(line: Line, form: Form, book: Book) -> Class:
     if derived is None:
         return "tabulated"
     library, found = derived
-    allowed = (
-        Decimal(0) if library in line.source else unit_of_record(found)
-    )  # versions differ in the last digit
+    allowed = Decimal(0) if library in line.source else unit_of_record(found)  # versions differ in the last digit
     if abs(found - line.record.value) > allowed:
         book.note(line.sheet, line.address, f"{library} gives another value", line.record.value, found)
     return "looked up"
@@ -76,9 +74,7 @@ def tabulated(line: Line, entry: Entry, book: Book) -> Class:
     system, size, schedule, outside, wall = pipe.groups()
     bore = Decimal(outside) - 2 * Decimal(wall)
     if line.record.unit != "mm" or abs(bore - line.record.value) > Decimal("0.011"):
-        book.note(
-            line.sheet, line.address, "the bore is not the diameter less two walls", line.record, f"{bore} mm"
-        )
+        book.note(line.sheet, line.address, "the bore is not the diameter less two walls", line.record, f"{bore} mm")
     derived = _pipe(system, size, schedule)
     if derived is None:
         return "tabulated"

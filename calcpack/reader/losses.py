@@ -127,9 +127,7 @@ def worked(band: Band, table: Table, book: Book) -> None:
     if head is None:
         return
     below = tuple(g for g in band.glyphs if g.y < head.y)
-    gives = next(
-        (str(row) for row in rows(g for g in below if not g.serif) if str(row).startswith("gives ")), ""
-    )
+    gives = next((str(row) for row in rows(g for g in below if not g.serif) if str(row).startswith("gives ")), "")
     label = WORKED.search(str(head))
     assert label is not None, "the row was found by it"
     if label[1] not in table.factors:
@@ -145,9 +143,7 @@ def worked(band: Band, table: Table, book: Book) -> None:
         book.note(band.sheet, "", f"row {label[1]} worked in full has other numbers than the table")
     given, rest = scalar(gives.removeprefix("gives "))
     if Quantity(given, named(rest.partition(";")[0])) != Quantity(loss, unit):
-        book.note(
-            band.sheet, "", f"row {label[1]} worked in full gives another loss", gives, f"{loss} {unit}"
-        )
+        book.note(band.sheet, "", f"row {label[1]} worked in full gives another loss", gives, f"{loss} {unit}")
     table.factors.clear()
 
 

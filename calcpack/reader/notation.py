@@ -214,9 +214,7 @@ class _Row:
         """A symbol with its subscript, or the name of a function before its bracket."""
         letters: list[Glyph] = []
         while (
-            (g := self.glyph())
-            and g.char.isalpha()
-            and (not letters or g.x - letters[-1].end < NAME_GAP * self.size)
+            (g := self.glyph()) and g.char.isalpha() and (not letters or g.x - letters[-1].end < NAME_GAP * self.size)
         ):
             letters.append(g)
             self.at += 1

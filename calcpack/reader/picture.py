@@ -127,7 +127,6 @@ def _joined(before: Marks, row: Marks, y: float, body: float) -> Marks:
         for g in row.glyphs
     )
     bars = tuple(
-        b._replace(left=b.left + dx, right=b.right + dx, bottom=b.bottom + dy, top=b.top + dy)
-        for b in row.bars
+        b._replace(left=b.left + dx, right=b.right + dx, bottom=b.bottom + dy, top=b.top + dy) for b in row.bars
     )
     return Marks(before.glyphs + glyphs, before.bars + bars)

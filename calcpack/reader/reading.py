@@ -63,11 +63,7 @@ class Reading:
         try:
             self._read(band)
         except (Unread, Undefined, ArithmeticError, RecursionError) as error:
-            reason = (
-                str(error)
-                if isinstance(error, Unread | Undefined)
-                else "numbers or nesting beyond all bounds"
-            )
+            reason = str(error) if isinstance(error, Unread | Undefined) else "numbers or nesting beyond all bounds"
             self.book.unread.append(Finding(band.sheet, band.address, reason))
             if band.address:
                 self.book.enter(band.address, [])
@@ -108,9 +104,7 @@ class Reading:
         for line, label in self.converting:
             listed_as, units = self.conversions.get(label), (line.operands[0].quantity.unit, line.record.unit)
             if listed_as is None or (listed_as.before, listed_as.after) != units:
-                book.note(
-                    line.sheet, line.address, f"{label} is not its conversion in the list", " to ".join(units)
-                )
+                book.note(line.sheet, line.address, f"{label} is not its conversion in the list", " to ".join(units))
         self._addresses()
         check_symbols(self.known, book)
         check_cover(found[0], self.verdicts, book)
@@ -131,7 +125,5 @@ class Reading:
             section, _, number = address.partition(".")
             next_in[section] += 1
             if int(number) != next_in[section]:
-                self.book.note(
-                    sheet, address, "addresses do not run on", address, f"{section}.{next_in[section]}"
-                )
+                self.book.note(sheet, address, "addresses do not run on", address, f"{section}.{next_in[section]}")
                 next_in[section] = int(number)

@@ -134,6 +134,4 @@ def _margin(band: Band, room: Decimal, limit: Quantity, book: Book) -> None:
             if rounded(per_cent, printed, ROUND_FLOOR) != printed:
                 book.note(band.sheet, band.address, "the margin in per cent is another", printed, per_cent)
         elif Quantity(printed, named(name)) != Quantity(margin, limit.unit):
-            book.note(
-                band.sheet, band.address, "the margin of record is another", row, f"{margin} {limit.unit}"
-            )
+            book.note(band.sheet, band.address, "the margin of record is another", row, f"{margin} {limit.unit}")

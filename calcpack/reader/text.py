@@ -20,9 +20,7 @@ THIN = "\u202f"  # stands for the gap inside a number
 _RAISED = dict(zip("0123456789−", "⁰¹²³⁴⁵⁶⁷⁸⁹⁻", strict=True))
 _LEVEL = str.maketrans({raised: level.replace("−", "-") for level, raised in _RAISED.items()})
 _DIGITS = rf"\d(?:{THIN}?\d)*"
-_NUMBER = re.compile(
-    rf"([+−-]?)({_DIGITS}(?:\.{_DIGITS})?)(?:×10(⁻?[⁰¹²³⁴⁵⁶⁷⁸⁹]{{1,4}}))?(?![\d.⁰¹²³⁴⁵⁶⁷⁸⁹])"
-)
+_NUMBER = re.compile(rf"([+−-]?)({_DIGITS}(?:\.{_DIGITS})?)(?:×10(⁻?[⁰¹²³⁴⁵⁶⁷⁸⁹]{{1,4}}))?(?![\d.⁰¹²³⁴⁵⁶⁷⁸⁹])")
 
 
 @dataclass(frozen=True)
