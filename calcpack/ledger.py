@@ -103,6 +103,7 @@ class Ledger:
         key: str = "",
         file_line: int = 0,
         provenance: Provenance | None = None,
+        note: str = "",
     ) -> Value:
         """Enter an input or a constant as typed; :meth:`convert` brings it to the unit in which it enters formulas."""
         identity = ("given", symbol, key or title, quantity.text, quantity.unit.name)
@@ -117,6 +118,7 @@ class Ledger:
                     key=key,
                     file_line=file_line,
                     provenance=provenance,
+                    validity=note,
                 )
             )
             self._made[identity] = self.used[value.address] = value
@@ -137,7 +139,8 @@ class Ledger:
         if made is None:
             tree = conversion_tree(value.symbol, value.unit, to)
             record = of_record(evaluate(tree, {value.symbol: value.record}, InDecimal()))
-            made = Value(self._address(COMPUTATION), value.symbol, record, value.shadow, to, value.title)
+            title = f"{value.title.removesuffix(', looked up')}, in {to.name}"
+            made = Value(self._address(COMPUTATION), value.symbol, record, value.shadow, to, title)
             self._made["convert", value.address] = made
             if value.address in self.used:
                 self.used[value.address] = made
@@ -246,9 +249,7 @@ class Ledger:
             for label, element, content in rows
         ]
         sum_line = self._register(self._line(EQUATION[total], {"h": [row.line.value for row in made]}, ""))
-        worked = next(
-            (row.label for row, (_, _, content) in zip(made, rows, strict=True) if not isinstance(content, Value)), ""
-        )
+        worked = max(made, key=lambda row: ("n" in dict(row.line.operands), "K" in dict(row.line.operands))).label
         self._place(Losses(title, tuple(made), sum_line, worked))
         return sum_line.value
 

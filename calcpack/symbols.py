@@ -126,7 +126,7 @@ r       r        .      ratio                relative roughness
 r_0     r        0      length               radius of the Earth, U.S. Standard Atmosphere 1976
 Re      Re       .      ratio                Reynolds number
 rho     ρ        .      density              density of the liquid
-S       S        .      length               submergence there is over the reference line
+S       S        .      length               available submergence over the reference line
 S_m     S        min    length               submergence needed against vortices
 T       T        .      temperature          temperature of the liquid
 T_0     T        0      temperature          temperature at sea level, U.S. Standard Atmosphere 1976
@@ -138,9 +138,9 @@ z       z        .      length               static head: surface above the pump
 z_d     z        d      length               elevation of the pump's NPSH datum
 z_g     z        g      length               gauge height above the pump's datum
 z_G     z        G      length               elevation at which the gauge reads the liquid's pressure
+z_m     z        m      length               static head at the reading
 z_r     z        r      length               elevation of the submergence's reference line
 z_s     z        s      length               elevation of the liquid surface
-z_sm    z        s,m    length               elevation of the liquid surface, at the reading
 Z       Z        .      length               site elevation, geometric
 """
 

@@ -17,6 +17,7 @@ import fluids
 import numpy
 import pint
 import pytest
+from plants import INTAKE, Document, plant, studied
 from test_checks import CHECKS
 
 import calcpack
@@ -33,6 +34,7 @@ from calcpack.root import residual, solve
 from calcpack.rules import Rule, margin, submergence, temperature
 from calcpack.symbols import KINDS, NOMENCLATURE
 from calcpack.units import COHERENT
+from calcpack.value import Line
 
 PACKAGE = Path(calcpack.__file__).parent
 RULES: tuple[Rule, ...] = (margin.NPSH_MARGIN, submergence.SUBMERGENCE, temperature.HIGHEST_TEMPERATURE)
@@ -51,7 +53,7 @@ def test_the_catalogue_is_what_the_folder_holds() -> None:
 
 
 def test_names_are_unique_and_their_number_is_pinned() -> None:
-    assert len(EQUATIONS) == len(EQUATION) == 54
+    assert len(EQUATIONS) == len(EQUATION) == 57
     assert {name: e.name for name, e in EQUATION.items()} == {name: name for name in EQUATION}
 
 
@@ -122,6 +124,9 @@ def test_a_published_figure_exists_or_it_is_a_definition(equation: Equation) -> 
 
 #: Equations that are definitions, identities or common practice; the list is pinned so that none slips in.
 WITHOUT_SOURCE = {
+    "open_surface",
+    "needed_ratio_alone",
+    "needed_difference_alone",
     "barometer_station",
     "absolute_from_gauge",
     "gauge_from_vacuum",
@@ -165,16 +170,40 @@ def test_the_equations_without_source_are_pinned() -> None:
     assert sorted(e.name for e in EQUATIONS if not e.source.key) == sorted(WITHOUT_SOURCE)
 
 
-@by_name
-def test_an_equation_is_used(equation: Equation) -> None:
+#: Plants that between them call for every equation.
+PLANTS: tuple[Document, ...] = (
+    plant({"intake": INTAKE, "criteria.npsh_margin": {"ratio": "1.1", "difference": "0.6 m"}}, readings=1),
+    plant({"line.friction_contingency": "10 %", "criteria.npsh_margin": {"difference": "0.6 m"}}),
+    plant({"site": {"elevation": "500 m", "weather_allowance": "1.7 kPa"}}),
+    plant({"site": {"barometer": {"normal": "100 kPa absolute"}, "weather_allowance": "1.7 kPa"}}),
+    plant({"readings.0.gauge.pressure": "4 inHg vacuum"}, line=False, readings=1),
+    plant({"supply.kind": "gas_blanketed", "supply.pressure": {"lowest": "20 kPa gauge"}}),
+    plant({"liquid.temperature": {"average": "20 °C"}}),
+    plant({"liquid.viscosity": {"value": "1 cSt"}, "pump.flow.highest": "1 m³/h"}),
+    plant({"liquid.viscosity": {"value": "120 cSt"}}),
+    plant(
+        {
+            "line.sections.0.elements.3": {
+                "id": "4", "kind": "strainer", "name": "STR-1", "drop": {"clean": "1 kPa", "fouled": "2 kPa"}, "at_flow": "200 m³/h"
+            }
+        }
+    ),
+)  # fmt: skip
+
+
+def test_every_equation_is_used(monkeypatch: pytest.MonkeyPatch) -> None:
     """No equation stands in the catalogue that no study applies."""
-    assert equation.name in {
-        n.value
-        for folder in ("study", "ledger.py")
-        for path in ([PACKAGE / folder] if folder.endswith(".py") else (PACKAGE / folder).glob("*.py"))
-        for n in ast.walk(ast.parse(path.read_text("utf-8")))
-        if isinstance(n, ast.Constant)
-    }
+    applied: set[str] = set()
+    write = Ledger._line
+
+    def noted(self: Ledger, equation: Equation, *rest: Any, **more: Any) -> Line:
+        applied.add(equation.name)
+        return write(self, equation, *rest, **more)
+
+    monkeypatch.setattr(Ledger, "_line", noted)
+    for document in PLANTS:
+        studied(document)
+    assert {e.name for e in EQUATIONS} - applied == set()
 
 
 # --- dimensions, by pint ----------------------------------------------------------------------------------------------
@@ -476,6 +505,25 @@ def test_a_bore_is_that_of_the_table(size: str, schedule: str) -> None:
     assert float(found.millimetres) == pytest.approx(inside * 1000, abs=0.005)
     assert float(found.millimetres) == pytest.approx((outside - 2 * wall) * 1000, abs=0.01)
     assert f"{size} schedule {schedule}" in found.place
+
+
+#: Hydraulic Institute, Engineering Data Library, table 3.A.1, its column in millimetres; ours stands in feet.
+ROUGHNESS_MM = {
+    "commercial steel": 0.0457,
+    "stainless steel": 0.015,
+    "galvanised steel": 0.152,
+    "cast iron": 0.26,
+    "cement-lined steel": 1.5,
+    "concrete": 3.05,
+    "plastic": 0.00152,
+    "copper": 0.00152,
+}
+
+
+def test_a_roughness_is_that_of_the_table_s_other_column() -> None:
+    assert {m: float(parse(text, "roughness").si()) for m, (text, _) in lookup.ROUGHNESS.items()} == pytest.approx(
+        {m: mm / 1000 for m, mm in ROUGHNESS_MM.items()}, rel=0.02
+    )
 
 
 def test_dn_and_nps_are_the_same_pipe() -> None:

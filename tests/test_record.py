@@ -22,7 +22,7 @@ from test_ledger import lines
 
 import calcpack
 from calcpack.record import FORMAT, canonical, fingerprint
-from calcpack.record.words import CAUTIONS
+from calcpack.record.words import CAUTIONS, SILENT
 from calcpack.symbols import NOMENCLATURE
 
 ROOT = Path(__file__).parents[1]
@@ -134,7 +134,7 @@ def test_a_line_s_fingerprint_is_not_moved_by_another_line() -> None:
         for x in lines(recorded(plant({"pump.npsh_required.value": "5.1 m"})))
     }
     changed = {symbol for (title, symbol), value in moved.items() if before.get((title, symbol)) != value}
-    assert changed == {"NPSHR", "N_r", "M_r", "M_d"}
+    assert changed == {"NPSHR", "N_L", "M_r", "M_d"}
 
 
 # --- complete ---------------------------------------------------------------------------------------------------------
@@ -142,7 +142,7 @@ def test_a_line_s_fingerprint_is_not_moved_by_another_line() -> None:
 KEYS = {
     "format", "calculation", "revisions", "route", "cover", "purpose", "scope", "exclusions", "criteria",
     "method", "inputs", "unused", "assumptions", "references", "sketch", "computation", "checks", "findings",
-    "limits", "cautions", "software", "rounding", "conversions", "nomenclature", "input_file", "fingerprint",
+    "limits", "limits_note", "cautions", "software", "rounding", "conversions", "nomenclature", "input_file", "fingerprint",
 }  # fmt: skip
 
 
@@ -225,24 +225,23 @@ def test_inputs_stand_at_their_line_of_the_file(path: Path) -> None:
 
 @each_sample
 def test_the_counts_on_the_cover_are_those_of_the_inputs(path: Path) -> None:
+    """What the tool assumes because the file is silent counts as assumed too, and is named."""
     inputs = [x for x in record(path)["inputs"] if x["kind"] == "given"]
-    status = Counter(x["provenance"]["status"] for x in inputs)
+    silent = [a for a in record(path)["assumptions"] if a["basis"] == SILENT]
+    status = Counter(x["provenance"]["status"] for x in inputs) + Counter({"assumed": len(silent)})
     cover = record(path)["cover"]
-    assert {k: cover["counts"][k] for k in ("verified", "maker", "preliminary", "assumed")} == {
-        k: status[k] for k in ("verified", "maker", "preliminary", "assumed")}  # fmt: skip
-    assert cover["counts"]["without source"] == sum(
-        not x["provenance"]["source"] and x["provenance"]["status"] != "assumed" for x in inputs
-    )
-    assert [u["address"] for u in cover["unverified"]] == [
-        x["address"] for x in inputs if x["provenance"]["status"] != "verified"
-    ]
+    stated = ("verified", "maker", "preliminary", "assumed")
+    assert {k: cover["counts"][k] for k in stated} == {k: status[k] for k in stated}
+    assert cover["counts"]["without source"] == sum(not x["provenance"]["source"] for x in inputs)
+    unverified = [x["address"] for x in inputs if x["provenance"]["status"] != "verified"]
+    assert [u["address"] for u in cover["unverified"]] == unverified + [a["address"] for a in silent]
 
 
 def test_inputs_without_source_or_status_are_counted_and_named() -> None:
     document = plant({"supply.level": {"lowest": "1.5 m"}, "site.barometer.status": "preliminary"})
     cover = recorded(document)["cover"]
     assert cover["counts"]["without source"] == 1 and cover["counts"]["preliminary"] == 1
-    named = {u["what"]: u["status"] for u in cover["unverified"]}
+    named = {u["what"]: u["status"] for u in cover["unverified"] if u["status"] != "assumed"}
     assert named == {"Level of the surface, lowest": "no status", "Lowest station barometer, absolute": "preliminary"}
 
 

@@ -43,7 +43,7 @@ def npsh(
         flow=value("Q", flow, system),
         at_flow=value("Q_r", at_flow, system),
         criterion="at least 1.1 × NPSHR",
-        governs="ratio",
+        governs="the ratio governs",
         source="[S1] 4.3",
     )
 

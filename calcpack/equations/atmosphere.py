@@ -41,6 +41,7 @@ EQUATIONS = (
         "Lowest barometer, absolute: station less weather allowance",
         PRACTICE,
     ),
+    Equation("open_surface", "p_s", "p_b", "Surface pressure of an open surface, absolute", DEFINITION),
     Equation("absolute_from_gauge", "p_s", "p_b + p_g", "Surface pressure, absolute", DEFINITION),
     Equation("gauge_from_vacuum", "p_g", "-p_vac", "Gauge pressure from the vacuum as read", DEFINITION),
 )

@@ -37,7 +37,7 @@ EQUATIONS = (
     Equation(
         "inferred_loss",
         "h_u",
-        "H_s + z - H_v - NPSHA_m",
+        "H_sm + z_m - H_vm - NPSHA_m",
         "Losses from the surface to the tap, as the reading shows them",
         IDENTITY,
         "contains every error of level and gauge",
@@ -45,7 +45,7 @@ EQUATIONS = (
     Equation(
         "surface_head_change", "dH_s", "H_s - H_sm", "Change of the surface head, worst case less reading", DEFINITION
     ),
-    Equation("level_change", "dz", "z_s - z_sm", "Change of the surface level, worst case less reading", DEFINITION),
+    Equation("level_change", "dz", "z - z_m", "Change of the static head, worst case less reading", DEFINITION),
     Equation(
         "vapour_head_change",
         "dH_v",
@@ -70,6 +70,8 @@ EQUATIONS = (
     ),
     Equation("margin_ratio", "M_r", "NPSHA / NPSHR", "Margin ratio", DEFINITION),
     Equation("margin_difference", "M_d", "NPSHA - NPSHR", "Margin difference", DEFINITION),
+    Equation("needed_ratio_alone", "N_L", "m_r * NPSHR", "NPSH needed, by the margin ratio", DEFINITION),
+    Equation("needed_difference_alone", "N_L", "NPSHR + m_d", "NPSH needed, by the margin difference", DEFINITION),
     Equation("needed_by_ratio", "N_r", "m_r * NPSHR", "NPSH needed by the margin ratio", DEFINITION),
     Equation("needed_by_difference", "N_d", "NPSHR + m_d", "NPSH needed by the margin difference", DEFINITION),
     Equation("needed_greater", "N_L", "max(N_r, N_d)", "NPSH needed, the greater governs", DEFINITION),

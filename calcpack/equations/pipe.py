@@ -21,7 +21,7 @@ EQUATIONS = (
         "colebrook",
         "f",
         "1 / sqrt(f) == -2 * log10(r / 3.7 + 2.51 / (Re * sqrt(f)))",
-        "Friction factor (Darcy), by its root",
+        "Friction factor (Darcy), solved for its root",
         Cite("colebrook"),
         "turbulent, Re above 4000; the residual changes sign across the root",
     ),
@@ -29,7 +29,7 @@ EQUATIONS = (
         "colebrook_transition",
         "f",
         "1 / sqrt(f) == -2 * log10(r / 3.7 + 2.51 / (Re * sqrt(f)))",
-        "Friction factor (Darcy), by its root",
+        "Friction factor (Darcy), solved for its root",
         Cite("colebrook"),
         "uncertain: Re between 2000 and 4000, where flow is neither laminar nor fully turbulent; "
         "the turbulent value is taken, the greater of the two",

@@ -7,6 +7,7 @@ import hashlib
 import json
 from collections import Counter
 from collections.abc import Iterator
+from decimal import Decimal
 
 from .. import __version__, formula
 from ..lookup import library
@@ -30,6 +31,7 @@ def assemble(study: Study) -> Json:
     computation = [part(ledger, p, references) for p in ledger.parts]
     inputs = [line(ledger, x, references) for x in ledger.inputs]
     judged = checks(study, references)
+    assumptions = _assumptions(study, inputs)
     record: Json = {
         "format": FORMAT,
         "calculation": {
@@ -39,20 +41,23 @@ def assemble(study: Study) -> Json:
         },
         "revisions": [{"revision": r.revision, "date": r.date.isoformat(), "reason": r.reason} for r in c.revisions],
         "route": study.route,
-        "cover": cover(study, judged, inputs),
+        "cover": cover(study, judged, inputs, assumptions),
         "purpose": words.purpose(c),
         "scope": words.scope(study),
         "exclusions": [words.CAUTIONS[-1]],
-        "criteria": [{"rule": r["address"], "text": r["criterion"], "source": r["source"]} for r in judged],
+        "criteria": [
+            {"rule": r["address"], "text": ": ".join(t for t in (r["about"], r["criterion"]) if t), "source": r["source"]} for r in judged
+        ],
         "method": words.method(study, references),
         "inputs": inputs,
         "unused": _unused(study),
-        "assumptions": _assumptions(study, inputs),
+        "assumptions": assumptions,
         "sketch": sketch(study),
         "computation": computation,
         "checks": judged,
-        "findings": [{"text": text, "reason": reason} for text, reason in study.findings.items()],
+        "findings": [{"text": text[0].upper() + text[1:], "reason": reason} for text, reason in study.findings.items()],
         "limits": _limits(study),
+        "limits_note": words.limits_note(judged),
         "cautions": list(words.CAUTIONS),
         "software": _software(study),
         "rounding": _rounding(study),
@@ -121,14 +126,14 @@ def _assumptions(study: Study, inputs: list[Json]) -> list[Json]:
                 p["confirm"],
             )
     for text, consequence in study.assumptions.values():
-        add(text, "the file states no other value", consequence, "")
+        add(text, words.SILENT, consequence, "")
     standing: tuple[tuple[str, str], ...] = words.STANDING_ASSUMPTIONS
     if study.route != "measured":
         standing += words.DESIGN_ASSUMPTIONS
     if study.route != "design":
         standing += words.MEASURED_ASSUMPTIONS
     for text, consequence in standing:
-        add(text, "made by the method", consequence, "")
+        add(text, words.INHERENT, consequence, "")
     return found
 
 
@@ -141,8 +146,6 @@ def _limits(study: Study) -> list[Json]:
         ("temperature of the liquid", "not above", c.liquid.temperature.highest),
         ("pressure on the surface", "not below", c.supply.pressure.lowest if c.supply.pressure else None),
         ("barometer at the site", "not below", c.site.barometer.lowest if c.site.barometer else None),
-        ("speed of the pump", "as", c.pump.npsh_required.speed),
-        ("impeller", "as", c.pump.npsh_required.impeller),
     ]
     for section in c.line.sections if c.line else ():
         rows += [
@@ -150,6 +153,10 @@ def _limits(study: Study) -> list[Json]:
             for e in section.elements
             if e.kind == "strainer"
         ]
+    rows += [
+        ("speed of the pump", "as", c.pump.npsh_required.speed),
+        ("impeller", "as", c.pump.npsh_required.impeller),
+    ]
     address = {x.key: x.value.address for x in study.ledger.inputs}
     return [
         {"what": what, "limit": f"{word} {typeset_minus(g.text)}", "address": address.get(g.key, "")}
@@ -185,6 +192,10 @@ def _headlines(study: Study) -> Iterator[tuple[str, Value]]:
                 yield v.title, v
 
 
+#: A drift below this is the noise of double precision, not of rounding.
+NOISE = Decimal("1e-9")
+
+
 def _rounding(study: Study) -> list[Json]:
     """The proof that line rounding does not matter: each headline value in both books."""
     rows = []
@@ -192,7 +203,7 @@ def _rounding(study: Study) -> list[Json]:
         shadow = float(v.shadow / v.unit.factor)
         rows.append({
             "address": v.address, "what": title, "record": number(v.record), "shadow": short(shadow), "unit": v.unit.name,
-            "drift": f"{drift(v):.1E}", "limit": f"{ALLOWED[reported_decimals(v) or 0]:f}",
+            "drift": f"{drift(v):.1E}" if drift(v) > NOISE else "0", "limit": f"{ALLOWED[reported_decimals(v) or 0]:f}",
         })  # fmt: skip
     return rows
 

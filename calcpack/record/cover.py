@@ -14,11 +14,10 @@ from ..study import Study
 from ..symbols import NOMENCLATURE
 from ..value import Value, drift, in_unit
 from .lines import Json, References, number, value
+from .words import SILENT
 
 _RELATION = {">=": "≥", "<=": "≤", ">": ">", "<": "<", "==": "="}
 _RANK = {"not met": 0, "not assessed": 1, "met": 2, "not applicable": 3}
-#: Units in which a margin is reported, where they are not the side's own.
-_STEP = {"temperature": "temperature_difference"}
 
 
 def checks(study: Study, references: References) -> list[Json]:
@@ -32,12 +31,14 @@ def _check(ledger: Ledger, c: Check, address: str, references: References) -> Js
     margin = None
     if c.margin is not None and c.left is not None and c.right is not None:
         kind = NOMENCLATURE[names[0]].kind
-        plant = PLANT[ledger.system][_STEP.get(kind, kind)][0]
-        step = Value(address, names[0], c.margin, 0.0, ledger.coherent(names[0]), "")
-        shown = in_unit(step, plant) if kind not in _STEP else c.margin
+        own_unit = c.left.unit
+        plant = own_unit if kind == "temperature" else PLANT[ledger.system][kind][0]
+        shown = (
+            c.margin if kind == "temperature" else in_unit(Value(address, names[0], c.margin, 0.0, own_unit, ""), plant)
+        )
         x = rounded(shown, min(_decimals(c.left), _decimals(c.right)), "down")
         margin = {
-            "value": number(c.margin), "unit": ledger.coherent(names[0]).name, "headline": {"text": str(x), "unit": plant.name},
+            "value": number(c.margin), "unit": own_unit.name, "headline": {"text": str(x), "unit": plant.name},
             "percent": None if c.percent is None else str(rounded(c.percent, 1, "down")),
         }  # fmt: skip
     own = references.text(c.rule.cite)
@@ -85,18 +86,21 @@ def governing(judged: list[Json]) -> Json:
     )
 
 
-def cover(study: Study, judged: list[Json], inputs: list[Json]) -> Json:
+def cover(study: Study, judged: list[Json], inputs: list[Json], assumptions: list[Json]) -> Json:
     """What the cover says: verdict, statement, tally, counts of unverified inputs."""
     tally = Counter(r["verdict"] for r in judged)
     verdict = "not met" if tally["not met"] else "not assessed" if tally["not assessed"] else "met"
     statuses = [(x, x["provenance"]) for x in inputs if x.get("provenance")]
     counts = Counter(p["status"] or "no status" for _, p in statuses)
-    unsourced = [x for x, p in statuses if not p["source"] and p["status"] != "assumed"]
+    unsourced = [x for x, p in statuses if not p["source"]]
+    silent = [a for a in assumptions if a["basis"] == SILENT]
+    counts["assumed"] += len(silent)
     unverified = [
         {"address": x["address"], "what": x["title"], "status": p["status"] or "no status"}
         for x, p in statuses
         if p["status"] != "verified"
     ]
+    unverified += [{"address": a["address"], "what": a["text"], "status": "assumed"} for a in silent]
     return {
         "verdict": verdict,
         "statement": _statement(study, judged),
@@ -124,8 +128,8 @@ def _sentence(r: Json) -> str:
     subject = "NPSH available" if r["id"] == "npsh_margin" else "Submergence"
     amount = margin["text"].lstrip("-")
     if r["verdict"] == "not assessed":
-        return f"{subject}{about} is {left['text']} {left['unit']} and needs {right['text']} {right['unit']}: not assessed, {r['reason']}."
-    return f"{subject}{about} is {left['text']} {left['unit']} and needs {right['text']} {right['unit']}: {words} {amount} {margin['unit']}."
+        return f"{subject}{about} is {left['text']} {left['unit']}; {right['text']} {right['unit']} is needed: not assessed, {r['reason']}."
+    return f"{subject}{about} is {left['text']} {left['unit']}; {right['text']} {right['unit']} is needed: {words} {amount} {margin['unit']}."
 
 
 def _statement(study: Study, judged: list[Json]) -> str:
@@ -138,6 +142,8 @@ def _statement(study: Study, judged: list[Json]) -> str:
     if study.differences:
         apart = ", ".join(f"{study.ledger.shown(d.value)} ({d.name})" for d in study.differences)
         words.append(f"Model less reading, at the state of the reading: {apart}.")
+    if study.findings:
+        words.append(f"Open findings: {len(study.findings)} (section 9).")
     return " ".join(words)
 
 

@@ -4,15 +4,24 @@ from __future__ import annotations
 
 from ..number import decimal, rounded
 from ..quantity import Unit
+from ..rules.margin import NPSH_MARGIN
 from ..source.inputs import Given
 from ..study import Study
 from ..study.line import label
 from ..value import Line, Value
 from .lines import Json, number
 
+#: The terms of a result as the build-up names them; those in ``_TAKEN`` are subtracted.
+_HEADS = {
+    "H_s": "surface pressure", "z": "static head", "H_v": "vapour pressure", "h_L": "losses", "H_b": "barometer",
+    "H_g": "gauge reading", "z_g": "gauge height", "h_V": "velocity head", "NPSHA_m": "NPSH by the reading",
+    "dH_s": "surface pressure, change", "dz": "level, change", "dH_v": "vapour pressure, change", "dh_h": "losses, change",
+}  # fmt: skip
+_TAKEN = frozenset({"H_v", "h_L", "dH_v", "dh_h"})
+
 
 def sketch(study: Study) -> Json:
-    """Levels, datum, inlet and heads of the first state computed, in the display system's unit of length."""
+    """Levels, datum, inlet and heads of the result that governs, in the display system's unit of length."""
     c, ledger = study.calculation, study.ledger
     lines = ledger.lines()
 
@@ -23,15 +32,16 @@ def sketch(study: Study) -> Json:
     def text(v: Value | None) -> str | None:
         return None if v is None else number(v.record)
 
-    result = next(x for x in lines if x.key_result and x.value.symbol in ("NPSHA_d", "NPSHA_m"))
-    names = {"H_s": "surface pressure", "z": "static head", "H_v": "vapour pressure", "h_L": "losses", "H_b": "barometer",
-             "H_g": "gauge reading", "z_g": "gauge height", "h_V": "velocity head"}  # fmt: skip
+    judged = [check for check in study.checks if check.rule is NPSH_MARGIN and check.left is not None]
+    result = ledger.line_of(min((check.left for check in judged if check.left), key=lambda v: v.record))
     heads = [
-        {"name": names[s], "symbol": s, "value": number(-v.record if s in ("H_v", "h_L") else v.record)}
+        {"name": _HEADS[s], "symbol": s, "value": number(-v.record if s in _TAKEN else v.record)}
         for s, v in result.operands
     ]
-    level = of("z_s")
-    extreme = "lowest" if level is not None and level.title.endswith("lowest") else "as read"
+    read = result.value.symbol == "NPSHA_m"
+    levels = [x.value for x in lines if x.value.symbol == "z_s" and x.value.unit.name == ledger.coherent("z_s").name]
+    level = next((v for v in levels if ("lowest" in v.title) is not read), None)
+    extreme = "as read" if read else "lowest"
     elements = []
     if c.line is not None:
         elements = [

@@ -3,9 +3,10 @@
 from __future__ import annotations
 
 from ..references import Cite
+from ..rules import PASSING
 from ..source.inputs import Calculation
 from ..study import Study
-from .lines import References
+from .lines import Json, References
 
 CAUTIONS = (
     "This package is prepared by a computer program from one input file. It must be reviewed, line by line, by a qualified "
@@ -13,10 +14,10 @@ CAUTIONS = (
     "The program seals, signs and certifies nothing.",
     "The program's own recomputation, printed or not, is not an independent verification. An alternate calculation, a test or a "
     "line-by-line check by another engineer is.",
-    "Local codes, the owner's standards and the conditions of the permit go before the criteria printed here; editions differ, and "
+    "Local codes, the owner's standards and the conditions of the permit take precedence over the criteria printed here; editions differ, and "
     "the criterion belongs to the project.",
-    "NPSH required, submergence, and the losses of strainers and special fittings are the maker's data. NPSH3 is the value at which the "
-    "head of the first stage has dropped by 3 %: it is not freedom from cavitation.",
+    "NPSH required and the losses of strainers and special fittings are the makers' data; what their figures rest "
+    "on is theirs to confirm. NPSH3 is the value at which the head of the first stage has dropped by 3 %: it is not freedom from cavitation.",
     "Not analysed: transients and start-up, valve closure, gas coming out of solution, vortices below the surface, pre-swirl and the "
     "shape of the intake, vortex breakers, recirculation in the pump, vibration, wear, several pumps on one line, fire-pump rules.",
 )
@@ -58,17 +59,17 @@ _CARRIED = (
     "vapour pressure, and by its own losses in proportion to the flow squared."
 )
 _WHY = {
-    "design": "The file holds a level and a line and no reading: the design route applies.",
-    "measured": "The file holds readings at the pump inlet and no line: the measured route applies.",
-    "both": "The file holds a line and readings: both routes apply. The model is run at the state of each reading, where the two are "
+    "design": "The input gives a level and a line and no reading: the design route applies.",
+    "measured": "The input gives readings at the pump inlet and no line: the measured route applies.",
+    "both": "The input gives a line and readings: both routes apply. The model is run at the state of each reading, where the two are "
     "compared; the difference is a finding, not an error of rounding.",
 }
 _ROUNDING = (
-    "Each line is computed from the printed values above it, in one coherent system of units ({units}), to 50 digits, and rounded once: "
-    "first to 12, then half to even to 6 significant digits. The small figures are these values of record. A reader who computes to at least 12 "
+    "Each line is computed from the printed values above it, in one coherent system of units ({units}), to 50 digits, and rounded for the record: "
+    "to 12 and then half to even to 6 significant digits. The small figures are these values of record. A reader who computes to at least 12 "
     "digits, rounds to 12 and then half to even to 6 finds the same. A second run at full precision stands beside it (section 12): it shows what the "
     "rounding of lines does to each result. NIST GLP 9 {glp9} advises against rounding intermediate values; it is done here so that every "
-    "printed line re-computes from the printed numbers, and the proof that it does not matter is printed."
+    "printed line re-computes from the printed numbers, and the effect on each result is printed beside its limit."
 )
 _UNITS = {"SI": "m, s, kg, N, Pa", "US": "ft, s, slug, lbf"}
 
@@ -94,6 +95,8 @@ def method(study: Study, references: References) -> list[str]:
     return words
 
 
+#: Bases of the assumptions that the tool makes itself.
+SILENT, INHERENT = "the file states no other value", "inherent in the method"
 STANDING_ASSUMPTIONS = (
     ("The liquid is one phase and free of gas", "dissolved or entrained gas lowers NPSH available"),
     ("One inlet carries the flow of one pump", "a shared inlet or line carries more and loses more"),
@@ -114,3 +117,13 @@ MEASURED_ASSUMPTIONS = (
         "a loss there lowers NPSH available by its own amount",
     ),
 )
+
+
+def limits_note(judged: list[Json]) -> str:
+    """What the limits of use mean under the verdict."""
+    if all(r["verdict"] in PASSING for r in judged):
+        return "The verdict holds at these values and on the safe side of each; outside them the package no longer applies."
+    return (
+        "These are the values computed, not permitted limits: at them not every rule is met. No limit of operation follows "
+        "from this package."
+    )

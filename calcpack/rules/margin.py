@@ -20,7 +20,7 @@ def check(
         return without_numbers(
             NPSH_MARGIN, "not assessed", reason, about=about, criterion=criterion, source=source, left=npsh
         )
-    same = f"the {governs} governs"
+    same = governs
     lower = "" if flow.shadow >= at_flow.shadow else "; NPSH required is the one of a higher flow, on the safe side"
     return compare(
         NPSH_MARGIN,

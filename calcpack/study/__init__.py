@@ -66,7 +66,8 @@ def run(calculation: Calculation) -> Study:
             differences.append(Difference(reading.name, value))
             word = "less" if value.record > 0 else "more"
             entry.find(
-                f"{reading.name}: the reading shows {ledger.shown(value).lstrip('-')} {word} NPSH than the model at its state (line {value.address})",
+                f"{reading.name}: the reading shows {ledger.shown(value).lstrip('-')} {word} NPSH than the model "
+                f"at its state (line {value.address})",
                 "a loss the model does not hold, or an error of level, gauge, elevation, flow, bore or datum; the lower result "
                 "governs while the cause is open",
             )
@@ -118,11 +119,13 @@ def _margin(available: Available, needed: need.Needed, calculation: Calculation)
 
 def _temperature(entry: Entry, judged: list[Available], worst: State) -> Check:
     entry.ledger.group("The temperature used")
-    used = entry.ledger.convert(min((a.temperature for a in judged), key=lambda v: v.shadow))
+    used = min((a.temperature for a in judged), key=lambda v: v.shadow)
     extreme, given = warmest(entry.calculation)
     highest = need.highest_temperature(entry)
+    if highest is not None and highest.unit.name != used.unit.name:
+        used, highest = entry.ledger.convert(used), entry.ledger.convert(highest)
     cost = ""
-    if highest is None or used.record < highest.record:
+    if highest is None or used.shadow < highest.shadow:
         lost = need.cost_of_temperature(entry, worst)
         if lost is not None:
             cost = f". Each {CONSTANTS['dT'].text} warmer would take {entry.ledger.shown(lost)} from NPSH available (line {lost.address})"

@@ -34,15 +34,15 @@ class Entry:
         self.findings: dict[str, str] = {}
         self.assumptions: dict[str, tuple[str, str]] = {}
 
-    def value(self, given: Given, symbol: str, title: str) -> Value:
+    def value(self, given: Given, symbol: str, title: str, note: str = "") -> Value:
         """Enter ``given`` as ``symbol``, converted to the display system's unit where it needs to be."""
-        return self.ledger.convert(self.typed(given, symbol, title))
+        return self.ledger.convert(self.typed(given, symbol, title, note))
 
-    def typed(self, given: Given, symbol: str, title: str) -> Value:
-        """Enter ``given`` as ``symbol`` and keep it as typed, for a look-up."""
+    def typed(self, given: Given, symbol: str, title: str, note: str = "") -> Value:
+        """Enter ``given`` as ``symbol`` and keep it as typed, for a look-up; ``note`` says what it holds for."""
         return self.ledger.given(
             symbol, title, given.quantity, text=given.text, key=given.key, file_line=given.line,
-            provenance=_provenance(given),
+            note=note, provenance=_provenance(given),
         )  # fmt: skip
 
     def count(self, element: Element) -> Value:

@@ -5,7 +5,7 @@ from __future__ import annotations
 from dataclasses import dataclass
 
 from ..lookup import WATER_RANGE
-from ..source.inputs import Intake
+from ..source.inputs import Intake, NpshRequired
 from ..value import Value
 from .entry import Entry
 from .liquid import temperature_of
@@ -34,26 +34,42 @@ def needed(entry: Entry) -> Needed:
             "they are compared as if both were one elevation; where they differ, NPSH required needs a shift",
         )
     ledger.group("NPSH needed")
-    required = entry.value(npsh.value, "NPSHR", f"NPSH required, {npsh.basis}")
-    at_flow = entry.value(npsh.at_flow, "Q_r", "Flow at which NPSH required is stated")
-    found: dict[str, Value] = {}
-    words = []
+    required = entry.value(npsh.value, "NPSHR", f"NPSH required, {npsh.basis}", note=_curve(npsh))
+    at_flow = entry.typed(npsh.at_flow, "Q_r", "Flow at which NPSH required is stated")
+    words: list[str] = []
+    ratio = difference = None
     if asked.ratio is not None:
-        ratio = entry.value(asked.ratio, "m_r", "Margin ratio asked for")
-        found["ratio"] = ledger.apply("needed_by_ratio", {"m_r": ratio, "NPSHR": required})
+        ratio = {"m_r": entry.value(asked.ratio, "m_r", "Margin ratio asked for"), "NPSHR": required}
         words.append(f"{asked.ratio.text} × NPSHR")
     if asked.difference is not None:
-        difference = entry.value(asked.difference, "m_d", "Margin difference asked for")
-        found["difference"] = ledger.apply("needed_by_difference", {"m_d": difference, "NPSHR": required})
+        difference = {"m_d": entry.value(asked.difference, "m_d", "Margin difference asked for"), "NPSHR": required}
         words.append(f"NPSHR + {asked.difference.text}")
-    limit = next(iter(found.values()))
-    if len(found) == 2:
-        limit = ledger.apply("needed_greater", {"N_r": found["ratio"], "N_d": found["difference"]})
-    governs = next(name for name, value in found.items() if value.record == limit.record)
+    if ratio and difference:
+        by_ratio, by_difference = (
+            ledger.apply("needed_by_ratio", ratio),
+            ledger.apply("needed_by_difference", difference),
+        )
+        limit = ledger.apply("needed_greater", {"N_r": by_ratio, "N_d": by_difference})
+        governs = "the ratio governs" if by_ratio.record == limit.record else "the difference governs"
+    elif ratio:
+        limit, governs = ledger.apply("needed_ratio_alone", ratio), "the ratio is the only margin asked for"
+    else:
+        assert difference is not None, "source asks for a margin"
+        limit, governs = (
+            ledger.apply("needed_difference_alone", difference),
+            "the difference is the only margin asked for",
+        )
     criterion = "NPSH available at least " + (
         words[0] if len(words) == 1 else f"the greater of {words[0]} and {words[1]}"
     )
     return Needed(required, at_flow, limit, governs, criterion)
+
+
+def _curve(npsh: NpshRequired) -> str:
+    """What the maker's figure holds for, in words."""
+    parts = [f"{npsh.certified} curve {npsh.curve}"]
+    parts += [given.text for given in (npsh.speed, npsh.impeller) if given is not None]
+    return ", ".join([*parts, f"counted from the {npsh.datum}"])
 
 
 def margins(entry: Entry, available: Available, need: Needed) -> None:
@@ -123,5 +139,5 @@ def highest_temperature(entry: Entry) -> Value | None:
     warmer = [r for r in entry.calculation.readings if r.temperature.quantity.si() > given.quantity.si()]
     if warmer:
         hottest = max(warmer, key=lambda r: r.temperature.quantity.si())
-        return entry.value(hottest.temperature, "T", f"Temperature of the liquid, {hottest.name}")
-    return entry.value(given, "T", "Temperature of the liquid, highest")
+        return entry.typed(hottest.temperature, "T", f"Temperature of the liquid, {hottest.name}")
+    return entry.typed(given, "T", "Temperature of the liquid, highest")

@@ -133,11 +133,11 @@ def carried(entry: Entry, found: Available, reading: Surface, worst: Surface, ab
     ledger = entry.ledger
     ledger.group("From the reading to the worst case")
     inferred = ledger.apply("inferred_loss", {
-        "H_s": reading.surface_head, "z": reading.static_head, "H_v": reading.vapour_head, "NPSHA_m": found.npsh,
+        "H_sm": reading.surface_head, "z_m": reading.static_head, "H_vm": reading.vapour_head, "NPSHA_m": found.npsh,
     })  # fmt: skip
     changes = {
         "dH_s": ledger.apply("surface_head_change", {"H_s": worst.surface_head, "H_sm": reading.surface_head}),
-        "dz": ledger.apply("level_change", {"z_s": worst.level, "z_sm": reading.level}),
+        "dz": ledger.apply("level_change", {"z": worst.static_head, "z_m": reading.static_head}),
         "dH_v": ledger.apply("vapour_head_change", {"H_v": worst.vapour_head, "H_vm": reading.vapour_head}),
         "dh_h": ledger.apply("loss_change", {"h_u": inferred, "Q": worst.flow, "Q_m": reading.flow}),
     }

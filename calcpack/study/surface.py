@@ -58,7 +58,7 @@ def _allowance(entry: Entry) -> Value:
 def pressure(entry: Entry, state: State) -> Value:
     """The absolute pressure on the surface: the barometer over an open one, the vessel's own in a closed one."""
     if state.pressure is None:
-        return barometer(entry, state)
+        return entry.ledger.apply("open_surface", {"p_b": barometer(entry, state)})
     return entry.absolute(
         state.pressure, f"Pressure in {entry.calculation.supply.name}", lambda: barometer(entry, state)
     )
