@@ -135,3 +135,11 @@ def cut(words: str, fits: Callable[[str], bool]) -> str:
     while words and not fits(words + "…"):
         words = words[:-1]
     return words.rstrip() + "…"
+
+
+_BEFORE_UNIT = re.compile(r"(?<=[0-9]) (?=(?:ft|in|mm|m|kPa|Pa|psi|gal/min|m³/h|L/s|°C|°F|K|%)(?![a-z]))")
+
+
+def together(words: str) -> str:
+    """A sentence whose numbers never part from their units."""
+    return _BEFORE_UNIT.sub("\u00a0", words)

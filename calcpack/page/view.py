@@ -108,7 +108,7 @@ def _cover(r: Mapping[str, Any], shared: Context) -> dict[str, Any]:
     return {
         "glyph": glyphs.verdict(cover["verdict"], 14.0),
         "word": tables.capital(cover["verdict"]),
-        "statement": cover["statement"],
+        "statement": text.together(cover["statement"]),
         "long": len(cover["statement"]) > LONG_STATEMENT,
         "tally": [(n, word) for word, n in cover["tally"].items() if n],
         "governs": tables.rule(governing, shared) if governing else None,
@@ -159,7 +159,12 @@ def _part(part: Mapping[str, Any], shared: Context) -> dict[str, Any]:
         runs[-1]["rows"].append(
             {"group": block["group"]} if "group" in block else {"line": view(block["line"], shared)}
         )
-    return {"title": part["title"], "scope": part["scope"], "short": cut(part["scope"], SCOPE_WIDTH, 8), "runs": runs}
+    return {
+        "title": text.together(part["title"]),
+        "scope": text.together(part["scope"]),
+        "short": cut(part["scope"], SCOPE_WIDTH, 8),
+        "runs": runs,
+    }
 
 
 def _rounding(row: Mapping[str, Any], shared: Context) -> dict[str, Any]:

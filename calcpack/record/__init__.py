@@ -12,7 +12,7 @@ from decimal import Decimal
 from .. import __version__, formula
 from ..lookup import library
 from ..number import typeset_minus
-from ..rules import ALLOWED, reported_decimals
+from ..rules import ALLOWED, PASSING, reported_decimals
 from ..source.inputs import Given
 from ..study import Study
 from ..symbols import NOMENCLATURE
@@ -158,8 +158,13 @@ def _limits(study: Study) -> list[Json]:
         ("impeller", "as", c.pump.npsh_required.impeller),
     ]
     address = {x.key: x.value.address for x in study.ledger.inputs}
+    passing = all(check.verdict in PASSING for check in study.checks)
     return [
-        {"what": what, "limit": f"{word} {typeset_minus(g.text)}", "address": address.get(g.key, "")}
+        {
+            "what": what,
+            "limit": f"{word if passing else 'computed at'} {typeset_minus(g.text)}",
+            "address": address.get(g.key, ""),
+        }
         for what, word, g in rows
         if g is not None
     ]
