@@ -134,7 +134,7 @@ def test_a_line_s_fingerprint_is_not_moved_by_another_line() -> None:
         for x in lines(recorded(plant({"pump.npsh_required.value": "5.1 m"})))
     }
     changed = {symbol for (title, symbol), value in moved.items() if before.get((title, symbol)) != value}
-    assert changed == {"NPSHR", "N_L", "M_r", "M_d"}
+    assert changed == {"NPSHR", "N_r", "N_L", "M_r", "M_d"}
 
 
 # --- complete ---------------------------------------------------------------------------------------------------------

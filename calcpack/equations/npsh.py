@@ -70,9 +70,11 @@ EQUATIONS = (
     ),
     Equation("margin_ratio", "M_r", "NPSHA / NPSHR", "Margin ratio", DEFINITION),
     Equation("margin_difference", "M_d", "NPSHA - NPSHR", "Margin difference", DEFINITION),
-    Equation("needed_ratio_alone", "N_L", "m_r * NPSHR", "NPSH needed, by the margin ratio", DEFINITION),
-    Equation("needed_difference_alone", "N_L", "NPSHR + m_d", "NPSH needed, by the margin difference", DEFINITION),
     Equation("needed_by_ratio", "N_r", "m_r * NPSHR", "NPSH needed by the margin ratio", DEFINITION),
     Equation("needed_by_difference", "N_d", "NPSHR + m_d", "NPSH needed by the margin difference", DEFINITION),
+    Equation("needed_ratio_alone", "N_L", "N_r", "NPSH needed: the ratio is the only margin asked for", DEFINITION),
+    Equation(
+        "needed_difference_alone", "N_L", "N_d", "NPSH needed: the difference is the only margin asked for", DEFINITION
+    ),
     Equation("needed_greater", "N_L", "max(N_r, N_d)", "NPSH needed, the greater governs", DEFINITION),
 )

@@ -37,28 +37,25 @@ def needed(entry: Entry) -> Needed:
     required = entry.value(npsh.value, "NPSHR", f"NPSH required, {npsh.basis}", note=_curve(npsh))
     at_flow = entry.typed(npsh.at_flow, "Q_r", "Flow at which NPSH required is stated")
     words: list[str] = []
-    ratio = difference = None
+    by_ratio = by_difference = None
     if asked.ratio is not None:
-        ratio = {"m_r": entry.value(asked.ratio, "m_r", "Margin ratio asked for"), "NPSHR": required}
+        ratio = entry.value(asked.ratio, "m_r", "Margin ratio asked for")
+        by_ratio = ledger.apply("needed_by_ratio", {"m_r": ratio, "NPSHR": required})
         words.append(f"{asked.ratio.text} × NPSHR")
     if asked.difference is not None:
-        difference = {"m_d": entry.value(asked.difference, "m_d", "Margin difference asked for"), "NPSHR": required}
+        difference = entry.value(asked.difference, "m_d", "Margin difference asked for")
+        by_difference = ledger.apply("needed_by_difference", {"m_d": difference, "NPSHR": required})
         words.append(f"NPSHR + {asked.difference.text}")
-    if ratio and difference:
-        by_ratio, by_difference = (
-            ledger.apply("needed_by_ratio", ratio),
-            ledger.apply("needed_by_difference", difference),
-        )
+    if by_ratio and by_difference:
         limit = ledger.apply("needed_greater", {"N_r": by_ratio, "N_d": by_difference})
         governs = "the ratio governs" if by_ratio.record == limit.record else "the difference governs"
-    elif ratio:
-        limit, governs = ledger.apply("needed_ratio_alone", ratio), "the ratio is the only margin asked for"
+    elif by_ratio:
+        limit = ledger.apply("needed_ratio_alone", {"N_r": by_ratio})
+        governs = "the ratio is the only margin asked for"
     else:
-        assert difference is not None, "source asks for a margin"
-        limit, governs = (
-            ledger.apply("needed_difference_alone", difference),
-            "the difference is the only margin asked for",
-        )
+        assert by_difference is not None, "source asks for a margin"
+        limit = ledger.apply("needed_difference_alone", {"N_d": by_difference})
+        governs = "the difference is the only margin asked for"
     criterion = "NPSH available at least " + (
         words[0] if len(words) == 1 else f"the greater of {words[0]} and {words[1]}"
     )
