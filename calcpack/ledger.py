@@ -11,7 +11,7 @@ from collections import Counter
 from collections.abc import Mapping, Sequence
 from decimal import Decimal
 from fractions import Fraction
-from typing import Any, Literal
+from typing import TYPE_CHECKING, Any, Literal
 
 from . import lookup, root
 from .arithmetic import InDecimal, InFloat, evaluate
@@ -23,7 +23,10 @@ from .number import headline, of_record
 from .quantity import COHERENT, PLANT, Quantity, Unit, parse
 from .references import DEFINITION, Cite
 from .symbols import NOMENCLATURE
-from .value import Kind, Line, Losses, Part, Provenance, Row, Value, in_unit
+from .value import Kind, Line, Losses, Part, Row, Value, in_unit
+
+if TYPE_CHECKING:
+    from .source.inputs import Provenance
 
 Operands = Mapping[str, "Value | Sequence[Value]"]
 #: Sections of the package that hold addressed values.

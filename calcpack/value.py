@@ -6,13 +6,16 @@ import hashlib
 from dataclasses import dataclass, field
 from decimal import Decimal
 from fractions import Fraction
-from typing import Literal
+from typing import TYPE_CHECKING, Literal
 
 from . import formula
 from .formula import Node
 from .number import decimal
 from .references import DEFINITION, Cite
 from .units import Unit
+
+if TYPE_CHECKING:
+    from .source.inputs import Provenance
 
 Kind = Literal["given", "constant", "conversion", "equation", "lookup", "root"]
 
@@ -27,17 +30,6 @@ class Value:
     shadow: float
     unit: Unit
     title: str
-
-
-@dataclass(frozen=True)
-class Provenance:
-    """Where an input comes from: source id and place in it, status and note, as the file states them."""
-
-    source: str = ""
-    place: str = ""
-    status: str = ""
-    note: str = ""
-    confirm: str = ""
 
 
 @dataclass(frozen=True)

@@ -10,8 +10,7 @@ from ..ledger import Ledger
 from ..lookup import OutOfRange
 from ..quantity import parse
 from ..source.inputs import Calculation, Element, Given
-from ..source.inputs import Provenance as Origin
-from ..value import Provenance, Value
+from ..value import Value
 
 
 class Place(Protocol):
@@ -42,15 +41,14 @@ class Entry:
         """Enter ``given`` as ``symbol`` and keep it as typed, for a look-up; ``note`` says what it holds for."""
         return self.ledger.given(
             symbol, title, given.quantity, text=given.text, key=given.key, file_line=given.line,
-            note=note, provenance=_provenance(given),
+            note=note, provenance=given,
         )  # fmt: skip
 
     def count(self, element: Element) -> Value:
         """The number of equal elements, a plain number of the file."""
-        p = element.provenance
         return self.ledger.given(
             "n", f"Number of equal elements, element {element.id}", parse(str(element.count), "ratio"), text=str(element.count),
-            key=f"{element.key}.count", file_line=element.line, provenance=_provenance(p),
+            key=f"{element.key}.count", file_line=element.line, provenance=element.provenance,
         )  # fmt: skip
 
     def absolute(self, given: Given, title: str, barometer: Callable[[], Value]) -> Value:
@@ -84,7 +82,3 @@ class Entry:
     def find(self, text: str, reason: str) -> None:
         """Record a finding, once."""
         self.findings.setdefault(text, reason)
-
-
-def _provenance(of: Origin) -> Provenance:
-    return Provenance(of.source, of.place, of.status, of.note, of.confirm)
