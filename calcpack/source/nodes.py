@@ -44,10 +44,6 @@ class Mapping:
         """The first value under ``key``."""
         return next((value for name, value in self.entries if name.text == key), None)
 
-    def mark_of(self, key: str) -> Mark:
-        """Where the key stands, or the mapping itself when it has none."""
-        return next((name.mark for name, _ in self.entries if name.text == key), self.mark)
-
 
 Node = Scalar | Sequence | Mapping
 

@@ -36,7 +36,6 @@ class Available:
     npsh: Value
     flow: Value
     temperature: Value
-    losses: Value | None = None
     doubt: str = ""
 
 
@@ -97,7 +96,7 @@ def design(entry: Entry, state: State, about: str) -> Available:
     npsh = entry.ledger.apply("npsh_design", {
         "H_s": top.surface_head, "z": top.static_head, "H_v": top.vapour_head, "h_L": lost,
     }, key_result=True)  # fmt: skip
-    return Available(about, npsh, top.flow, top.liquid.temperature, lost)
+    return Available(about, npsh, top.flow, top.liquid.temperature)
 
 
 def measured(entry: Entry, reading: Reading, about: str) -> Available:
