@@ -38,7 +38,7 @@ def _sides(r: Json) -> str:
         return "no two sides to compare"
     left, right, margin = (r[k]["headline"] for k in ("left", "right", "margin"))
     percent = f" ({r['margin']['percent']} %)" if r["margin"]["percent"] else ""
-    return f"{left['text']} {left['unit']} {r['relation']} {right['text']} {right['unit']}; margin {margin['text']} {margin['unit']}{percent}"
+    return f"{left['text']} {left['unit']}, to be {r['relation']} {right['text']} {right['unit']}; margin {margin['text']} {margin['unit']}{percent}"
 
 
 def _lines(record: Json) -> list[Json]:

@@ -54,7 +54,7 @@ def _check(ledger: Ledger, c: Check, address: str, references: References) -> Js
         "verdict": c.verdict,
         "reason": c.reason,
         "criterion": c.criterion,
-        "source": "; ".join(text for text in (c.source, own) if text) or "no source stated",
+        "source": f"{c.source or 'criterion: no source stated'}; form of the rule: {own}",
         "margin": margin,
     }
 
