@@ -14,11 +14,25 @@ from pathlib import Path
 from typing import TYPE_CHECKING, Any
 
 if TYPE_CHECKING:
-    from .reader import Report
+    from .faults import InputFault
+    from .reader import NotAPackage, Report
     from .source.inputs import Calculation
 
 __version__ = "0.1.0"
-__all__ = ["Package", "__version__", "assess", "draft", "verify"]
+__all__ = ["InputFault", "NotAPackage", "Package", "__version__", "assess", "draft", "verify"]
+
+
+def __getattr__(name: str) -> type[Exception]:
+    """The two exceptions a caller may want to catch, loaded when first asked for."""
+    if name == "InputFault":
+        from .faults import InputFault
+
+        return InputFault
+    if name == "NotAPackage":
+        from .reader import NotAPackage
+
+        return NotAPackage
+    raise AttributeError(f"module {__name__!r} has no attribute {name!r}")
 
 
 @dataclass(frozen=True)
@@ -32,7 +46,7 @@ class Package:
 def assess(path: str | Path) -> dict[str, Any]:
     """Compute and judge an input file; returns its record.
 
-    Raises :class:`calcpack.faults.InputFault`, which carries every fault found, where the file cannot be used.
+    Raises :class:`calcpack.InputFault`, which carries every fault found, where the file cannot be used.
     """
     from .source import load
 
@@ -40,7 +54,7 @@ def assess(path: str | Path) -> dict[str, Any]:
 
 
 def draft(path: str | Path) -> Package:
-    """Compute an input file and set its pages.  Raises :class:`calcpack.faults.InputFault` as :func:`assess` does."""
+    """Compute an input file and set its pages.  Raises :class:`calcpack.InputFault` as :func:`assess` does."""
     from .page.pdf import render
     from .record import canonical
     from .source import load
@@ -57,7 +71,7 @@ def draft(path: str | Path) -> Package:
 def verify(pdf: bytes) -> Report:
     """Read a package back from its visible pages, recompute every line and compare.
 
-    Raises :class:`calcpack.reader.NotAPackage` for anything that is not a package of calcpack.
+    Raises :class:`calcpack.NotAPackage` for anything that is not a package of calcpack.
     """
     from .reader import verify as read_back
 
@@ -68,8 +82,8 @@ def _record(calculation: Calculation) -> dict[str, Any]:
     from decimal import localcontext
 
     from .arithmetic import DECIMAL
+    from .assessment import run
     from .record import assemble
-    from .study import run
 
     # Whatever decimal context the caller works in, ours is our own.
     with localcontext(DECIMAL):

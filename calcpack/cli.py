@@ -1,4 +1,4 @@
-"""The commands: draft, assess, verify."""
+"""The commands: new, assess, draft, verify."""
 
 from __future__ import annotations
 
@@ -9,8 +9,8 @@ from pathlib import Path
 from typing import Any, NoReturn
 
 from . import __version__, assess, draft, verify
-from .faults import Fault, InputFault
-from .output import resolve, write
+from .faults import Fault, InputFault, visible
+from .output import begin, resolve, write
 
 #: Bytes beyond which no file is a package.
 LARGEST_PACKAGE = 200 * 10**6
@@ -23,7 +23,7 @@ _EPILOG = (
 
 class _Parser(argparse.ArgumentParser):
     def error(self, message: str) -> NoReturn:
-        print(f"calcpack: {message}. See `calcpack --help`.", file=sys.stderr)
+        print(f"calcpack: {visible(message)}. See `calcpack --help`.", file=sys.stderr)
         raise SystemExit(AT_FAULT)
 
 
@@ -33,6 +33,8 @@ def _parser() -> argparse.ArgumentParser:
     )
     parser.add_argument("--version", action="version", version=f"calcpack {__version__}")
     commands = parser.add_subparsers(dest="command", required=True, metavar="COMMAND", parser_class=_Parser)
+    beginning = commands.add_parser("new", help="write a small input file to begin with", epilog=_EPILOG)
+    beginning.add_argument("input", type=Path, metavar="FILE.yaml", help="the file to write; none is overwritten")
     drafting = commands.add_parser("draft", help="make the package (PDF) of an input file", epilog=_EPILOG)
     drafting.add_argument("input", type=Path, metavar="INPUT", help="the input file (YAML)")
     drafting.add_argument(
@@ -59,16 +61,33 @@ def run(arguments: Sequence[str]) -> int:
     except SystemExit as stop:
         return int(stop.code or 0)
     try:
-        if asked.command == "draft":
-            return _draft(asked.input, asked.output)
-        if asked.command == "assess":
-            return _assess(asked.input, asked.json)
+        match asked.command:
+            case "new":
+                return _new(asked.input)
+            case "draft":
+                return _draft(asked.input, asked.output)
+            case "assess":
+                return _assess(asked.input, asked.json)
         return _verify(asked.package)
     except InputFault as fault:
         print(str(fault), file=sys.stderr)
         count = len(fault.faults)
-        print(f"calcpack: {count} fault{'s' if count > 1 else ''} in the input; nothing was written.", file=sys.stderr)
+        print(f"calcpack: {count} fault{'s' if count > 1 else ''}; {_LEFT_UNDONE[asked.command]}.", file=sys.stderr)
         return AT_FAULT
+
+
+_LEFT_UNDONE = {
+    "new": "nothing was written",
+    "draft": "nothing was written",
+    "assess": "nothing was computed",
+    "verify": "nothing was verified",
+}
+
+
+def _new(target: Path) -> int:
+    begin(target)
+    print(visible(str(target)))
+    return PASSED
 
 
 def _passed(record: dict[str, Any]) -> int:
@@ -77,7 +96,7 @@ def _passed(record: dict[str, Any]) -> int:
 
 def _draft(source: Path, output: Path | None) -> int:
     target = output or Path(Path(source.name or "package").stem + ".pdf")
-    real = resolve(target, source)
+    real = resolve(target, source, "-o")
     _progress("computing and setting the pages")
     try:
         package = draft(source)
@@ -87,9 +106,9 @@ def _draft(source: Path, output: Path | None) -> int:
         raise InputFault([_missing_library(error)]) from None
     finally:
         _progress("")
-    write(real, package.pdf)
+    write(real, package.pdf, "-o")
     print(_verdict(package.record))
-    print(target)
+    print(visible(str(target)))
     return _passed(package.record)
 
 
@@ -115,13 +134,17 @@ def _verify(package: Path) -> int:
         if package.exists() and package.stat().st_size > LARGEST_PACKAGE:
             raise NotAPackage(f"a file larger than {LARGEST_PACKAGE // 10**6} MB")
         report = verify(package.read_bytes())
-    except (OSError, NotAPackage) as error:
-        reason = error.strerror if isinstance(error, OSError) else str(error)
-        raise InputFault(
-            [Fault(str(package), 0, 0, "", "a package made by calcpack", reason or "nothing readable")]
-        ) from None
+    except FileNotFoundError:
+        raise _no_package(package, "no file of that name") from None
+    except (OSError, ValueError) as error:
+        reason = getattr(error, "strerror", None) or str(error)
+        raise _no_package(package, reason[:1].lower() + reason[1:]) from None
     print(report)
     return PASSED if report.ok else DISAGREES
+
+
+def _no_package(path: Path, found: str) -> InputFault:
+    return InputFault([Fault(visible(str(path)), 0, 0, "", "a package, the PDF that `calcpack draft` makes", found)])
 
 
 def _verdict(record: dict[str, Any]) -> str:

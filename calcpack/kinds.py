@@ -17,7 +17,8 @@ class Kind:
 
     ``dimensions`` are those a unit may have, ``references`` what a pressure may count from.  ``ranges`` holds for each
     dimension the lowest and the highest size met in practice, with units, empty where the sign says enough: a number
-    beyond them is a slip of the hand or of the unit (common practice, no source).
+    beyond them is a slip of the hand or of the unit (common practice, no source).  ``units`` are those a ratio may
+    have; empty: a plain number.
     """
 
     dimensions: tuple[str, ...]
@@ -26,6 +27,7 @@ class Kind:
     examples: tuple[str, ...]
     references: tuple[Reference, ...] = ()
     ranges: tuple[tuple[str, str], ...] = ()
+    units: tuple[str, ...] = ()
 
 
 _LENGTH = ("length",)
@@ -40,8 +42,10 @@ KINDS: dict[str, Kind] = {
     "bore": Kind(_LENGTH, "positive", "a diameter", ("202.7 mm", "14.5 in")),
     "diameter": Kind(_LENGTH, "positive", "a diameter", ("202.7 mm", "14.5 in"), ranges=(("2 mm", "20 m"),)),
     "roughness": Kind(_LENGTH, "not negative", "a roughness", ("0.05 mm", "0.0018 in"), ranges=(("", "100 mm"),)),
+    "depth": Kind(_LENGTH, "not negative", "a fall of the level", ("0.15 m", "6 in"), ranges=(("", "500 m"),)),
     "area": Kind(("area",), "positive", "an area", ("0.032 m²", "0.35 ft²")),
     "velocity": Kind(("velocity",), "any", "a velocity", ("1.7 m/s", "5.5 ft/s")),
+    "velocity_limit": Kind(("velocity",), "positive", "a velocity", ("2.4 m/s", "8 ft/s"), ranges=(("", "100 m/s"),)),
     "acceleration": Kind(("acceleration",), "any", "an acceleration", ("9.80665 m/s²",)),
     "flow": Kind(("flow",), "positive", "a flow", ("320 m³/h", "3600 gal/min"), ranges=(("1e-9 m³/s", "1000 m³/s"),)),
     "pressure": Kind(
@@ -75,6 +79,9 @@ KINDS: dict[str, Kind] = {
         ("-13.5 kPa gauge", "4 inHg vacuum"),
         ("gauge", "vacuum"),
         (("", "100 MPa"),),
+    ),
+    "gauge": Kind(
+        _PRESSURE, "any", "a gauge pressure", ("10 kPa gauge", "1.5 psi gauge"), ("gauge",), (("", "100 MPa"),)
     ),
     "pressure_difference": Kind(
         _PRESSURE, "not negative", "a pressure difference, without gauge or absolute", ("4 kPa", "0.6 psi")
@@ -115,14 +122,27 @@ KINDS: dict[str, Kind] = {
     "temperature_difference": Kind(("temperature",), "positive", "a step of temperature", ("5 K",)),
     "lapse_rate": Kind(("lapse_rate",), "any", "a lapse rate", ("0.0065 K/m",)),
     "speed": Kind(("speed",), "positive", "a speed of rotation", ("1480 r/min",), ranges=(("", "100000 r/min"),)),
-    "percentage": Kind(_RATIO, "not negative", "a percentage", ("10 %",), ranges=(("", "200 %"),)),
-    "ratio": Kind(_RATIO, "positive", "a plain number above zero, without a unit", ("1.10",)),
-    "margin_ratio": Kind(
-        _RATIO, "positive", "a plain number above zero, without a unit", ("1.10",), ranges=(("", "100"),)
+    "percentage": Kind(_RATIO, "not negative", "a percentage", ("10 %",), ranges=(("", "200 %"),), units=("%",)),
+    "mass_fraction": Kind(
+        _RATIO, "not negative", "a mass fraction", ("35 %", "350 g/kg"), ranges=(("", "99 %"),), units=("%", "g/kg")
     ),
+    "salinity": Kind(_RATIO, "not negative", "a salinity", ("35 g/kg",), ranges=(("", "300 g/kg"),), units=("g/kg",)),
+    "ratio": Kind(_RATIO, "positive", "a plain number above zero, without a unit", ("1.10",)),
+    "factor": Kind(_RATIO, "positive", "a plain number above zero, without a unit", ("1.10",), ranges=(("", "100"),)),
     "coefficient": Kind(
         _RATIO, "not negative", "a plain number, zero or more, without a unit", ("0.10",), ranges=(("", "100000"),)
     ),
+    "diameters": Kind(
+        _RATIO, "not negative", "a plain number of diameters, without a unit", ("5",), ranges=(("", "10000"),)
+    ),
+    "flow_coefficient": Kind(
+        _RATIO, "positive", "a plain number above zero, without a unit", ("640",), ranges=(("", "1000000"),)
+    ),
+    "hazen_williams_C": Kind(_RATIO, "positive", "a plain number, without a unit", ("120",), ranges=(("20", "200"),)),
+    "exponent": Kind(_RATIO, "positive", "a plain number, without a unit", ("2",), ranges=(("1", "3"),)),
+    "specific_speed": Kind(
+        _RATIO, "positive", "a plain number above zero, without a unit", ("11000",), ranges=(("", "1000000"),)
+    ),
 }
 #: Kinds typed as a plain number.
-BARE = frozenset({"ratio", "margin_ratio", "coefficient"})
+BARE = frozenset(name for name, kind in KINDS.items() if kind.dimensions == _RATIO and not kind.units)

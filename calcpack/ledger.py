@@ -10,7 +10,6 @@ from __future__ import annotations
 from collections import Counter
 from collections.abc import Mapping, Sequence
 from decimal import Decimal
-from fractions import Fraction
 from typing import TYPE_CHECKING, Any, Literal
 
 from . import lookup, root
@@ -23,7 +22,7 @@ from .number import headline, of_record
 from .quantity import COHERENT, PLANT, Quantity, Unit, parse
 from .references import DEFINITION, Cite
 from .symbols import NOMENCLATURE
-from .value import Kind, Line, Losses, Part, Row, Value, in_unit
+from .value import Kind, Line, Losses, Part, Row, Value, in_si, in_unit
 
 if TYPE_CHECKING:
     from .source.inputs import Provenance
@@ -116,7 +115,7 @@ class Ledger:
                 Line(
                     kind,
                     value,
-                    given=text or f"{quantity.text} {quantity.unit.name}",
+                    given=text or f"{quantity.text} {quantity.unit.name}".removesuffix(" 1"),
                     cite=cite,
                     key=key,
                     file_line=file_line,
@@ -133,18 +132,18 @@ class Ledger:
         quantity = parse(c.text, NOMENCLATURE[symbol].kind)
         return self.convert(self.given(symbol, c.title, quantity, kind="constant", cite=c.cite))
 
-    def convert(self, value: Value) -> Value:
-        """``value`` in the coherent unit of the display system: itself, or a conversion line with its exact factor."""
-        to = self.coherent(value.symbol)
+    def convert(self, value: Value, symbol: str = "") -> Value:
+        """``value`` in the coherent unit of its symbol, or of another ``symbol``: itself, or a conversion line, exact."""
+        to = self.coherent(symbol or value.symbol)
         if value.unit.name == to.name:
             return value
-        made = self._made.get(("convert", value.address))
+        made = self._made.get(("convert", value.address, to.name))
         if made is None:
             tree = conversion_tree(value.symbol, value.unit, to)
             record = of_record(evaluate(tree, {value.symbol: value.record}, InDecimal()))
-            title = f"{value.title.removesuffix(', looked up')}, in {to.name}"
+            title = f"{value.title.removesuffix(', looked up')}, {'as a fraction' if to.name == '1' else f'in {to.name}'}"
             made = Value(self._address(COMPUTATION), value.symbol, record, value.shadow, to, title)
-            self._made["convert", value.address] = made
+            self._made["convert", value.address, to.name] = made
             if value.address in self.used:
                 self.used[value.address] = made
             self._write(Line("conversion", made, tree, ((value.symbol, value),)))
@@ -188,26 +187,29 @@ class Ledger:
             key_result=key_result,
         )
 
-    def look_up(self, name: str, temperature: Value) -> Value:
-        """A property of water at ``temperature``, in SI from the library, then converted where the display asks.
+    def look_up(
+        self, liquid: str, name: str, temperature: Value, fraction: Value | None = None, title: str = ""
+    ) -> Value:
+        """A property of ``liquid`` at ``temperature``, of a mixture at the mass ``fraction`` dissolved; in SI from the library,
+        then converted where the display asks.
 
-        The temperature is taken as typed, exactly: no rounded kelvin stands between, for vapour pressure moves by 3 % a kelvin.
+        Both are taken as typed, exactly: no rounded kelvin stands between, for vapour pressure moves by 3 % a kelvin.
 
         Raises :class:`~calcpack.lookup.OutOfRange` outside the formulation's validity.
         """
-        p = lookup.PROPERTIES[name]
-        identity = ("look_up", name, temperature.address)
+        source, p = lookup.LIQUIDS[liquid], lookup.PROPERTIES[name]
+        operands = (("T", temperature), *((("w", fraction),) if fraction else ()))
+        identity = ("look_up", liquid, name, *(v.address for _, v in operands))
         if identity not in self._made:
-            kelvin = float((Fraction(temperature.record) + temperature.unit.offset) * temperature.unit.factor)
-            record = of_record(Decimal(lookup.water(name, kelvin)))
-            shadow = lookup.water(name, temperature.shadow)
+            record = lookup.liquid(liquid, name, *(float(in_si(v)) for _, v in operands))
+            shadow = lookup.liquid(liquid, name, *(v.shadow for _, v in operands))
             value = Value(
                 self._address(COMPUTATION),
                 p.symbol,
-                record,
+                of_record(Decimal(record)),
                 shadow,
                 COHERENT["SI"][NOMENCLATURE[p.symbol].kind],
-                p.title,
+                title or p.title,
             )
             self._made[identity] = value
             self._write(
@@ -215,11 +217,11 @@ class Ledger:
                     "lookup",
                     value,
                     None,
-                    (("T", temperature),),
-                    p.cite,
-                    "",
-                    function=p.function,
-                    library=lookup.library("CoolProp"),
+                    operands,
+                    source.cite(name),
+                    source.validity,
+                    function=p.function(source.mixture),
+                    library=f"{lookup.library('CoolProp')} ({source.called})",
                 )
             )
         return self.convert(self._made[identity])
@@ -237,8 +239,11 @@ class Ledger:
             self._write(Line("lookup", value, None, (), cite, "", function=place, library=library))
         return self.convert(self._made[identity])
 
-    def losses(self, title: str, rows: Sequence[tuple[str, str, Mapping[str, Value] | Value]], total: str) -> Value:
-        """Write a loss table: each row ``n K h_V`` from its values, or the value of a line above; then its sum."""
+    def losses(self, title: str, rows: Sequence[tuple[str, str, Mapping[str, Value] | Value]], total: str) -> Losses:
+        """Write a loss table: each row ``n K h_V`` from its values, or the value of a line above; then its sum.
+
+        The row worked in full is the first with ``n``, else the first with ``K``; where every row is a line above, none is.
+        """
         made = [
             Row(
                 label,
@@ -252,9 +257,11 @@ class Ledger:
             for label, element, content in rows
         ]
         sum_line = self._register(self._line(EQUATION[total], {"h": [row.line.value for row in made]}, ""))
-        worked = max(made, key=lambda row: ("n" in dict(row.line.operands), "K" in dict(row.line.operands))).label
-        self._place(Losses(title, tuple(made), sum_line, worked))
-        return sum_line.value
+        inside = [row for row, (_, _, content) in zip(made, rows, strict=True) if not isinstance(content, Value)]
+        worked = max(inside, key=lambda row: "n" in dict(row.line.operands), default=None)
+        table = Losses(title, tuple(made), sum_line, worked.label if worked else "")
+        self._place(table)
+        return table
 
     def headline(self, value: Value) -> tuple[Decimal, Unit]:
         """``value`` in plant units at the decimals usual there."""

@@ -1,4 +1,4 @@
-"""What is looked up rather than computed: properties of water, pipe bores, and tables of constants.
+"""What is looked up rather than computed: properties of liquids, pipe bores, and tables of constants.
 
 The only room that knows CoolProp and the pipe tables; both are imported when first asked for.
 """
@@ -9,8 +9,9 @@ from collections.abc import Mapping
 from dataclasses import dataclass
 from functools import cache
 from importlib.metadata import version
+from typing import Literal
 
-from .references import PRACTICE, Cite
+from .references import DEFINITION, PRACTICE, Cite
 
 
 class OutOfRange(ValueError):
@@ -19,52 +20,166 @@ class OutOfRange(ValueError):
 
 @dataclass(frozen=True)
 class Property:
-    """A property of saturated liquid water as a function of temperature.
+    """A property of a liquid as a function of its temperature, and of the mass fraction ``w`` in a mixture with water.
 
-    Source: CoolProp (reference equation named in ``cite``); validity of the formulation in ``lowest``..``highest``, K.
+    ``output`` is CoolProp's name of it, ``place`` what a pure liquid's formulation is asked for.
     """
 
     name: str
     symbol: str
     output: str
-    function: str
     title: str
-    cite: Cite
+    place: str
+
+    def function(self, mixture: str) -> str:
+        """How the look-up is written: of the saturated liquid, or of a mixture at any pressure."""
+        return f"{self.symbol}(T, w)" if mixture else f"{self.symbol.partition('_')[0]}_sat(T)"
 
 
-#: Water between its triple point and its critical point, K (IAPWS R6-95); the tool stops at 600 K, short of it.
-WATER_RANGE = (273.16, 600.0)
 PROPERTIES: Mapping[str, Property] = {
     p.name: p
     for p in (
-        Property(
-            "vapour_pressure",
-            "p_v",
-            "P",
-            "p_sat(T)",
-            "Vapour pressure, absolute, looked up",
-            Cite("iapws95", "saturation line"),
-        ),
-        Property("density", "rho", "D", "rho_sat(T)", "Density, looked up", Cite("iapws95", "saturated liquid")),
-        Property(
-            "viscosity", "mu", "V", "mu_sat(T)", "Dynamic viscosity, looked up", Cite("iapws08", "saturated liquid")
-        ),
+        Property("vapour_pressure", "p_v", "P", "Vapour pressure, absolute, looked up", "saturation line"),
+        Property("density", "rho", "D", "Density, looked up", "saturated liquid"),
+        Property("viscosity", "mu", "V", "Dynamic viscosity, looked up", "saturated liquid"),
+    )
+}
+#: Pressure, Pa, at which CoolProp is asked for a mixture: it takes no part, and keeps hot sea water liquid.
+MIXTURE_PRESSURE = 1e6
+
+
+@dataclass(frozen=True)
+class LiquidSource:
+    """A liquid that CoolProp knows as ``fluid``, pure or dissolved in water, between two temperatures, K.
+
+    ``state`` is the source of density and vapour pressure, ``flow`` that of viscosity, both keys of the references;
+    ``flow`` is empty where CoolProp has no viscosity, or one that other sources contradict.  ``mixture`` is the key of the
+    input file that says how much is dissolved, at most ``most``; ``solute`` its relative molecular mass, empty for a salt:
+    its ions do not follow Raoult's law.  A mixture ends at its freezing point where CoolProp knows it (``freezes``).
+    """
+
+    name: str
+    fluid: str
+    lowest: float
+    highest: float
+    state: str
+    flow: str
+    mixture: Literal["", "mass_fraction", "salinity"] = ""
+    most: float = 0.0
+    solute: str = ""
+    freezes: bool = False
+
+    def offers(self, name: str) -> bool:
+        """Whether the property ``name`` is looked up; the vapour pressure of a mixture is that of its water."""
+        return not self.mixture if name == "vapour_pressure" else name == "density" or bool(self.flow)
+
+    @property
+    def raoult(self) -> bool:
+        """Whether Raoult's law on its water is offered for its vapour pressure, as for sea water a published form of it."""
+        return bool(self.solute) or self.mixture == "salinity"
+
+    def cite(self, name: str) -> Cite:
+        """The source of the property ``name``."""
+        return Cite(self.flow if name == "viscosity" else self.state, "" if self.mixture else PROPERTIES[name].place)
+
+    @property
+    def validity(self) -> str:
+        """The range of the formulation as used here."""
+        if not self.mixture:
+            return f"{self.lowest:g} K to {self.highest:g} K"
+        lowest = "freezing" if self.freezes else f"{self.lowest:g} K"
+        return f"{lowest} to {self.highest:g} K, at most {100 * self.most:g} % dissolved"
+
+    @property
+    def called(self) -> str:
+        """How CoolProp is asked for it."""
+        return f"INCOMP::{self.fluid} at {MIXTURE_PRESSURE / 1e6:g} MPa" if self.mixture else self.fluid
+
+
+def _brine(name: str, fluid: str, most: float) -> LiquidSource:
+    return LiquidSource(
+        f"{name} brine", fluid, 173.15, 313.15, "Melinder2010", "Melinder2010", "mass_fraction", most, freezes=True
+    )
+
+
+def _glycol(name: str, fluid: str, highest: float, solute: str) -> LiquidSource:
+    return LiquidSource(
+        name, fluid, 173.15, highest, "Melinder2010", "Melinder2010", "mass_fraction", 0.6, solute, freezes=True
+    )
+
+
+#: Every liquid that is looked up.  A pure one begins at its triple point, or where its viscosity does, and ends at about
+#: 0.93 of its critical temperature: beyond that no pump is laid out by saturated liquid.  Solutes that evaporate with the
+#: water (ammonia, alcohols) are not offered: neither Raoult's law on the water nor pure water is safe for them.
+LIQUIDS: Mapping[str, LiquidSource] = {
+    liquid.name: liquid
+    for liquid in (
+        LiquidSource("water", "Water", 273.16, 600, "iapws95", "iapws08"),
+        LiquidSource("ammonia", "Ammonia", 196, 375, "Gao-JPCRD-2020", "Fenghour-JPCRD-1995"),
+        LiquidSource("propane", "n-Propane", 87, 340, "Lemmon-JCED-2009", "Vogel-JPCRD-1998"),
+        LiquidSource("propylene", "Propylene", 89, 335, "Lemmon-PROPYLENE-2013", ""),
+        LiquidSource("n-butane", "n-Butane", 136, 395, "Buecker-JPCRD-2006B", "Vogel-HTHP-1999"),
+        LiquidSource("isobutane", "IsoButane", 115, 375, "Buecker-JPCRD-2006B", "Vogel-IJT-2000"),
+        LiquidSource("n-pentane", "n-Pentane", 144, 435, "Thol-FPE-2019-alkanes-pentane", ""),
+        LiquidSource("isopentane", "Isopentane", 114, 425, "Lemmon-JCED-2006", ""),
+        LiquidSource("cyclopentane", "Cyclopentane", 181, 475, "Gedanitz-JCED-2015", ""),
+        LiquidSource("n-hexane", "n-Hexane", 179, 470, "Thol-FPE-2019-alkanes-hexane", "Michailidou-JPCRD-2013-Hexane"),
+        LiquidSource("cyclohexane", "CycloHexane", 280, 510, "Zhou-JPCRD-2014", "Tariq-JPCRD-2014-Cyclohexane"),
+        LiquidSource("n-heptane", "n-Heptane", 184, 500, "Span-IJT-2003B", "Michailidou-JPCRD-2014-Heptane"),
+        LiquidSource("n-octane", "n-Octane", 217, 525, "Beckmueller-IJT-2019-octane", "Huber-FPE-2004"),
+        LiquidSource("n-decane", "n-Decane", 244, 570, "Lemmon-JCED-2006", "Huber-FPE-2004"),
+        LiquidSource("n-dodecane", "n-Dodecane", 265, 610, "Lemmon-EF-2004", "Huber-EF-2004"),
+        LiquidSource("benzene", "Benzene", 280, 520, "Thol-HTHP-2012", "Avgeri-JPCRD-2014-Benzene"),
+        LiquidSource("toluene", "Toluene", 179, 550, "Lemmon-JCED-2006", "Avgeri-JPCRD-2015-Toluene"),
+        LiquidSource("o-xylene", "o-Xylene", 274, 585, "Zhou-JPCRD-2012", "Cao-JPCRD-2016-oxylene"),
+        LiquidSource("m-xylene", "m-Xylene", 274, 570, "Zhou-JPCRD-2012", "Cao-JPCRD-2016-mxylene"),
+        LiquidSource("p-xylene", "p-Xylene", 287, 570, "Zhou-JPCRD-2012", "Balogun-JPCRD-2015-pxylene"),
+        LiquidSource("methanol", "Methanol", 177, 475, "Piazza-FPE-2013", "Xiang-JPCRD-2006"),
+        LiquidSource("ethanol", "Ethanol", 160, 475, "Schroeder-JPCRD-2014", "Kiselev-IECR-2005"),
+        LiquidSource("acetone", "Acetone", 179, 470, "Lemmon-JCED-2006", ""),
+        LiquidSource("R134a", "R134a", 171, 345, "TillnerRoth-JPCRD-1994", "Huber-IECR-2003"),
+        LiquidSource("sea water", "MITSW", 273.15, 393.15, "Sharqawy2010", "Sharqawy2010", "salinity", 0.12),
+        _glycol("ethylene glycol", "MEG", 373.15, "62.068"),
+        _glycol("propylene glycol", "MPG", 373.15, "76.095"),
+        _glycol("glycerol", "MGL", 313.15, "92.094"),
+        _brine("calcium chloride", "MCA", 0.3),
+        _brine("sodium chloride", "MNA", 0.23),
+        _brine("magnesium chloride", "MMG", 0.21),  # its eutectic; the correlation runs on, to freezing at -100 °C
+        _brine("potassium carbonate", "MKC", 0.4),
+        _brine("potassium acetate", "MKA", 0.45),
+        _brine("potassium formate", "MKF", 0.48),
     )
 }
 
 
 @cache
-def water(name: str, kelvin: float) -> float:
-    """Property ``name`` of saturated liquid water at ``kelvin``, in SI (Pa, kg/m³, Pa·s).
+def liquid(of: str, name: str, kelvin: float, fraction: float = 0.0) -> float:
+    """Property ``name`` of the liquid ``of`` at ``kelvin``, in SI (Pa, kg/m³, Pa·s): saturated, or with ``fraction`` dissolved.
 
-    Raises :class:`OutOfRange` outside :data:`WATER_RANGE`.  Source: IAPWS-95 and IAPWS R12-08 through CoolProp.
+    Raises :class:`OutOfRange` outside the range of the formulation.  Source: CoolProp, which implements the formulations
+    that :data:`LIQUIDS` names.
     """
-    low, high = WATER_RANGE
-    if not low <= kelvin <= high:
-        raise OutOfRange(f"water is looked up between {low} K (0.01 °C) and {high:.0f} K")
+    source = LIQUIDS[of]
     from CoolProp.CoolProp import PropsSI
 
-    return float(PropsSI(PROPERTIES[name].output, "T", kelvin, "Q", 0, "Water"))
+    lowest = source.lowest
+    if source.mixture:
+        if fraction > source.most:
+            raise OutOfRange(f"{of} is looked up to {100 * source.most:g} % dissolved")
+        dissolved = f"INCOMP::{source.fluid}[{fraction!r}]"
+        if source.freezes:
+            lowest = PropsSI("T_freeze", "T", source.highest, "P", MIXTURE_PRESSURE, dissolved)
+    if not lowest <= kelvin <= source.highest:
+        begins = f"its freezing point, {_both(lowest)}," if source.freezes else _both(lowest)
+        raise OutOfRange(f"{of} is looked up between {begins} and {_both(source.highest)}")
+    output = PROPERTIES[name].output
+    if source.mixture:
+        return float(PropsSI(output, "T", kelvin, "P", MIXTURE_PRESSURE, dissolved))
+    return float(PropsSI(output, "T", kelvin, "Q", 0, source.fluid))
+
+
+def _both(kelvin: float) -> str:
+    return f"{kelvin:.2f} K ({kelvin - 273.15:.2f} °C)"
 
 
 @cache
@@ -156,18 +271,15 @@ CONSTANTS: Mapping[str, Constant] = {
         Constant(
             "eps_c", "0.00015 ft", "Roughness the fitting set takes for clean steel", Cite("crane09", "0.0018 in")
         ),
+        Constant("T_w", "273.16 K", "Triple point of water", Cite("iapws95")),
+        Constant("M_w", "18.015", "Relative molecular mass of water", Cite("ciaaw")),
         Constant("dT", "5 K", "Step of temperature for the cost line", PRACTICE),
+        Constant("d_1", "1 in", "Diameter the constants of the fitting set refer to, exact", DEFINITION),
+        Constant("l_1", "1 ft", "Length the formula's number refers to, exact", DEFINITION),
+        Constant("Q_1", "1 ft³/s", "Flow the formula's number refers to, exact", DEFINITION),
+        Constant("dp_C", "1 psi", "Pressure drop at which Cv is the flow in gal/min, exact", Cite("flomatic")),
+        Constant("dp_K", "1 bar", "Pressure drop at which Kv is the flow in m³/h, exact", Cite("adca")),
+        Constant("rho_w", "999.1 kg/m³", "Density of the water of Cv (60 °F) and Kv (15 °C)", Cite("iapws95", "at 15 °C")),
+        Constant("dT_s", "2 K", "Step of temperature for the vessel's nearness to boiling", PRACTICE),
     )
-}
-
-#: Absolute roughness by material.
-ROUGHNESS: Mapping[str, tuple[str, Cite]] = {
-    "commercial steel": ("0.00015 ft", Cite("hi_edl", "table 3.A.1")),
-    "stainless steel": ("0.00005 ft", Cite("hi_edl", "table 3.A.1")),
-    "galvanised steel": ("0.0005 ft", Cite("hi_edl", "table 3.A.1")),
-    "cast iron": ("0.00085 ft", Cite("hi_edl", "table 3.A.1, uncoated")),
-    "cement-lined steel": ("0.005 ft", Cite("hi_edl", "table 3.A.1")),
-    "concrete": ("0.01 ft", Cite("hi_edl", "table 3.A.1, upper value")),
-    "plastic": ("0.000005 ft", Cite("hi_edl", "table 3.A.1, drawn tubing")),
-    "copper": ("0.000005 ft", Cite("hi_edl", "table 3.A.1, drawn tubing")),
 }

@@ -21,7 +21,7 @@ _MEANT = {
         "m³/h": "cbm/h|cmh|m³", "L/s": "lps", "L/min": "lpm", "gal/min": "gal",
         "cSt": "cst", "cP": "cp|cps", "lb/ft³": "lbs/ft³|pcf", "psi": "lb/in²|lbs", "kgf/cm²": "at",
         "mH2O": "mwc|mWC|m of water", "ftH2O": "ft of water", "inHg": '"Hg|in Hg|in. Hg', "mmHg": "mm Hg",
-        "r/min": "rev|r.p.m.", "%": "percent",
+        "r/min": "rev|r.p.m.", "%": "percent|wt%|wt %|% w/w", "g/kg": "psu|PSU|ppt|‰",
     }.items()
     for typed in words.split("|")
 }  # fmt: skip
@@ -44,9 +44,9 @@ class QuantityFault(ValueError):
 
 def with_units(number: str, kind: str) -> str:
     """``write `38 m` or `38 ft```: the number with the usual units of its kind."""
-    if kind == "percentage" and abs(Decimal(number)) < 1:
-        number = f"{(Decimal(number) * 100).normalize():f}"
     tails = [example.split(" ", 1)[1] for example in KINDS[kind].examples if " " in example]
+    if "%" in KINDS[kind].units and abs(Decimal(number)) < 1:
+        number, tails = f"{(Decimal(number) * 100).normalize():f}", ["%"]
     return "write " + listed(f"`{number} {tail}`" for tail in tails)
 
 

@@ -35,6 +35,8 @@ _MEASURES = {
     "speed": "a speed of rotation",
     "ratio": "a ratio",
 }
+#: The same of the units of a ratio.
+_SHARES = {"%": "a percentage", "g/kg": "a mass fraction"}
 
 _REFERENCES: dict[str, Reference] = {
     "gauge": "gauge",
@@ -95,8 +97,8 @@ def parse(text: str, kind: str) -> Quantity:
     found = unit(name)
     if kind == "temperature_difference" and found.offset:
         raise QuantityFault("unit", wanted, f"{shown(text)}: {found.name} has a zero of its own")
-    if found.kind not in asked.dimensions or (found.name == "%") != (kind == "percentage"):
-        measures = _MEASURES[found.kind] if found.name != "%" else "a percentage"
+    if found.kind not in asked.dimensions or (found.kind == "ratio" and found.name not in (asked.units or ("1",))):
+        measures = _SHARES.get(found.name) or _MEASURES[found.kind]
         raise QuantityFault("dimension", wanted, f"{shown(text)}: {found.name} measures {measures}")
     value = Quantity(Decimal(typed), typed, found, reference)
     _check_reference(value, asked, wanted, text)
@@ -148,12 +150,20 @@ def _size(text: str) -> Fraction:
     return Fraction(number) * unit(name or "1").factor
 
 
+def _limit(text: str, typed: Unit) -> str:
+    """A limit of a range, in the unit typed too: ``20 kPa (2.901 psi)``."""
+    if not text or text.rpartition(" ")[2] == typed.name or typed.name == "1":
+        return text
+    return f"{text} ({Decimal(f'{float(_size(text) / typed.factor - typed.offset):.4g}'):f} {typed.name})"
+
+
 def _check_size(value: Quantity, asked: Kind, text: str) -> None:
     """Refuse what is not met in practice: the unit is most often the slip."""
     hint = "check the unit and the decimal point" if value.unit.name != "1" else "check the decimal point"
     lowest, highest = asked.ranges[asked.dimensions.index(value.unit.kind)] if asked.ranges else ("", "")
     if (lowest and value.si() < _size(lowest)) or (highest and value.si() > _size(highest)):
-        limits = f"from {lowest} to {highest}" if lowest else f"of at most {highest}"
+        low, high = (_limit(each, value.unit) for each in (lowest, highest))
+        limits = f"from {low} to {high}" if lowest else f"of at most {high}"
         raise QuantityFault("range", f"{asked.words}, {limits}", shown(text), hint)
     if value.number and abs(value.number.adjusted()) > _LARGEST_POWER:
         raise QuantityFault("range", asked.words, f"{shown(text)}, which is no size met in practice", hint)

@@ -117,6 +117,7 @@ _TABLE: tuple[tuple[str, str, Fraction | int, str, str], ...] = (
     ("speed", "r/min", Fraction(1, 60), _SP811, "rpm rev/min 1/min"),
     ("ratio", "1", 1, _SI, ""),
     ("ratio", "%", Fraction(1, 100), "definition", ""),
+    ("ratio", "g/kg", Fraction(1, 1000), "definition", ""),
 )
 _OFFSETS = {"°C": Fraction("273.15"), "°F": Fraction("459.67")}
 UNITS: dict[str, Unit] = {
@@ -182,10 +183,12 @@ _DISPLAY: dict[str, tuple[str, str, str, int, str, int]] = {
     "kinematic_viscosity": ("m²/s", "ft²/s", "cSt", 4, "cSt", 4),
     "specific_weight": ("N/m³", "lbf/ft³", "kN/m³", 3, "lbf/ft³", 2),
     "temperature": ("K", "K", "°C", 2, "°F", 2),
+    "absolute_temperature": ("K", "°R", "°C", 2, "°F", 2),
     "temperature_difference": ("K", "K", "K", 2, "K", 2),
     "lapse_rate": ("K/m", "K/ft", "K/m", 4, "K/ft", 6),
     "ratio": ("1", "1", "1", 3, "1", 3),
     "speed": ("1/s", "1/s", "r/min", 0, "r/min", 0),
+    "specific_speed": ("1", "1", "1", 0, "1", 0),
 }
 #: Display system -> kind -> the unit of record, coherent, so that printed numbers go straight into a formula.
 COHERENT: dict[str, dict[str, Unit]] = {

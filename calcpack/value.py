@@ -95,10 +95,14 @@ class Part:
     blocks: list[Block] = field(default_factory=list)
 
 
+def in_si(value: Value) -> Fraction:
+    """The record of ``value`` in SI, exact."""
+    return (Fraction(value.record) + value.unit.offset) * value.unit.factor
+
+
 def in_unit(value: Value, to: Unit) -> Decimal:
     """The record of ``value`` in another unit of the same dimension, unrounded."""
-    si = (Fraction(value.record) + value.unit.offset) * value.unit.factor
-    return decimal(si / to.factor - to.offset)
+    return decimal(in_si(value) / to.factor - to.offset)
 
 
 def drift(value: Value) -> Decimal:

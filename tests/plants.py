@@ -9,9 +9,9 @@ from typing import Any
 
 import yaml
 
+from calcpack.assessment import Study, run
 from calcpack.record import assemble
 from calcpack.source import loads
-from calcpack.study import Study, run
 from calcpack.symbols import NOMENCLATURE
 from calcpack.units import COHERENT, unit
 from calcpack.value import Value

@@ -21,7 +21,7 @@ from calcpack.reader.losses import FACTORS, LOSS, RECORD, SUM, is_losses
 from calcpack.reader.rules import LEFT, MARGIN, RIGHT, TEXT
 from calcpack.record import assemble, canonical
 from calcpack.source import load
-from calcpack.study import run
+from calcpack.assessment import run
 
 SAMPLES = {path.name[0]: path for path in sorted((Path(__file__).parent.parent / "sample_inputs").glob("*.yaml"))}
 Record = dict[str, Any]

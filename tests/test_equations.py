@@ -19,18 +19,19 @@ import pint
 import pytest
 from plants import INTAKE, Document, plant, studied
 from test_checks import CHECKS
+from test_fitting_set import every
 
 import calcpack
-from calcpack import equations, fitting_set, lookup
+from calcpack import equations, lookup
 from calcpack.arithmetic import InDecimal, InFloat, OnArrays, evaluate
 from calcpack.catalog import EQUATION, EQUATIONS
 from calcpack.equations import Equation
-from calcpack.fitting_set import CRANE, coefficient
 from calcpack.formula import Bin, Call, Cmp, FormulaError, Name, Neg, Node, Num, names
 from calcpack.ledger import ROOT_RANGES, Ledger
 from calcpack.quantity import parse
 from calcpack.references import REFERENCES, Cite
 from calcpack.root import residual, solve
+from calcpack.roughness import AGED, NEW
 from calcpack.rules import Rule, margin, submergence, temperature
 from calcpack.symbols import KINDS, NOMENCLATURE
 from calcpack.units import COHERENT
@@ -70,10 +71,13 @@ def cites() -> list[Cite]:
     found = (
         [e.source for e in EQUATIONS]
         + [c.cite for c in lookup.CONSTANTS.values()]
-        + [p.cite for p in lookup.PROPERTIES.values()]
+        + [of.cite(name) for of in lookup.LIQUIDS.values() for name in lookup.PROPERTIES if of.offers(name)]
     )
     return (
-        found + [c.cite for c in CRANE.values()] + [c for _, c in lookup.ROUGHNESS.values()] + [r.cite for r in RULES]
+        found
+        + [c.cite for _, _, c in every()]
+        + [r.cite for r in (*NEW.values(), *AGED.values())]
+        + [r.cite for r in RULES]
     )
 
 
@@ -414,61 +418,6 @@ def test_the_fully_rough_factor_is_that_of_fluids(bore: float) -> None:
     assert ours == pytest.approx(fluids.ft_Crane(bore), rel=0.01 if bore > 0.04 else 0.015)
 
 
-#: Entry of the set -> its K by fluids' own function of Crane's method, over fluids' own f_T.
-MULTIPLES = {
-    ("valve", "gate"): lambda D: fluids.K_gate_valve_Crane(D1=D, D2=D, angle=0),
-    ("valve", "ball"): lambda D: fluids.K_ball_valve_Crane(D1=D, D2=D, angle=0),
-    ("valve", "plug"): lambda D: fluids.K_plug_valve_Crane(D1=D, D2=D, angle=0, style=0),
-    ("valve", "globe"): lambda D: fluids.K_globe_valve_Crane(D1=D, D2=D),
-    ("valve", "swing_check"): lambda D: fluids.K_swing_check_valve_Crane(D=D, angled=True),
-    ("valve", "foot_poppet"): lambda D: fluids.K_foot_valve_Crane(D=D, style=0),
-    ("valve", "foot_hinged"): lambda D: fluids.K_foot_valve_Crane(D=D, style=1),
-    ("elbow", "90 long"): lambda D: fluids.bend_rounded_Crane(Di=D, angle=90, bend_diameters=1.5),
-}
-
-
-@pytest.mark.parametrize("entry", MULTIPLES, ids=lambda e: " ".join(e))
-@pytest.mark.parametrize("bore", [0.1023, 0.2027, 0.3873])
-def test_a_fitting_is_that_of_fluids(entry: tuple[str, str], bore: float) -> None:
-    found = coefficient("crane", *entry, bore / 0.0254)
-    # fluids draws a smooth curve through Crane's bends: 14.06 where the table has 14.
-    room = 0.005 if entry[0] == "elbow" else 1e-9
-    assert found is not None and float(found.m) == pytest.approx(
-        MULTIPLES[entry](bore) / fluids.ft_Crane(bore), rel=room
-    )
-
-
-@pytest.mark.parametrize("nps", (2, 3, 4, 6, 8, 10, 12, 14, 16, 18, 20, 24))
-def test_a_butterfly_valve_is_that_of_its_nominal_size(nps: int) -> None:
-    """Crane lists 2 to 8, 10 to 14 and 16 to 24 in; fluids takes the range by the bore, here that of a standard wall."""
-    found = coefficient("crane", "valve", "butterfly", nps)
-    assert found is not None and found.m == ("45" if nps <= 8 else "35" if nps <= 14 else "25")
-    bore = float(lookup.bore(f"NPS {nps}", "STD").millimetres) / 1000
-    oracle = fluids.K_butterfly_valve_Crane(D=bore, style=0) / fluids.ft_Crane(bore)
-    assert float(found.m) == pytest.approx(oracle, rel=1e-9)
-
-
-ENTRANCES = (
-    ("flush", lambda: fluids.entrance_sharp(method="Crane")),
-    ("inward", lambda: fluids.entrance_distance(Di=0.2, method="Crane")),
-    ("bell", lambda: fluids.entrance_rounded(Di=0.2, rc=0.03, method="Crane")),
-)
-
-
-@pytest.mark.parametrize(("shape", "oracle"), ENTRANCES, ids=[e[0] for e in ENTRANCES])
-def test_an_entrance_is_that_of_fluids(shape: str, oracle: Any) -> None:
-    found = coefficient("crane", "entrance", shape, 8)
-    assert found is not None and float(found.K) == pytest.approx(oracle(), rel=1e-9)
-
-
-def test_a_fitting_has_a_multiple_or_a_coefficient_and_a_title() -> None:
-    assert fitting_set.SETS.keys() == fitting_set.SET_NAMES.keys()
-    for entry in CRANE.values():
-        assert bool(entry.m) != bool(entry.K) and entry.title and float(entry.m or entry.K) > 0
-    assert coefficient("crane", "elbow", "45 long", 8) is None
-    assert coefficient("crane", "valve", "butterfly", 30) is None
-
-
 @pytest.mark.parametrize("metres", [-5000, -400, 0, 1, 500, 1609.344, 3000, 5000, 8848, 11000])
 def test_the_standard_atmosphere_is_that_of_fluids(metres: float) -> None:
     """On the geometric altitude, to 1 Pa."""
@@ -505,25 +454,6 @@ def test_a_bore_is_that_of_the_table(size: str, schedule: str) -> None:
     assert float(found.millimetres) == pytest.approx(inside * 1000, abs=0.005)
     assert float(found.millimetres) == pytest.approx((outside - 2 * wall) * 1000, abs=0.01)
     assert f"{size} schedule {schedule}" in found.place
-
-
-#: Hydraulic Institute, Engineering Data Library, table 3.A.1, its column in millimetres; ours stands in feet.
-ROUGHNESS_MM = {
-    "commercial steel": 0.0457,
-    "stainless steel": 0.015,
-    "galvanised steel": 0.152,
-    "cast iron": 0.26,
-    "cement-lined steel": 1.5,
-    "concrete": 3.05,
-    "plastic": 0.00152,
-    "copper": 0.00152,
-}
-
-
-def test_a_roughness_is_that_of_the_table_s_other_column() -> None:
-    assert {m: float(parse(text, "roughness").si()) for m, (text, _) in lookup.ROUGHNESS.items()} == pytest.approx(
-        {m: mm / 1000 for m, mm in ROUGHNESS_MM.items()}, rel=0.02
-    )
 
 
 def test_dn_and_nps_are_the_same_pipe() -> None:
@@ -567,7 +497,7 @@ def test_looked_up_properties_are_consistent_with_the_library_s_derived_outputs(
     """Through other inputs than the look-up's own: from pressure back to temperature, from volume, from density."""
     from CoolProp.CoolProp import PropsSI
 
-    pressure, density, viscosity = (lookup.water(n, kelvin) for n in ("vapour_pressure", "density", "viscosity"))
+    pressure, density, viscosity = (lookup.liquid("water", n, kelvin) for n in ("vapour_pressure", "density", "viscosity"))
     assert PropsSI("T", "P", pressure, "Q", 0, "Water") == pytest.approx(kelvin, rel=1e-7)
     assert PropsSI("D", "P", pressure, "Q", 0, "Water") == pytest.approx(density, rel=1e-6)
     assert PropsSI("V", "T", kelvin, "D", density, "Water") == pytest.approx(viscosity, rel=1e-6)
@@ -587,7 +517,7 @@ def test_the_library_gives_the_published_viscosity() -> None:
 @pytest.mark.parametrize("kelvin", [273.15, 600.001, -5.0, 0.0, 1e9])
 def test_water_outside_its_range_is_refused(name: str, kelvin: float) -> None:
     with pytest.raises(lookup.OutOfRange, match="0.01 °C"):
-        lookup.water(name, kelvin)
+        lookup.liquid("water", name, kelvin)
 
 
 def test_properties_are_written_under_symbols_of_their_kind() -> None:

@@ -17,8 +17,10 @@ PACKAGE = Path(calcpack.__file__).parent
 #: Layer of every room (a module or a folder); a room imports only its own layer and those below.
 LAYERS = (
     "faults symbols number quantity units kinds misread formula arithmetic references resources conversion",
-    "equations catalog rules lookup root ledger value source fitting_set",
+    "equations catalog verdict lookup roughness root ledger value source fitting_set",
     "study",
+    "rules",
+    "assessment",
     "record table",
     "page reader cli output __main__ __init__",
 )
@@ -91,7 +93,7 @@ def test_the_reader_knows_nothing_of_ours(path: Path) -> None:
 
 def test_only_the_package_s_own_file_knows_every_step() -> None:
     known = {name for name, ours in imports(PACKAGE / "__init__.py") if ours}
-    assert known == {"arithmetic", "page", "reader", "record", "source", "study"}
+    assert known == {"arithmetic", "assessment", "page", "reader", "record", "source"}
 
 
 def test_every_room_has_a_layer_and_every_layer_its_rooms() -> None:

@@ -25,7 +25,7 @@ from calcpack.page.pdf import PageError, render
 from calcpack.page.text import linear, printable
 from calcpack.record import assemble, canonical
 from calcpack.source import load
-from calcpack.study import run
+from calcpack.assessment import run
 
 # The engine leaves its colour profile open until the collector comes by.
 pytestmark = pytest.mark.filterwarnings("ignore:.*sRGB2014.icc:pytest.PytestUnraisableExceptionWarning")

@@ -88,6 +88,7 @@ IN_PINT = {
     "r/min": "1/minute",
     "1": "dimensionless",
     "%": "percent",
+    "g/kg": "gram/kilogram",
 }
 
 
@@ -189,8 +190,8 @@ def test_every_spelling_is_read_as_its_unit(spelling: str) -> None:
     kind = next(name for name, kind in KINDS.items() if wanted.kind in kind.dimensions and not kind.references)
     if wanted.kind == "pressure":
         kind = "pressure_difference"
-    if wanted.name in ("1", "%"):
-        kind = {"1": "ratio", "%": "percentage"}[wanted.name]
+    if wanted.kind == "ratio":
+        kind = {"1": "ratio", "%": "percentage", "g/kg": "mass_fraction"}[wanted.name]
     text = "1.5" if wanted.name == "1" else f"{500 if kind == 'temperature' else 1.5} {spelling}"
     assert parse(text, kind).unit is wanted
 
@@ -301,8 +302,20 @@ def test_temperatures_are_exact() -> None:
         ("501 m", "drop", "range", "check the unit"),
         ("101 MPa", "drop", "range", "check the unit"),
         ("201 %", "percentage", "range", "check the unit"),
-        ("101", "margin_ratio", "range", "check the decimal point"),
+        ("101", "factor", "range", "check the decimal point"),
         ("-15.1 km", "elevation", "range", "check the unit"),
+        ("0.5", "mass_fraction", "bare number", "`50 %`"),
+        ("35", "salinity", "bare number", "`35 g/kg`"),
+        ("35 psu", "salinity", "unit", "`35 g/kg`"),
+        ("35 wt%", "mass_fraction", "unit", "`35 %`"),
+        ("35 %", "salinity", "dimension", ""),
+        ("999 g/kg", "mass_fraction", "range", "check the unit"),
+        ("-1 m", "depth", "range", ""),
+        ("0 m/s", "velocity_limit", "range", ""),
+        ("10 kPa", "gauge", "reference", "`10 kPa gauge`"),
+        ("4 inHg vacuum", "gauge", "reference", ""),
+        ("0.9", "exponent", "range", "check the decimal point"),
+        ("2 m", "exponent", "dimension", ""),
         ("\uff15 m", "length", "character", "`5 m`"),
     ],
 )
@@ -328,6 +341,22 @@ def test_a_range_for_each_dimension_holds_its_own_ends(kind: str) -> None:
             with pytest.raises(QuantityFault, match="check the") as caught:
                 parse(f"{beyond} {value.unit.name}{reference}".removesuffix(" 1"), kind)
             assert caught.value.kind == "range"
+
+
+@pytest.mark.parametrize(
+    ("text", "kind", "limits"),
+    [
+        ("300 psi absolute", "barometer", "from 20 kPa (2.901 psi) to 110 kPa (15.95 psi)"),
+        ("400000 ft", "pipe_length", "of at most 100 km (328100 ft)"),
+        ("3000 °F", "temperature", "from 1 K (-457.9 °F) to 900 K (1160 °F)"),
+        ("120 m/s", "velocity_limit", "of at most 100 m/s"),
+        ("4", "exponent", "from 1 to 3"),
+    ],
+)
+def test_a_limit_is_said_in_the_unit_typed_too(text: str, kind: str, limits: str) -> None:
+    with pytest.raises(QuantityFault) as caught:
+        parse(text, kind)
+    assert caught.value.wanted.endswith(f", {limits}")
 
 
 def test_ten_digits_are_enough() -> None:

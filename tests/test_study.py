@@ -4,7 +4,6 @@ from __future__ import annotations
 
 import random
 import re
-from collections.abc import Iterator
 from decimal import Context, Decimal
 from fractions import Fraction
 from functools import cache
@@ -18,14 +17,12 @@ from hypothesis import HealthCheck, given, settings
 from hypothesis import strategies as st
 from plants import INTAKE, Document, changed, found, plant, studied, verdicts
 
+from calcpack.assessment import Study
 from calcpack.faults import InputFault
-from calcpack.fitting_set import CRANE
-from calcpack.lookup import ROUGHNESS
 from calcpack.number import last_unit
-from calcpack.rules import reported_decimals
-from calcpack.source.schema import schema
-from calcpack.study import Study
+from calcpack.roughness import NEW
 from calcpack.value import drift
+from calcpack.verdict import reported_decimals
 
 ROOT = Path(__file__).parents[1]
 SAMPLES = sorted((ROOT / "sample_inputs").glob("*.yaml"))
@@ -85,7 +82,7 @@ def systems(draw: st.DrawFn, *, kinds: tuple[str, ...] = ("open", "gas_blanketed
         SECTION + "bore": None,
         SECTION + "size": size,
         SECTION + "schedule": schedule,
-        SECTION + "material": draw(st.sampled_from(sorted(ROUGHNESS))),
+        SECTION + "material": draw(st.sampled_from(sorted(NEW))),
         SECTION + "elements": elements,
     }
     if kind == "gas_blanketed":
@@ -265,58 +262,6 @@ def test_line_rounding_stays_far_below_a_reported_digit(document: Document, unit
     for value in (study.judged[0].npsh, study.need.limit):
         assert reported_decimals(value) == 2 and drift(value) < Decimal("0.001")
     assert verdicts(study)["npsh_margin"] != "not assessed"
-
-
-def test_a_line_in_two_sections_is_the_sum_of_both() -> None:
-    """Each section's loss counts on its own bore."""
-    first = plant()["line"]["sections"][0]
-    second = {
-        **first,
-        "id": "L2",
-        "bore": "154.1 mm",
-        "elements": [{"id": "1", "kind": "fitting", "name": "reducer", "K": "0.4"}],
-    }
-    one, both = studied(plant()), studied(plant({"line.sections": [first, second]}))
-    speed = 200 / 3600 / (3.141592653589793 * 0.1541**2 / 4)
-    assert npsh(one) - npsh(both) == pytest.approx(0.4 * speed**2 / 2 / 9.80665, abs=1e-6)
-
-
-def test_a_contingency_multiplies_every_loss() -> None:
-    without, with_ten = studied(plant()), studied(plant({"line.friction_contingency": "10 %"}))
-    lost = found(without, "h_L").shadow
-    assert found(with_ten, "h_L").shadow == pytest.approx(1.10 * lost, rel=1e-12)
-    assert npsh(without) - npsh(with_ten) == pytest.approx(0.10 * lost, rel=1e-9)
-    assert found(with_ten, "c").record == Decimal("0.100000")
-
-
-STRAINER = {"id": "S", "kind": "strainer", "name": "STR-1", "at_flow": "100 m³/h", "source": "S1", "status": "maker"}
-DROPS = (
-    ({"clean": "0.1 m", "fouled": "0.3 m"}, 0.3 * 4),
-    ({"clean": "1 kPa", "fouled": "3 kPa"}, 4 * 3000 / (998.162 * 9.80665)),
-    ({"clean": "0.1 ft", "fouled": "1 ft"}, 0.3048 * 4),
-)
-
-
-@pytest.mark.parametrize(("drop", "expected"), DROPS)
-def test_a_fouled_strainer_loses_by_the_square_of_the_flow(drop: dict[str, str], expected: float) -> None:
-    """Twice the reference flow: four times the drop of the fouled screen, as head of the liquid pumped (20 °C)."""
-    bare = plant({"liquid.temperature.highest": "20 °C"})
-    elements = [*bare["line"]["sections"][0]["elements"], {**STRAINER, "drop": drop}]
-    assert npsh(studied(bare)) - npsh(studied(changed(bare, {SECTION + "elements": elements}))) == pytest.approx(
-        expected, abs=2e-5
-    )
-
-
-def test_a_reading_names_the_state_of_its_strainers() -> None:
-    document = plant(readings=1)
-    elements = [
-        *document["line"]["sections"][0]["elements"],
-        {**STRAINER, "drop": {"clean": "0.1 m", "fouled": "0.3 m"}},
-    ]
-    document = changed(document, {SECTION + "elements": elements})
-    clean = studied(changed(document, {"readings.0.strainers": "clean"}))
-    fouled = studied(changed(document, {"readings.0.strainers": "fouled"}))
-    assert clean.differences[0].value.shadow - fouled.differences[0].value.shadow == pytest.approx(0.2 * 4, abs=1e-9)
 
 
 # --- one plant in two systems of units --------------------------------------------------------------------------------
@@ -738,18 +683,6 @@ def test_a_difference_between_model_and_reading_is_a_finding() -> None:
     assert len(told) == 2 == len(study.differences)
 
 
-def test_a_line_without_entrance_is_a_finding() -> None:
-    study = studied(plant({SECTION + "elements": [{"id": "P", "kind": "pipe", "length": "3 m"}]}))
-    assert any("no entrance" in text for text in study.findings)
-
-
-def test_a_roughness_taken_from_the_table_is_an_assumption() -> None:
-    told = " ".join(text for text, _ in studied(plant()).assumptions.values())
-    assert "commercial steel" in told
-    own = studied(plant({SECTION + "roughness": {"value": "0.2 mm", "source": "S1"}}))
-    assert not own.assumptions and found(own, "eps").shadow == pytest.approx(0.0002)
-
-
 # --- what must be refused, not crash ----------------------------------------------------------------------------------
 
 REFUSED: dict[str, dict[str, Any]] = {
@@ -811,35 +744,3 @@ def test_hot_water_can_be_judged(fahrenheit: int, units: str) -> None:
     study = studied(plant(changes))
     (check,) = [c for c in study.checks if c.rule.name == "npsh_margin"]
     assert check.verdict in ("met", "not met"), check.reason
-
-
-def choices(name: str, key: str) -> list[str]:
-    found: list[str] = schema()["$defs"][name]["properties"][key]["enum"]
-    return found
-
-
-def offered() -> Iterator[tuple[str, Document]]:
-    """Every choice the schema offers for a line."""
-    for material in choices("section", "material"):
-        yield material, {SECTION + "material": material}
-    for place, kind, key in ((2, "valve", "type"), (2, "tee", "flow"), (0, "entrance", "shape")):
-        for each in choices("element", key):
-            element = {"id": f"{place + 1}", "kind": kind, key: each}
-            yield f"{kind} {each}", {f"{SECTION}elements.{place}": element}
-    for radius, angle in (("standard", 90), ("standard", 45), ("long", 90)):
-        yield (
-            f"elbow {radius} {angle}",
-            {SECTION + "elements.2": {"id": "3", "kind": "elbow", "radius": radius, "angle": angle}},
-        )
-
-
-@pytest.mark.parametrize("changes", dict(offered()).values(), ids=dict(offered()))
-def test_every_choice_of_the_schema_computes(changes: Document) -> None:
-    assert npsh(studied(plant(changes))) > 5
-
-
-def test_the_schema_offers_what_the_tables_hold() -> None:
-    assert set(choices("section", "material")) == set(ROUGHNESS)
-    for kind, key in (("valve", "type"), ("tee", "flow"), ("entrance", "shape")):
-        held = {variant.split()[0] for k, variant in CRANE if k == kind}
-        assert set(choices("element", key)) == held

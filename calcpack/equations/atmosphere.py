@@ -42,6 +42,9 @@ EQUATIONS = (
         PRACTICE,
     ),
     Equation("open_surface", "p_s", "p_b", "Surface pressure of an open surface, absolute", DEFINITION),
+    Equation("saturated_surface", "p_s", "p_v", "Surface pressure of a saturated vessel: the vapour pressure of its liquid, absolute", DEFINITION, "liquid and vapour in equilibrium at one temperature"),
+    Equation("drawn_down_level", "z_s", "z_l - z_w", "Level of the surface while pumping", DEFINITION),
+    Equation("point_from_gauge", "p_k", "p_b + p_g", "Pressure at the point where it is known, absolute", DEFINITION),
     Equation("absolute_from_gauge", "p_s", "p_b + p_g", "Surface pressure, absolute", DEFINITION),
     Equation("gauge_from_vacuum", "p_g", "-p_vac", "Gauge pressure from the vacuum as read", DEFINITION),
 )

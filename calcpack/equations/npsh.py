@@ -1,6 +1,6 @@
 """Net positive suction head: the design route, the measured route, and the way between them."""
 
-from ..references import DEFINITION, IDENTITY, Cite
+from ..references import DEFINITION, IDENTITY, PRACTICE, Cite
 from . import Equation
 
 EQUATIONS = (
@@ -22,6 +22,44 @@ EQUATIONS = (
         Cite("doe1018", "Centrifugal Pump Operation"),
         "no velocity head: the surface is at rest",
     ),
+    Equation("point_head", "H_k", "p_k / gamma", "Pressure at the point as head of this liquid", DEFINITION),
+    Equation("point_static_head", "z", "z_k - z_d", "Static head of the point over the pump's datum", DEFINITION),
+    Equation(
+        "npsh_point",
+        "NPSHA_d",
+        "H_s + z - H_v - h_L",
+        "Net positive suction head available",
+        Cite("doe1018", "Centrifugal Pump Operation"),
+        "from the point where pressure is known; its velocity head is left out, on the safe side",
+    ),
+    Equation(
+        "npsh_point_moving",
+        "NPSHA_d",
+        "H_s + z + h_V - H_v - h_L",
+        "Net positive suction head available",
+        Cite("doe1018", "Centrifugal Pump Operation"),
+        "from the point where pressure is known; the velocity head there is part of its energy",
+    ),
+    Equation(
+        "npsh_wet_pit",
+        "NPSHA_d",
+        "H_s + z - H_v",
+        "Net positive suction head available",
+        Cite("doe1018", "Centrifugal Pump Operation"),
+        "no line: the pump hangs in its sump",
+    ),
+    Equation("npsh_less_withheld", "NPSHA_q", "NPSHA - h_w", "Net positive suction head available, less the head withheld", PRACTICE),
+    Equation("npsh_less_acceleration", "NPSHA_t", "NPSHA - h_a", "Net positive suction head available, less the acceleration head", DEFINITION),
+    Equation(
+        "npsh_at_required_datum",
+        "NPSHA_R",
+        "NPSHA + z_d - z_R",
+        "Net positive suction head available at the datum of NPSH required",
+        DEFINITION,
+        "a lower datum stands deeper below the surface",
+    ),
+    Equation("energy_head", "E_0", "H_s + z_s", "Energy head where the line starts, absolute, over the file's datum", DEFINITION),
+    Equation("energy_head_moving", "E_0", "H_s + z_s + h_V", "Energy head where the line starts, absolute, over the file's datum", DEFINITION),
     Equation("gauge_height", "z_g", "z_G - z_d", "Gauge height over the pump's datum", DEFINITION),
     Equation("barometer_head", "H_b", "p_b / gamma", "Barometer as head of this liquid", DEFINITION),
     Equation("gauge_head", "H_g", "p_g / gamma", "Gauge reading as head of this liquid", DEFINITION),
@@ -68,13 +106,4 @@ EQUATIONS = (
         "Net positive suction head available, reading carried to the worst case",
         IDENTITY,
     ),
-    Equation("margin_ratio", "M_r", "NPSHA / NPSHR", "Margin ratio", DEFINITION),
-    Equation("margin_difference", "M_d", "NPSHA - NPSHR", "Margin difference", DEFINITION),
-    Equation("needed_by_ratio", "N_r", "m_r * NPSHR", "NPSH needed by the margin ratio", DEFINITION),
-    Equation("needed_by_difference", "N_d", "NPSHR + m_d", "NPSH needed by the margin difference", DEFINITION),
-    Equation("needed_ratio_alone", "N_L", "N_r", "NPSH needed: the ratio is the only margin asked for", DEFINITION),
-    Equation(
-        "needed_difference_alone", "N_L", "N_d", "NPSH needed: the difference is the only margin asked for", DEFINITION
-    ),
-    Equation("needed_greater", "N_L", "max(N_r, N_d)", "NPSH needed, the greater governs", DEFINITION),
 )

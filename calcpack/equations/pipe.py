@@ -4,6 +4,14 @@ from ..references import DEFINITION, Cite
 from . import Equation
 
 EQUATIONS = (
+    Equation(
+        "section_flow",
+        "Q_n",
+        "N * Q",
+        "Flow in a section that serves several pumps",
+        DEFINITION,
+        "the pumps that run and draw through it, each with the flow of one pump",
+    ),
     Equation("bore_area", "A", "pi * D**2 / 4", "Area of the bore", DEFINITION),
     Equation("mean_velocity", "V", "Q / A", "Mean velocity", DEFINITION),
     Equation("velocity_head", "h_V", "V**2 / (2 * g)", "Velocity head", DEFINITION),

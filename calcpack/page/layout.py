@@ -10,7 +10,7 @@ from .. import formula
 from ..formula import Bin, Call, Cmp, Name, Neg, Node, Num
 from . import boxes
 from .boxes import Box
-from .typeset import SIZE, Display, Setter
+from .typeset import LEVEL, SIZE, Display, Setter
 
 #: Width of the working column, 71 mm, in points.
 MEASURE = 71 / 25.4 * 72
@@ -64,13 +64,16 @@ def line(
     names: Mapping[str, Display],
     symbolic: bool = True,
     measure: float = MEASURE,
+    found: str = "",
 ) -> Setting:
     """Set ``symbol = tree`` and below or beside it ``= tree with numbers``.
 
-    ``symbol`` is None where the tree is itself a comparison.  ``symbolic=False`` leaves the symbolic form out (a
-    conversion).  Raises :class:`KeyError` for a symbol that ``names`` lacks.
+    ``symbol`` is None where the tree is itself a comparison; its numbers then stand in the relation ``found``.
+    ``symbolic=False`` leaves the symbolic form out (a conversion).  Raises :class:`KeyError` for a symbol that ``names`` lacks.
     """
     numbers = None if values is None else with_numbers(tree, values)
+    if isinstance(numbers, Cmp) and found:
+        numbers = Cmp(found, numbers.a, numbers.b)
     forms = ([(tree, False)] if symbolic else []) + ([(numbers, True)] if numbers is not None else [])
     for size in SIZES:
         box = _rows(symbol, forms, names, size, measure)
@@ -142,22 +145,41 @@ def _stacked(rows: Sequence[Box], size: float) -> Box:
 
 
 def _pieces(tree: Node, setter: Setter, first: bool = True) -> list[Box]:
-    """The top-level terms, each with its operator before it; a term too wide for any row falls into its factors.
+    """The tree in pieces that rows may part: its terms, each with its operator before it, and what a wide one falls into.
 
     ``first`` says that nothing stands before the tree, so that a leading minus needs no parentheses.
     """
     match tree:
         case Bin("+" | "-" as op, a, b):
-            operator, term = setter.joined(op, a, b, 0)
-            if term.width > MEASURE * 0.75 and isinstance(b, Bin) and b.op == "*":
-                factor, *rest = _pieces(b, setter, first=False)
-                return [*_pieces(a, setter, first), boxes.row([operator, factor]), *rest]
-            return [*_pieces(a, setter, first), boxes.row([operator, term])]
-        case Bin("*", a, b) if setter.tree(tree).width > MEASURE * 0.75:
-            bracketed = isinstance(a, Bin) and a.op in "+-"
-            left = [setter.tree(a, 2, 0, first)] if bracketed else _pieces(a, setter, first)
-            return [*left, boxes.row(setter.joined("*", a, b, 0))]
+            return [*_pieces(a, setter, first), *_joined(op, a, b, setter)]
+        case Bin("*", a, b) if _wide(setter.tree(tree)):
+            return [*_operand(a, 2, setter, first), *_joined("*", a, b, setter)]
     return [setter.tree(tree, 0 if first else 2, 0, first)]
+
+
+def _wide(box: Box) -> bool:
+    """Whether a box leaves rows too little room to stay whole."""
+    return box.width > MEASURE * 0.75
+
+
+def _joined(op: str, a: Node, b: Node, setter: Setter) -> list[Box]:
+    """The operator between ``a`` and ``b`` and what ``b`` falls into, the first piece behind the operator."""
+    operator, whole = setter.joined(op, a, b, 0)
+    head, *rest = _operand(b, LEVEL[op] + 1, setter, False) if _wide(whole) else [whole]
+    return [boxes.row([operator, head]), *rest]
+
+
+def _operand(tree: Node, level: int, setter: Setter, first: bool) -> list[Box]:
+    """The pieces of an operand of strength ``level``, in brackets where it binds weaker."""
+    if isinstance(tree, Bin) and tree.op in "+-*" and LEVEL[tree.op] < level:
+        first_piece, *more = _pieces(tree, setter)
+        left, right = setter.brackets(boxes.row([first_piece, *more]), 0)
+        if not more:
+            return [boxes.row([left, first_piece, right])]
+        return [boxes.row([left, first_piece]), *more[:-1], boxes.row([more[-1], right])]
+    if isinstance(tree, Bin) and tree.op == "*":
+        return _pieces(tree, setter, first)
+    return [setter.tree(tree, level, 0, first)]
 
 
 def _broken(pieces: list[Box], first: float, later: float) -> list[Box]:

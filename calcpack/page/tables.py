@@ -11,6 +11,7 @@ from .. import formula
 from . import glyphs, layout, metrics, text
 from .lines import POINT, Context, picture, result, values
 from .numerals import numeral
+from .typeset import RELATIONS
 
 STATUS_WORDS = {
     "verified": "verified",
@@ -21,6 +22,7 @@ STATUS_WORDS = {
 TOTAL_WIDTH, WORKED_WIDTH = 91.0, 118.0  # room for the formula of the total, and of the row worked in full (mm)
 #: A row of this form stands in the table alone; any other is a line printed in full above it.
 ROW_FORMULAS = ("n * K * h_V", "K * h_V")
+_OPERATORS = {sign: operator for operator, sign in RELATIONS.items()}
 VERDICTS = ("met", "not met", "not applicable", "not assessed")
 POINT_EDGE = 8.0  # decimal points in the columns 'as given' and 'as used' of the inputs (mm)
 GIVEN_WIDTH, USED_WIDTH = 24.5, 29.5  # room in these columns (mm)
@@ -175,7 +177,10 @@ def rule(r: Mapping[str, Any], context: Context) -> dict[str, Any]:
     inequality = ""
     if sides and r["formula"]:
         record = {r[s]["symbol"]: r[s]["value"] for s in ("left", "right")}
-        inequality = picture(layout.line(None, formula.parse(r["formula"]), record, context.names, measure=60 * POINT))
+        asked = formula.parse(r["formula"])
+        inequality = picture(
+            layout.line(None, asked, record, context.names, measure=60 * POINT, found=_OPERATORS[r["found"]])
+        )
     return {
         "address": r["address"],
         "title": r["title"],
@@ -187,7 +192,7 @@ def rule(r: Mapping[str, Any], context: Context) -> dict[str, Any]:
         "criterion": r["criterion"],
         "source": r["source"],
         "sides": sides,
-        "relation": r["relation"],
+        "relation": r["found"],
         "inequality": inequality,
         "margin": signed(margin["headline"]["text"], margin["headline"]["unit"]) if margin else "",
         "margin_record": signed(margin["value"], margin["unit"]) if margin else "",

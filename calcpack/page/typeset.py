@@ -23,7 +23,8 @@ AXIS = 0.328  # height of the minus sign of the serif, where bars of fractions l
 RULE = 0.06  # thickness of bars
 STRUT_UP, STRUT_DOWN = 0.67, 0.02  # height of a digit: keeps neighbouring fractions level
 RELATIONS = {">=": "≥", "<=": "≤", ">": ">", "<": "<", "==": "="}
-_LEVEL = {"+": 1, "-": 1, "*": 2, "/": 3, "**": 4}
+#: How closely each operator binds.
+LEVEL = {"+": 1, "-": 1, "*": 2, "/": 3, "**": 4}
 
 
 @dataclass(frozen=True)
@@ -64,17 +65,17 @@ class Setter:
                 return inner if first and level <= 2 else self.parenthesised(inner, depth)
             case Call("sqrt", (x,)):
                 box = self._root(x, depth)
-                return self.parenthesised(box, depth) if level > _LEVEL["**"] else box
+                return self.parenthesised(box, depth) if level > LEVEL["**"] else box
             case Call(fn, args):
                 return self._call(fn, args, level, depth)
             case Bin("/", a, b):
                 box = self._fraction(a, b, depth)
-                return self.parenthesised(box, depth) if level > _LEVEL["/"] else box
+                return self.parenthesised(box, depth) if level > LEVEL["/"] else box
             case Bin("**", a, b):
                 box = self._power(a, b, depth)
-                return self.parenthesised(box, depth) if level > _LEVEL["**"] else box
+                return self.parenthesised(box, depth) if level > LEVEL["**"] else box
             case Bin(op, a, b):
-                own = _LEVEL[op]
+                own = LEVEL[op]
                 left = self.tree(a, own, depth, first or level > own)
                 box = boxes.row([left, *self.joined(op, a, b, depth)])
                 return self.parenthesised(box, depth) if level > own else box
@@ -83,7 +84,7 @@ class Setter:
 
     def joined(self, op: str, a: Node, b: Node, depth: int) -> list[Box]:
         """The operator between ``a`` and ``b``, and ``b``."""
-        right = self.tree(b, _LEVEL[op] + 1, depth, False)
+        right = self.tree(b, LEVEL[op] + 1, depth, False)
         if op == "*" and not (self.numeric or _starts_with_number(b)):
             return [boxes.gap(0.17 * self.em(depth)), right]
         return [self._sign({"+": "+", "-": MINUS, "*": "×"}[op], depth, (0.2, 0.17)[op == "*"]), right]
@@ -118,7 +119,7 @@ class Setter:
                 self._raised(boxes.text(n.power, REGULAR, self.em(depth + 1)), em),
             ]
         box = boxes.row(parts)
-        weak = (n.negative and self.numeric) or (bool(n.exponent) and level >= _LEVEL["**"])
+        weak = (n.negative and self.numeric) or (bool(n.exponent) and level >= LEVEL["**"])
         return self.parenthesised(box, depth) if weak else box
 
     def _raised(self, box: Box, em: float, under: float = 0.0) -> Box:
@@ -126,7 +127,7 @@ class Setter:
 
     def _power(self, base: Node, exponent: Node, depth: int) -> Box:
         em = self.em(depth)
-        below = self.tree(base, _LEVEL["**"] + 1, depth, False)
+        below = self.tree(base, LEVEL["**"] + 1, depth, False)
         above = self.tree(exponent, 0, depth + 1)
         lift = max(0.36 * em, below.ascent - 0.42 * em, above.descent + 0.28 * em)
         return boxes.row([below, above.moved(0.03 * em, lift), boxes.gap(0.05 * em)])
@@ -162,18 +163,21 @@ class Setter:
         return Box(body.width, max(body.ascent, top), body.descent, body.runs, (*body.bars, bar))
 
     def parenthesised(self, inner: Box, depth: int) -> Box:
-        """``inner`` in round brackets, real glyphs stretched to its height."""
-        em, sign = self.em(depth), glyph(REGULAR, "(")
-        natural = (sign.top - sign.bottom) * em
-        wanted = inner.ascent + inner.descent + 0.12 * em
-        if inner.ascent <= 0.95 * em and inner.descent <= 0.38 * em:
-            left, right = boxes.text("(", REGULAR, em), boxes.text(")", REGULAR, em)
-        else:
-            grown = max(1.0, wanted / natural)
-            wide = min(grown**0.5, 1.4)
-            foot = -inner.descent - 0.06 * em - sign.bottom * em * grown
-            left, right = (boxes.tall(c, REGULAR, em * wide, grown / wide, foot) for c in "()")
+        """``inner`` in round brackets."""
+        left, right = self.brackets(inner, depth)
         return boxes.row([left, inner, right])
+
+    def brackets(self, inner: Box, depth: int) -> tuple[Box, Box]:
+        """Round brackets around ``inner``, real glyphs stretched to its height."""
+        em, sign = self.em(depth), glyph(REGULAR, "(")
+        if inner.ascent <= 0.95 * em and inner.descent <= 0.38 * em:
+            return boxes.text("(", REGULAR, em), boxes.text(")", REGULAR, em)
+        natural = (sign.top - sign.bottom) * em
+        grown = max(1.0, (inner.ascent + inner.descent + 0.12 * em) / natural)
+        wide = min(grown**0.5, 1.4)
+        foot = -inner.descent - 0.06 * em - sign.bottom * em * grown
+        left, right = (boxes.tall(c, REGULAR, em * wide, grown / wide, foot) for c in "()")
+        return left, right
 
     def _call(self, fn: str, args: tuple[Node, ...], level: int, depth: int) -> Box:
         em = self.em(depth)
@@ -187,7 +191,7 @@ class Setter:
         if fn == "log10":
             name.append(boxes.text("10", REGULAR, self.em(depth + 1)).moved(0.02 * em, -0.17 * em))
         box = boxes.row([*name, boxes.gap(0.06 * em), self.parenthesised(boxes.row(parts[:-1]), depth)])
-        return self.parenthesised(box, depth) if level >= _LEVEL["**"] else box
+        return self.parenthesised(box, depth) if level >= LEVEL["**"] else box
 
 
 def runs(shown: Display) -> list[tuple[str, Face]]:

@@ -8,6 +8,7 @@ from typing import Any
 
 from . import figures, glyphs, metrics, tables, text
 from .lines import POINT, Context, view
+from .scale import steps
 from .text import all_printable
 
 PAPERS = {"A4": ("210mm 297mm", "20mm", "14mm"), "Letter": ("215.9mm 279.4mm", "22mm", "17.9mm")}
@@ -15,8 +16,17 @@ PAPERS = {"A4": ("210mm 297mm", "20mm", "14mm"), "Letter": ("215.9mm 279.4mm", "
 LISTING_SIZE, LISTING_WIDTH = 7.8, 128 * POINT
 #: A longer statement leaves its place beside the verdict and runs over the whole width under it.
 LONG_STATEMENT = 230
+#: More rules than these are set in small rows on the cover.
+MANY_RULES = 4
 SCOPE_WIDTH = 77 * POINT  # room for the scope above a sheet
 FIGURE_SPACE = "\u2007"
+#: Rules on the cover stand in this order.
+RANK = ("not met", "not assessed", "met", "not applicable")
+#: How far inputs are confirmed, in the order and the short words of the cover's counts.
+COUNTED = {
+    "verified": "verified", "maker": "unconfirmed", "preliminary": "preliminary", "assumed": "assumed",
+    "without source or status": "without source or status",
+}  # fmt: skip
 SECTIONS = (
     "Purpose and scope",
     "Criteria",
@@ -56,6 +66,7 @@ def context(record: Mapping[str, Any]) -> dict[str, Any]:
         "statuses": [(glyphs.status(key), words) for key, words in tables.STATUS_WORDS.items()],
         "margin_key": glyphs.margin_bar("6"),
         "elevation": glyphs.data_uri(figures.elevation(r["sketch"])) if r["sketch"] else "",
+        "figure": _caption(r["sketch"]) if r["sketch"] else {},
         "rounding": [_rounding(row, shared) for row in r["rounding"]],
         "conversions": [
             {
@@ -76,6 +87,20 @@ def context(record: Mapping[str, Any]) -> dict[str, Any]:
         "fingerprint": fours(r["fingerprint"]),
         "input_fingerprint": fours(r["input_file"]["sha256"]),
     }
+
+
+def _caption(sketch: Mapping[str, Any]) -> dict[str, str]:
+    """What the figure shows, in words."""
+    shown = {step.name for step in steps(sketch)}
+    left = "levels, datum and suction line as modelled, the numbers in circles follow the flow and are listed below"
+    if sketch["pump"]["arrangement"] == "wet_pit":
+        left = "sump, level and pump as modelled; the triangle is the pump’s datum"
+    elif not sketch["elements"]:
+        left = "levels, datum and gauge"
+    elif sketch["supply"]["point"]:
+        left = "the point where the pressure is known, datum and suction line as modelled, the numbers in circles follow the flow and are listed below"
+    cancel = " and ".join(head["name"] for head in sketch["heads"] if head["name"] not in shown)
+    return {"left": left, "cancel": tables.capital(cancel)}
 
 
 def _addresses(r: Mapping[str, Any]) -> frozenset[str]:
@@ -102,27 +127,18 @@ def _factors(r: Mapping[str, Any]) -> dict[tuple[str, str], str]:
 def _cover(r: Mapping[str, Any], shared: Context) -> dict[str, Any]:
     cover = r["cover"]
     governing = next((c for c in r["checks"] if c["address"] == cover["governing"]), None)
-    measured = [c for c in r["checks"] if c["margin"] and c["margin"]["percent"]]
-    shown = sorted(measured, key=lambda c: (c["address"] != cover["governing"], Decimal(c["margin"]["percent"])))
-    counts = cover["counts"]
+    shown = sorted(r["checks"], key=lambda c: (c["address"] != cover["governing"], RANK.index(c["verdict"]), _percent(c)))
     return {
         "glyph": glyphs.verdict(cover["verdict"], 14.0),
         "word": tables.capital(cover["verdict"]),
         "statement": text.together(cover["statement"]),
         "long": len(cover["statement"]) > LONG_STATEMENT,
+        "many": len(shown) > MANY_RULES,
         "tally": [(n, word) for word, n in cover["tally"].items() if n],
         "governs": tables.rule(governing, shared) if governing else None,
-        "rules": [tables.rule(c, shared) for c in shown[:2]],
-        "counts": [
-            (counts[k], words)
-            for k, words in (
-                ("verified", "verified"),
-                ("maker", "unconfirmed"),
-                ("preliminary", "preliminary"),
-                ("assumed", "assumed"),
-                ("without source", "without source"),
-            )
-        ],
+        "rules": [tables.rule(c, shared) for c in shown],
+        "counts": [(cover["counts"][state], words) for state, words in COUNTED.items()],
+        "findings": len(r["findings"]),
         "unverified": [
             {**u, "link": shared.link(u["address"]), "status": tables.STATUS_WORDS.get(u["status"], u["status"])}
             for u in cover["unverified"]
@@ -133,6 +149,12 @@ def _cover(r: Mapping[str, Any], shared: Context) -> dict[str, Any]:
         "project": cut(r["calculation"]["project"], 75 * POINT, 8.8),
         "title": cut(r["calculation"]["title"], 120 * POINT, 8.8),
     }
+
+
+def _percent(check: Mapping[str, Any]) -> Decimal:
+    """The margin of a rule in per cent of its limit; rules without one come last."""
+    margin = check["margin"]
+    return Decimal(margin["percent"]) if margin and margin["percent"] else Decimal("Infinity")
 
 
 def _confirmations(r: Mapping[str, Any], shared: Context) -> list[dict[str, Any]]:

@@ -37,6 +37,8 @@ class Book:
     classes: dict[str, Class] = field(default_factory=dict)
     findings: list[Finding] = field(default_factory=list)
     unread: list[Finding] = field(default_factory=list)
+    #: Headlines not rounded to the nearest: right only where a rule reports the same line so.
+    aside: dict[str, tuple[Quantity, Finding]] = field(default_factory=dict)
 
     def citation(self, quantity: Quantity, address: str) -> tuple[str, str, str] | None:
         """What is wrong with citing ``address`` for ``quantity``: what, printed, found; or nothing.
@@ -66,6 +68,11 @@ class Book:
     def enter(self, address: str, values: Iterable[Quantity]) -> None:
         """Let later lines cite ``address``."""
         self.values[address] = tuple(values)
+
+    def reports(self, address: str, shown: Quantity) -> None:
+        """A rule reports the result of ``address`` as ``shown``, rounded against its verdict: its headline may be the same."""
+        if address in self.aside and self.aside[address][0] == shown:
+            del self.aside[address]
 
     def note(self, sheet: int, address: str, what: str, printed: object = "", found: object = "") -> None:
         """Keep a disagreement."""

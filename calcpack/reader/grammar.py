@@ -77,17 +77,20 @@ class Parser:
         if token.tree is not None and token.kind != "power":
             return token.tree
         if token.kind == "(":
-            tree = self.sum()
-            self.take(")")
-            return tree
+            args = self.arguments()
+            return args[0] if len(args) == 1 else Op(",", args)
         if token.kind == "sum":
             return Op("sum", (self.primary(),))
         if token.kind == "function":
             self.take("(")
-            args = [self.sum()]
-            while self.next == ",":
-                self.take()
-                args.append(self.sum())
-            self.take(")")
-            return Op(token.name, tuple(args))
+            return Op(token.name, self.arguments())
         raise Unread(f"{token.kind!r} where a term belongs")
+
+    def arguments(self) -> tuple[Tree, ...]:
+        """What stands between brackets, the closing one taken; several where a look-up has them."""
+        found = [self.sum()]
+        while self.next == ",":
+            self.take()
+            found.append(self.sum())
+        self.take(")")
+        return tuple(found)

@@ -105,6 +105,7 @@ class Reading:
             listed_as, units = self.conversions.get(label), (line.operands[0].quantity.unit, line.record.unit)
             if listed_as is None or (listed_as.before, listed_as.after) != units:
                 book.note(line.sheet, line.address, f"{label} is not its conversion in the list", " to ".join(units))
+        book.findings += [finding for _, finding in book.aside.values()]
         self._addresses()
         check_symbols(self.known, book)
         check_cover(found[0], self.verdicts, book)

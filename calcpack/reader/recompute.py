@@ -3,11 +3,11 @@
 from __future__ import annotations
 
 from collections import defaultdict
-from decimal import Decimal
+from decimal import ROUND_CEILING, ROUND_FLOOR, Decimal
 from fractions import Fraction
 
 from .arithmetic import decimal, exact, of_record, rounded, unit_of_record, value
-from .book import Book, Class
+from .book import Book, Class, Finding
 from .factors import LISTED, same_factor
 from .failures import Unread
 from .line import Line
@@ -61,11 +61,17 @@ def operand_values(line: Line) -> Values:
 
 
 def _headline(line: Line, book: Book) -> None:
+    """The figure shown large is the result rounded to the nearest, or as a rule reports it further down."""
     shown, record = line.headline, line.record
     there = converted(Fraction(record.value), record.unit, shown.unit)
-    if rounded(there, shown.value) != shown.value:
-        found = Quantity(rounded(there, shown.value), shown.unit)
-        book.note(line.sheet, line.address, "the headline is not the result of record", shown, found)
+    found = Quantity(rounded(there, shown.value), shown.unit)
+    if found.value == shown.value:
+        return
+    what = Finding(line.sheet, line.address, "the headline is not the result of record", str(shown), str(found))
+    if shown.value in (rounded(there, shown.value, mode) for mode in (ROUND_FLOOR, ROUND_CEILING)):
+        book.aside[line.address] = shown, what
+    else:
+        book.findings.append(what)
 
 
 def _result(line: Line, found: Decimal, book: Book) -> None:

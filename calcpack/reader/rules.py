@@ -1,7 +1,8 @@
-"""Section 9: rule checks.  Both sides are results cited, the inequality decides, the margin is their room."""
+"""Section 9: rule checks.  Both sides are results cited, the numbers decide, the margin is their room."""
 
 from __future__ import annotations
 
+import operator
 from collections.abc import Sequence
 from dataclasses import dataclass, replace
 from decimal import ROUND_CEILING, ROUND_FLOOR, Decimal
@@ -21,8 +22,9 @@ from .units import Quantity, converted, factor, named
 LEFT, RELATION, RIGHT, MARGIN = (68.0, 95.0), (95.0, 100.0), (100.0, 127.0), (127.0, 150.0)
 TEXT = (20.0, 127.0)
 VERDICTS = ("met", "not met", "not applicable", "not assessed")
-#: Relation -> whether more on the left is better.
-_RISING = {"≥": True, ">": True, "≤": False, "<": False}
+#: Relation -> whether it holds between two numbers.
+_HOLDS = {"≥": operator.ge, ">": operator.gt, "≤": operator.le, "<": operator.lt}
+_OPPOSITE = {"≥": "<", "<": "≥", "≤": ">", ">": "≤"}
 
 
 @dataclass(frozen=True)
@@ -45,22 +47,17 @@ def read_rule(band: Band, givens: dict[str, Quantity], book: Book) -> str:
             book.note(band.sheet, band.address, "met without two sides to compare")
         return verdict
     left, right = _side(upper.column(*LEFT)), _side(upper.column(*RIGHT))
-    if relation not in _RISING:
-        raise Unread(f"the relation {relation!r} is not known")
-    rising = _RISING[relation]
-    sides = _inequality(band, relation, left, right, book)
+    asked, sides = _pair(band, relation, left, right, book)
+    rising = asked in "≥>"
     _reported(band, "left side", left, sides[0], ROUND_FLOOR if rising else ROUND_CEILING, givens, book)
     _reported(band, "right side", right, sides[1], ROUND_CEILING if rising else ROUND_FLOOR, givens, book)
     a, b = sides[0].value, sides[1].value
-    holds = {"≥": a >= b, ">": a > b, "≤": a <= b, "<": a < b}[relation]
+    if not _HOLDS[relation](a, b):
+        book.note(band.sheet, band.address, "the numbers do not stand in the relation printed", f"{a} {relation} {b}")
+    holds = _HOLDS[asked](a, b)
     if verdict == "not applicable" or (verdict != "not assessed" and (verdict == "met") != holds):
-        book.note(
-            band.sheet,
-            band.address,
-            "the inequality gives another verdict",
-            verdict,
-            "met" if holds else "not met",
-        )
+        what = "what is asked and the numbers give another verdict"
+        book.note(band.sheet, band.address, what, verdict, "met" if holds else "not met")
     _margin(upper, WIDE.subtract(a, b) if rising else WIDE.subtract(b, a), sides[1], book)
     return verdict
 
@@ -82,11 +79,19 @@ def _side(glyphs: Sequence[Glyph]) -> Side:
     return Side(Quantity(number, unit), cited(glyphs))
 
 
-def _inequality(band: Band, relation: str, left: Side, right: Side, book: Book) -> tuple[Quantity, Quantity]:
-    """The two numbers compared, each the result of the line its side cites."""
+def _pair(band: Band, relation: str, left: Side, right: Side, book: Book) -> tuple[str, tuple[Quantity, Quantity]]:
+    """The relation asked for, and the two numbers compared, each the result of the line its side cites.
+
+    The numbers stand in the ``relation`` they have: the one asked for, or its opposite.
+    """
     found = forms(picture(band, *TEXT))
-    if len(found) != 2 or any(form.relation != relation for form in found):
-        raise Unread("no inequality in symbols and in numbers")
+    if len(found) != 2:
+        raise Unread("no pair of what is asked and what is so")
+    asked = found[0].relation
+    if asked not in _HOLDS or relation not in (asked, _OPPOSITE[asked]):
+        raise Unread(f"the relation {relation!r} beside {asked!r}")
+    if found[1].relation != relation:
+        book.note(band.sheet, band.address, "two relations are printed", relation, found[1].relation)
     book.uses(
         band.sheet,
         band.address,
@@ -95,21 +100,22 @@ def _inequality(band: Band, relation: str, left: Side, right: Side, book: Book) 
     sides = []
     for printed, side in ((found[1].left, left), (found[1].right, right)):
         if not isinstance(printed, Number):
-            raise Unread("an inequality of something else than two numbers")
+            raise Unread("a comparison of something else than two numbers")
         known = book.values.get(side.address, ())
         unit = known[0].unit if known else ""
         if wrong := book.citation(Quantity(printed.value, unit), side.address):
-            book.note(band.sheet, band.address, f"the inequality {wrong[0]}", *wrong[1:])
+            book.note(band.sheet, band.address, f"the comparison {wrong[0]}", *wrong[1:])
         sides.append(Quantity(printed.value, unit))
     if sides[0].unit != sides[1].unit:
         raise Unread("two sides in different units")
-    return sides[0], sides[1]
+    return asked, (sides[0], sides[1])
 
 
 def _reported(
     band: Band, what: str, side: Side, record: Quantity, mode: str, givens: dict[str, Quantity], book: Book
 ) -> None:
     """A side is reported as its input was given, else rounded against the verdict."""
+    book.reports(side.address, side.shown)
     if givens.get(side.address) == side.shown:
         return
     there = converted(Fraction(record.value), record.unit, side.shown.unit)

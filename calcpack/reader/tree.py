@@ -28,7 +28,7 @@ class Symbol:
 
 @dataclass(frozen=True)
 class Op:
-    """An operation: ``+ - * / ** neg sqrt log10 ln exp max min sum`` and its arguments."""
+    """An operation: ``+ - * / ** neg sqrt log10 ln exp max min sum`` and its arguments; ``,`` lists those of a look-up."""
 
     name: str
     args: tuple[Tree, ...]

@@ -51,7 +51,7 @@ _SIZES: dict[str, dict[str, F]] = {
     "temperature": {"K": F(1), "°C": F(1), "°F": F(5, 9), "°R": F(5, 9)},
     "lapse rate": {"K/m": F(1), "K/km": F(1, 1000), "K/ft": 1 / _FT},
     "speed": {"s⁻¹": F(1), "r/min": F(1, _MIN)},
-    "ratio": {"": F(1), "%": F(1, 100)},
+    "ratio": {"": F(1), "%": F(1, 100), "g/kg": F(1, 1000)},
 }  # fmt: skip
 #: Added to a reading before its size counts.
 _ZEROS = {"°C": F("273.15"), "°F": F("459.67")}

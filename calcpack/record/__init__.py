@@ -10,16 +10,18 @@ from collections.abc import Iterator
 from decimal import Decimal
 
 from .. import __version__, formula
+from ..assessment import Study
 from ..lookup import library
-from ..number import typeset_minus
-from ..rules import ALLOWED, PASSING, reported_decimals
 from ..source.inputs import Given
-from ..study import Study
 from ..symbols import NOMENCLATURE
 from ..value import Value, drift
+from ..verdict import ALLOWED, reported_decimals
 from . import words
-from .cover import checks, cover
+from .checks import checks, reported
+from .cover import cover
+from .limits import limits
 from .lines import Json, References, conversions, line, number, part, short
+from .method import method
 from .sketch import sketch
 
 FORMAT = "calcpack record 1"
@@ -27,8 +29,8 @@ FORMAT = "calcpack record 1"
 
 def assemble(study: Study) -> Json:
     """The record of ``study``; the same study gives the same record, fingerprint included, on every machine."""
-    c, ledger, references = study.calculation, study.ledger, References()
-    computation = [part(ledger, p, references) for p in ledger.parts]
+    c, ledger, references, shown = study.calculation, study.ledger, References(), reported(study)
+    computation = [part(ledger, p, references, shown) for p in ledger.parts if p.blocks]
     inputs = [line(ledger, x, references) for x in ledger.inputs]
     judged = checks(study, references)
     assumptions = _assumptions(study, inputs)
@@ -44,21 +46,22 @@ def assemble(study: Study) -> Json:
         "cover": cover(study, judged, inputs, assumptions),
         "purpose": words.purpose(c),
         "scope": words.scope(study),
-        "exclusions": [words.CAUTIONS[-1]],
+        "exclusions": words.cautions(c)[-1:],
         "criteria": [
             {"rule": r["address"], "text": ": ".join(t for t in (r["about"], r["criterion"]) if t), "source": r["source"]} for r in judged
         ],
-        "method": words.method(study, references),
+        "method": method(study, references),
         "inputs": inputs,
         "unused": _unused(study),
         "assumptions": assumptions,
         "sketch": sketch(study),
         "computation": computation,
         "checks": judged,
+        "unapplied": [{"title": u.title, "missing": u.missing} for u in study.unapplied],
         "findings": [{"text": text[0].upper() + text[1:], "reason": reason} for text, reason in study.findings.items()],
-        "limits": _limits(study),
+        "limits": limits(study),
         "limits_note": words.limits_note(judged),
-        "cautions": list(words.CAUTIONS),
+        "cautions": words.cautions(c),
         "software": _software(study),
         "rounding": _rounding(study),
         "conversions": conversions(ledger.lines()),
@@ -127,58 +130,29 @@ def _assumptions(study: Study, inputs: list[Json]) -> list[Json]:
             )
     for text, consequence in study.assumptions.values():
         add(text, words.SILENT, consequence, "")
-    standing: tuple[tuple[str, str], ...] = words.STANDING_ASSUMPTIONS
-    if study.route != "measured":
-        standing += words.DESIGN_ASSUMPTIONS
-    if study.route != "design":
-        standing += words.MEASURED_ASSUMPTIONS
-    for text, consequence in standing:
+    for text, consequence in words.standing(study):
         add(text, words.INHERENT, consequence, "")
     return found
 
 
-def _limits(study: Study) -> list[Json]:
-    """The ranges outside which the package stops applying, as the file states them."""
-    c = study.calculation
-    rows: list[tuple[str, str, Given | None]] = [
-        ("flow of one pump", "not above", c.pump.flow.highest),
-        ("level of the surface", "not below", c.supply.level.lowest if c.supply.level else None),
-        ("temperature of the liquid", "not above", c.liquid.temperature.highest),
-        ("pressure on the surface", "not below", c.supply.pressure.lowest if c.supply.pressure else None),
-        ("barometer at the site", "not below", c.site.barometer.lowest if c.site.barometer else None),
-    ]
-    for section in c.line.sections if c.line else ():
-        rows += [
-            (f"drop of {e.name or 'the strainer'}", "not above", e.fouled)
-            for e in section.elements
-            if e.kind == "strainer"
-        ]
-    rows += [
-        ("speed of the pump", "as", c.pump.npsh_required.speed),
-        ("impeller", "as", c.pump.npsh_required.impeller),
-    ]
-    address = {x.key: x.value.address for x in study.ledger.inputs}
-    passing = all(check.verdict in PASSING for check in study.checks)
-    return [
-        {
-            "what": what,
-            "limit": f"{word if passing else 'computed at'} {typeset_minus(g.text)}",
-            "address": address.get(g.key, ""),
-        }
-        for what, word, g in rows
-        if g is not None
-    ]
+_LIBRARIES = {
+    "CoolProp": "properties of liquids ({}); each look-up names its formulation",
+    "fluids": "table of pipe bores, ASME B36.10M",
+}
 
 
 def _software(study: Study) -> list[Json]:
-    lines = study.ledger.lines()
+    """What computed and printed it; a library with what it was asked for, where its lines say so."""
+    asked: dict[str, list[str]] = {}
+    for x in study.ledger.lines():
+        if x.library:
+            name, _, what = x.library.partition(" (")
+            asked.setdefault(name, []).append(what.removesuffix(")"))
     found = [{"name": f"calcpack {__version__}", "role": "equations, ledger, rules, record"}]
-    libraries = sorted({x.library for x in lines if x.library})
-    roles = {
-        "CoolProp": "properties of water: IAPWS-95 (thermodynamic), IAPWS 2008 (viscosity)",
-        "fluids": "table of pipe bores, ASME B36.10M",
-    }
-    found += [{"name": name, "role": roles[name.split()[0]]} for name in libraries]
+    found += [
+        {"name": name, "role": _LIBRARIES[name.split()[0]].format("; ".join(dict.fromkeys(what)))}
+        for name, what in sorted(asked.items())
+    ]
     found.append({"name": library("jsonschema"), "role": "form of the input file"})
     found.append({"name": library("weasyprint"), "role": "pages"})
     return found

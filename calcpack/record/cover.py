@@ -1,104 +1,47 @@
-"""Rule checks as plain data, and what the cover says of them."""
+"""What the cover says of the rules judged and of the inputs behind them."""
 
 from __future__ import annotations
 
 from collections import Counter
 from decimal import Decimal
 
-from .. import formula
-from ..ledger import Ledger
-from ..number import rounded
-from ..quantity import PLANT
-from ..rules import ALLOWED, Check, reported_decimals
-from ..study import Study
+from ..assessment import Study
+from ..number import MINUS, typeset_minus
 from ..symbols import NOMENCLATURE
-from ..value import Value, drift, in_unit
-from .lines import Json, References, number, value
+from ..value import drift
+from ..verdict import ALLOWED, reported_decimals
+from .lines import Json
 from .words import SILENT
 
-_RELATION = {">=": "≥", "<=": "≤", ">": ">", "<": "<", "==": "="}
 _RANK = {"not met": 0, "not assessed": 1, "met": 2, "not applicable": 3}
+#: How far an input is confirmed; each input counts once, the last two before the others.
+STATES = ("verified", "maker", "preliminary", "assumed", UNSTATED := "without source or status")
 
 
-def checks(study: Study, references: References) -> list[Json]:
-    """The rules judged, with both sides reported against the verdict: what there is rounded down, what is needed up."""
-    return [_check(study.ledger, c, f"9.{n}", references) for n, c in enumerate(study.checks, 1)]
-
-
-def _check(ledger: Ledger, c: Check, address: str, references: References) -> Json:
-    rising = c.rule.tree.op in (">=", ">")
-    names = formula.names(c.rule.tree)
-    margin = None
-    if c.margin is not None and c.left is not None and c.right is not None:
-        kind = NOMENCLATURE[names[0]].kind
-        own_unit = c.left.unit
-        plant = own_unit if kind == "temperature" else PLANT[ledger.system][kind][0]
-        shown = (
-            c.margin if kind == "temperature" else in_unit(Value(address, names[0], c.margin, 0.0, own_unit, ""), plant)
-        )
-        x = rounded(shown, min(_decimals(c.left), _decimals(c.right)), "down")
-        margin = {
-            "value": number(c.margin), "unit": own_unit.name, "headline": {"text": str(x), "unit": plant.name},
-            "percent": None if c.percent is None else str(rounded(c.percent, 1, "down")),
-        }  # fmt: skip
-    own = references.text(c.rule.cite)
-    return {
-        "address": address,
-        "id": c.rule.name,
-        "title": c.rule.title,
-        "about": c.about,
-        "formula": c.rule.text,
-        "relation": _RELATION[c.rule.tree.op],
-        "left": _side(ledger, c.left, names[0], "down" if rising else "up"),
-        "right": _side(ledger, c.right, names[1], "up" if rising else "down"),
-        "verdict": c.verdict,
-        "reason": c.reason,
-        "criterion": c.criterion,
-        "source": f"{c.source or 'criterion: no source stated'}; form of the rule: {own}",
-        "margin": margin,
-    }
-
-
-def _decimals(v: Value) -> int:
-    """Decimals of a reported side; a side that cannot be judged is shown without any."""
-    return reported_decimals(v) or 0
-
-
-def _side(ledger: Ledger, v: Value | None, symbol: str, toward: str) -> Json | None:
-    if v is None:
-        return None
-    typed = next((x.given for x in ledger.inputs if ledger.used[x.value.address] is v), None)
-    if typed is not None:
-        text, _, unit = typed.partition(" ")
-        headline = {"text": text, "unit": unit}
-    else:
-        plant = PLANT[ledger.system][NOMENCLATURE[v.symbol].kind][0]
-        shown = in_unit(v, plant)
-        headline = {"text": str(rounded(shown, _decimals(v), toward)), "unit": plant.name}
-    return {"symbol": symbol, "name": v.title, **value(v), "headline": headline}
+def weight(verdict: str, percent: Decimal | None) -> tuple[int, Decimal]:
+    """What decides stands first: not met before not assessed before met, then the least margin in per cent."""
+    return _RANK[verdict], Decimal("Infinity") if percent is None else percent
 
 
 def governing(judged: list[Json]) -> Json:
-    """The rule that decides: not met before not assessed before met, then the least margin in per cent."""
-    return min(
-        judged,
-        key=lambda r: (_RANK[r["verdict"]], Decimal(r["margin"]["percent"] or 1000) if r["margin"] else Decimal(1000)),
-    )
+    """The rule that decides."""
+    return min(judged, key=lambda r: weight(r["verdict"], _percent(r)))
+
+
+def _percent(r: Json) -> Decimal | None:
+    return Decimal(r["margin"]["percent"]) if r["margin"] and r["margin"]["percent"] else None
 
 
 def cover(study: Study, judged: list[Json], inputs: list[Json], assumptions: list[Json]) -> Json:
     """What the cover says: verdict, statement, tally, counts of unverified inputs."""
     tally = Counter(r["verdict"] for r in judged)
     verdict = "not met" if tally["not met"] else "not assessed" if tally["not assessed"] else "met"
-    statuses = [(x, x["provenance"]) for x in inputs if x.get("provenance")]
-    counts = Counter(p["status"] or "no status" for _, p in statuses)
-    unsourced = [x for x, p in statuses if not p["source"]]
+    states = [(x, _state(p)) for x in inputs if (p := x.get("provenance"))]
     silent = [a for a in assumptions if a["basis"] == SILENT]
+    counts = Counter(state for _, state in states)
     counts["assumed"] += len(silent)
     unverified = [
-        {"address": x["address"], "what": x["title"], "status": p["status"] or "no status"}
-        for x, p in statuses
-        if p["status"] != "verified"
+        {"address": x["address"], "what": x["title"], "status": state} for x, state in states if state != "verified"
     ]
     unverified += [{"address": a["address"], "what": a["text"], "status": "assumed"} for a in silent]
     return {
@@ -106,30 +49,45 @@ def cover(study: Study, judged: list[Json], inputs: list[Json], assumptions: lis
         "statement": _statement(study, judged),
         "tally": {word: tally[word] for word in _RANK},
         "governing": governing(judged)["address"],
-        "counts": {word: counts[word] for word in ("verified", "maker", "preliminary", "assumed")}
-        | {"without source": len(unsourced)},
+        "counts": {state: counts[state] for state in STATES},
         "unverified": unverified,
         "rounding": _rounding(study),
     }
+
+
+def _state(provenance: Json) -> str:
+    """How far an input is confirmed: assumed, else by its status, where it has a source as well."""
+    status: str = provenance["status"]
+    if status == "assumed" or (status and provenance["source"]):
+        return status
+    return UNSTATED
 
 
 def _sentence(r: Json) -> str:
     about = f" ({r['about']})" if r["about"] else ""
     if r["margin"] is None:
         return f"{r['title']}{about}: {r['verdict']}, {r['reason']}."
-    left, right, margin = r["left"]["headline"], r["right"]["headline"], r["margin"]["headline"]
+    left, right, margin = (_quantity(r[k]["headline"]) for k in ("left", "right", "margin"))
     if r["id"] == "highest_temperature":
-        return (
-            f"The highest temperature was used, {left['text']} {left['unit']}."
-            if r["verdict"] == "met"
-            else f"{r['title']}: {r['reason']}."
-        )
-    words = "short by" if margin["text"].startswith("-") else "met by"
-    subject = "NPSH available" if r["id"] == "npsh_margin" else "Submergence"
-    amount = margin["text"].lstrip("-")
+        met = r["verdict"] == "met"
+        return f"The highest temperature was used, {left}." if met else f"{r['title']}: {r['reason']}."
+    at_least = r["relation"] in "≥>"
+    subject = _SUBJECTS.get(r["id"], r["left"]["name"])
+    sides = f"{subject}{about} is {left}; {right} {'is needed' if at_least else 'at most is allowed'}"
     if r["verdict"] == "not assessed":
-        return f"{subject}{about} is {left['text']} {left['unit']}; {right['text']} {right['unit']} is needed: not assessed, {r['reason']}."
-    return f"{subject}{about} is {left['text']} {left['unit']}; {right['text']} {right['unit']} is needed: {words} {amount} {margin['unit']}."
+        return f"{sides}: not assessed, {r['reason']}."
+    word = "met" if not margin.startswith(MINUS) else "short" if at_least else "over"
+    return f"{sides}: {word} by {margin.lstrip(MINUS)}."
+
+
+#: Rule -> its left side in a sentence, where the title of its line would not do.
+_SUBJECTS = {"npsh_margin": "NPSH available", "submergence": "Submergence"}
+
+
+def _quantity(headline: Json) -> str:
+    """A short form in a sentence; a pure number has no unit."""
+    unit = "" if headline["unit"] == "1" else f" {headline['unit']}"
+    return f"{typeset_minus(headline['text'])}{unit}"
 
 
 def _statement(study: Study, judged: list[Json]) -> str:
@@ -142,8 +100,6 @@ def _statement(study: Study, judged: list[Json]) -> str:
     if study.differences:
         apart = ", ".join(f"{study.ledger.shown(d.value)} ({d.name})" for d in study.differences)
         words.append(f"Model less reading, at the state of the reading: {apart}.")
-    if study.findings:
-        words.append(f"Open findings: {len(study.findings)} (section 9).")
     return " ".join(words)
 
 
@@ -155,5 +111,5 @@ def _rounding(study: Study) -> str:
         return ""
     worst = max(sides, key=drift)
     unit = worst.unit.name
-    limit = ALLOWED[_decimals(worst)]
+    limit = ALLOWED[reported_decimals(worst) or 0]
     return f"largest effect of line rounding on a result: {drift(worst):.6f} {unit} (line {worst.address}); limit {limit:f} {unit}"

@@ -2,7 +2,9 @@
 
 from __future__ import annotations
 
+from collections.abc import Mapping
 from decimal import Decimal
+from types import MappingProxyType
 from typing import Any
 
 from .. import formula
@@ -13,6 +15,8 @@ from ..references import REFERENCES, Cite
 from ..value import Line, Losses, Part, Value
 
 Json = dict[str, Any]
+#: Address -> short form of the values that rules compare.
+Reported = Mapping[str, Json]
 
 
 class References:
@@ -55,15 +59,18 @@ def headline(ledger: Ledger, v: Value) -> Json:
     return {"text": number(x), "unit": unit.name}
 
 
-def _shown(ledger: Ledger, of: Line) -> Json:
-    """The figure shown large: an input and a table's entry as they stand there, a result in plant units."""
+def _shown(ledger: Ledger, of: Line, reported: Reported) -> Json:
+    """The figure shown large: an input and a table's entry as they stand there, a result in plant units.
+
+    A value that a rule compares is shown as the rule reports it.
+    """
     if of.kind in ("given", "constant") or (of.kind == "lookup" and not of.operands):
         return {"text": number(of.value.record), "unit": of.value.unit.name}
-    return headline(ledger, of.value)
+    return reported.get(of.value.address) or headline(ledger, of.value)
 
 
-def line(ledger: Ledger, of: Line, references: References) -> Json:
-    """One line with everything the page prints of it."""
+def line(ledger: Ledger, of: Line, references: References, reported: Reported = MappingProxyType({})) -> Json:
+    """One line with everything the page prints of it; ``reported`` are the short forms of values that rules compare."""
     v = of.value
     found: Json = {
         "address": v.address,
@@ -74,7 +81,7 @@ def line(ledger: Ledger, of: Line, references: References) -> Json:
         "operands": [{"symbol": symbol, **value(operand)} for symbol, operand in of.operands],
         "value": number(v.record),
         "unit": v.unit.name,
-        "headline": _shown(ledger, of),
+        "headline": _shown(ledger, of, reported),
         "source": references.text(of.cite),
         "note": of.validity,
         "key_result": of.key_result,
@@ -101,22 +108,22 @@ def line(ledger: Ledger, of: Line, references: References) -> Json:
     return found
 
 
-def part(ledger: Ledger, of: Part, references: References) -> Json:
+def part(ledger: Ledger, of: Part, references: References, reported: Reported) -> Json:
     """A part of the computation with its blocks."""
     blocks: list[Json] = []
     for block in of.blocks:
         if isinstance(block, str):
             blocks.append({"group": block})
         elif isinstance(block, Losses):
-            blocks.append({"losses": _losses(ledger, block, references)})
+            blocks.append({"losses": _losses(ledger, block, references, reported)})
         else:
-            blocks.append({"line": line(ledger, block, references)})
+            blocks.append({"line": line(ledger, block, references, reported)})
     return {"title": of.title, "scope": of.scope, "blocks": blocks}
 
 
-def _losses(ledger: Ledger, of: Losses, references: References) -> Json:
+def _losses(ledger: Ledger, of: Losses, references: References, reported: Reported) -> Json:
     rows = [{"row": r.label, "element": r.element, "line": line(ledger, r.line, references)} for r in of.rows]
-    return {"title": of.title, "rows": rows, "total": line(ledger, of.total, references), "worked": of.worked}
+    return {"title": of.title, "rows": rows, "total": line(ledger, of.total, references, reported), "worked": of.worked}
 
 
 def conversions(lines: list[Line]) -> list[Json]:

@@ -2,33 +2,35 @@
 
 from __future__ import annotations
 
+from collections.abc import Iterator
+
 from ..references import Cite
-from ..value import Value
-from . import Check, Rule, compare, without_numbers
+from ..study.results import Judged, Results
+from ..verdict import Check, Rule, compare, without_numbers
 
-NPSH_MARGIN = Rule(
-    "npsh_margin", "NPSH available with its margin", "NPSHA >= N_L", Cite("hi961", "ratio or difference, the greater")
-)
+ORDER = 10
+_TITLE, _CITE = "NPSH available with its margin", Cite("hi961", "ratio or difference, the greater")
+NPSH_MARGIN = Rule("npsh_margin", _TITLE, "NPSHA >= N_L", _CITE)
+#: The same where the margin must be exceeded.
+NPSH_ABOVE = Rule("npsh_margin", _TITLE, "NPSHA > N_L", _CITE)
 
 
-def check(
-    npsh: Value, limit: Value, *, about: str, flow: Value, at_flow: Value, criterion: str, governs: str, source: str
-) -> Check:
-    """Judge NPSH available at ``flow``; not assessed where NPSH required is stated for a lower flow only."""
-    if flow.shadow > at_flow.shadow:
-        reason = "NPSH required is stated at a lower flow than this one, and it rises with flow: ask the maker"
+def judge(results: Results) -> Iterator[Check]:
+    """One check for each result; not assessed where its own doubt, or what the pump needs, stands in the way."""
+    for each in results.judged:
+        yield _check(each)
+
+
+def _check(each: Judged) -> Check:
+    available, needed = each.available, each.needed
+    doubt = available.doubt or needed.doubt
+    rule = NPSH_ABOVE if needed.above else NPSH_MARGIN
+    if doubt or needed.limit is None:
         return without_numbers(
-            NPSH_MARGIN, "not assessed", reason, about=about, criterion=criterion, source=source, left=npsh
-        )
-    same = governs
-    lower = "" if flow.shadow >= at_flow.shadow else "; NPSH required is the one of a higher flow, on the safe side"
+            rule, "not assessed", doubt, about=available.about, criterion=needed.criterion, source=needed.source,
+            left=available.npsh,
+        )  # fmt: skip
     return compare(
-        NPSH_MARGIN,
-        npsh,
-        limit,
-        about=about,
-        criterion=criterion,
-        source=source,
-        met=same + lower,
-        not_met=same + lower,
-    )
+        rule, available.npsh, needed.limit, about=available.about, criterion=needed.criterion, source=needed.source,
+        met=needed.governs, not_met=needed.governs,
+    )  # fmt: skip

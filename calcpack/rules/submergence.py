@@ -2,29 +2,40 @@
 
 from __future__ import annotations
 
-from ..references import Cite
-from ..value import Value
-from . import Check, Rule, compare, without_numbers
+from collections.abc import Iterator
 
+from ..references import Cite
+from ..study import intake
+from ..study.entry import cited
+from ..study.results import Results
+from ..verdict import Check, Rule, compare, without_numbers
+
+ORDER = 30
 SUBMERGENCE = Rule("submergence", "Submergence against surface vortices", "S >= S_m", Cite("hi98"))
 
 
-def check(
-    there_is: Value | None,
-    needed: Value | None,
-    *,
-    free_surface: bool,
-    supply: str,
-    reference: str,
-    missing: str,
-    source: str,
-) -> Check:
-    """Judge submergence over the inlet's ``reference`` line; without a free surface the rule does not apply."""
-    criterion = f"Submergence at the lowest level, over the {reference or 'inlet'}, at least D (1 + 2.3 F)"
-    if not free_surface:
-        reason = f"{supply} has no free surface, so no vortex can draw gas into the inlet"
-        return without_numbers(SUBMERGENCE, "not applicable", reason, criterion=criterion, source=source)
-    if there_is is None or needed is None:
-        return without_numbers(SUBMERGENCE, "not assessed", missing, criterion=criterion, source=source)
+def judge(results: Results) -> Iterator[Check]:
+    """Judge submergence over the inlet's reference line; without a free surface the rule does not apply."""
+    entry, c = results.entry, results.calculation
+    reference = intake.reference(c.intake) if c.intake else "inlet"
+    criterion = f"Submergence at the lowest level, over the {reference}, at least D (1 + 2.3 F)"
+    source = cited(c.criteria.submergence.provenance) if c.criteria.submergence else ""
+    if c.supply.kind in ("loop", "main"):
+        reason = f"{c.supply.name} has no free surface, so no vortex can draw gas into the inlet"
+        yield without_numbers(SUBMERGENCE, "not applicable", reason, criterion=criterion, source=source)
+        return
+    if c.intake is None or results.worst.level is None:
+        missing = "the file describes no inlet" if c.intake is None else "the file gives no lowest level"
+        yield without_numbers(SUBMERGENCE, "not assessed", missing, criterion=criterion, source=source)
+        return
+    if c.criteria.submergence is None:
+        entry.assume(
+            "submergence",
+            "The least submergence is that of ANSI/HI 9.8, D (1 + 2.3 F)",
+            "the file names no criterion; the project may ask for another",
+        )
+    found = intake.submergence(entry, results.worst, results.inlet_flow)
     counted = f"counted from the {reference}"
-    return compare(SUBMERGENCE, there_is, needed, criterion=criterion, source=source, met=counted, not_met=counted)
+    yield compare(
+        SUBMERGENCE, found.there_is, found.needed, criterion=criterion, source=source, met=counted, not_met=counted
+    )

@@ -2,23 +2,45 @@
 
 from __future__ import annotations
 
-from ..references import PRACTICE
-from ..value import Value
-from . import Check, Rule, compare, without_numbers
+from collections.abc import Iterator
 
+from ..lookup import CONSTANTS
+from ..references import PRACTICE
+from ..study.entry import cited
+from ..study.liquid import cost_of_temperature, highest_temperature
+from ..study.results import Results
+from ..study.state import warmest
+from ..verdict import Check, Rule, compare, without_numbers
+
+ORDER = 20
 HIGHEST_TEMPERATURE = Rule("highest_temperature", "Highest temperature expected was used", "T >= T_h", PRACTICE)
 _CRITERION = "Vapour pressure is taken at the highest temperature expected, not at an average or a normal one"
 
 
-def check(used: Value, highest: Value | None, *, given_as: str, cost: str, source: str) -> Check:
-    """Judge the temperature ``used`` against the ``highest`` expected; ``given_as`` names the extreme where that is missing.
-
-    ``cost``, empty or beginning with a full stop, says what a warmer liquid would take from NPSH available.
-    """
+def judge(results: Results) -> Iterator[Check]:
+    """Judge the highest temperature of the results, against the highest expected; the cost of 5 K where it is missed."""
+    entry = results.entry
+    ledger = entry.ledger
+    ledger.group("The temperature used")
+    used = min(
+        (each.available.temperature for each in results.judged if not each.available.cold), key=lambda v: v.shadow
+    )
+    extreme, given = warmest(entry.calculation)
+    highest = highest_temperature(entry)
+    if highest is not None and highest.unit.name != used.unit.name:
+        used, highest = ledger.convert(used), ledger.convert(highest)
+    cost = ""
+    if highest is None or used.shadow < highest.shadow:
+        lost = cost_of_temperature(entry, results.worst)
+        if lost is not None:
+            cost = f". Each {CONSTANTS['dT'].text} warmer would take {ledger.shown(lost)} from NPSH available (line {lost.address})"
     if highest is None:
-        reason = f"the file gives only the {given_as} temperature; state the highest expected{cost}"
-        return without_numbers(HIGHEST_TEMPERATURE, "not met", reason, criterion=_CRITERION, source=source, left=used)
-    return compare(
-        HIGHEST_TEMPERATURE, used, highest, criterion=_CRITERION, source=source, met="the highest temperature was used",
-        not_met=f"a result stands at a lower temperature{cost}",
-    )  # fmt: skip
+        reason = f"the file gives only the {extreme} temperature; state the highest expected{cost}"
+        yield without_numbers(
+            HIGHEST_TEMPERATURE, "not met", reason, criterion=_CRITERION, source=cited(given), left=used
+        )
+    else:
+        yield compare(
+            HIGHEST_TEMPERATURE, used, highest, criterion=_CRITERION, source=cited(given),
+            met="the highest temperature was used", not_met=f"a result stands at a lower temperature{cost}",
+        )  # fmt: skip

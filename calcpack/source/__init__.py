@@ -7,11 +7,10 @@ from pathlib import Path
 
 from ..faults import Fault, InputFault, visible
 from .build import build
-from .checks import check_document
+from .checks import check
 from .document import parse
 from .file import read_bytes
 from .inputs import Calculation
-from .plant import check_plant
 from .schema import quantities
 from .spelling import MAX_FAULTS, correct
 from .validate import validate
@@ -38,7 +37,7 @@ def loads(raw: bytes, name: str) -> Calculation:
     root, spelling = correct(typed, name)
     read, unread = quantities(root, name)
     view = View(root, read, name)
-    faults = [*notation, *spelling, *validate(root, name), *unread, *check_document(view), *check_plant(view)]
+    faults = [*notation, *spelling, *validate(root, name), *unread, *check(view)]
     if faults:
         raise InputFault(_once(faults, name))
     return build(root, read, raw, name)

@@ -2,124 +2,39 @@
 
 from __future__ import annotations
 
-from collections.abc import Callable, Iterator
-from dataclasses import dataclass
-from datetime import date
 from hashlib import sha256
 from pathlib import PurePath
-from typing import Any, TypeVar
+from typing import Any
 
 from ..quantity import Quantity
+from .branch import Branch
+from .build_line import build_line, build_pipe
 from .inputs import (
     Calculation,
     Criteria,
-    Element,
-    Extremes,
+    CurvePoint,
     Gauge,
-    Given,
     Intake,
-    Line,
+    Level,
     Liquid,
     NpshRequired,
-    Pipe,
+    PropertyRow,
     Provenance,
     Pump,
     Reading,
+    Reciprocating,
     Revision,
-    Section,
     Site,
     Source,
     Submergence,
     Supply,
 )
-from .nodes import Mapping, Mark, Node, Scalar, Sequence, below, label
-
-T = TypeVar("T")
-
-
-def inherit(node: Node, above: Provenance) -> Provenance:
-    """The origin of ``node``: what it states itself, else what the mapping above it states.
-
-    A source of its own is not held to the status of another, and an assumed value does not inherit a source.
-    """
-    own = {name: _text(node, name) for name in ("source", "status", "note", "confirm")}
-    source, _, place = own["source"].partition(" ")
-    status = own["status"] or ("" if source else above.status)
-    if not source and own["status"] != "assumed":
-        source, place = above.source, above.place
-    note, confirm = own["note"] or above.note, own["confirm"] or above.confirm
-    return Provenance(source=source, place=place, status=status, note=note, confirm=confirm)
-
-
-def _text(node: Node, name: str) -> str:
-    found = node.get(name) if isinstance(node, Mapping) else None
-    return found.text if isinstance(found, Scalar) else ""
-
-
-@dataclass(frozen=True)
-class _Branch:
-    """A mapping of the file with its address and its origin; its methods rely on a tree without faults."""
-
-    node: Mapping
-    key: str
-    provenance: Provenance
-    read: dict[Mark, Quantity]
-
-    def text(self, name: str, absent: str = "") -> str:
-        return _text(self.node, name) or absent
-
-    def number(self, name: str, absent: int) -> int:
-        return int(self.text(name, str(absent)))
-
-    def day(self, name: str) -> date:
-        return date.fromisoformat(self.text(name))
-
-    def given(self, name: str) -> Given | None:
-        node = self.node.get(name)
-        if node is None:
-            return None
-        scalar = node.get("value") if isinstance(node, Mapping) else node
-        assert isinstance(scalar, Scalar)
-        origin = inherit(node, self.provenance)
-        return Given(
-            key=below(self.key, name),
-            text=scalar.text,
-            quantity=self.read[scalar.mark],
-            line=scalar.mark[0],
-            column=scalar.mark[1],
-            **vars(origin),
-        )
-
-    def must(self, name: str) -> Given:
-        found = self.given(name)
-        assert found is not None
-        return found
-
-    def branch(self, name: str) -> _Branch:
-        node = self.node.get(name)
-        assert isinstance(node, Mapping)
-        return _Branch(node, below(self.key, name), inherit(node, self.provenance), self.read)
-
-    def maybe(self, name: str, make: Callable[[_Branch], T]) -> T | None:
-        return make(self.branch(name)) if self.node.get(name) else None
-
-    def each(self, name: str) -> Iterator[_Branch]:
-        node = self.node.get(name)
-        if isinstance(node, Sequence):
-            for index, item in enumerate(node.items):
-                assert isinstance(item, Mapping)
-                address = f"{below(self.key, name)}[{label(item, index)}]"
-                yield _Branch(item, address, inherit(item, self.provenance), self.read)
-
-    @property
-    def place(self) -> dict[str, Any]:
-        line, column = self.node.mark
-        return {"key": self.key, "line": line, "column": column, "provenance": self.provenance}
+from .nodes import Mapping, Mark
 
 
 def build(root: Mapping, read: dict[Mark, Quantity], raw: bytes, name: str) -> Calculation:
     """The records of a checked tree; ``read`` holds the quantities by the mark of their text."""
-    top = _Branch(root, "", Provenance(), read)
+    top = Branch(root, "", Provenance(), read)
     head = top.branch("calculation")
     current = Revision(revision=head.text("revision"), date=head.day("date"), reason=head.text("status", "preliminary"))
     system: Any = head.text("units")
@@ -141,7 +56,7 @@ def build(root: Mapping, read: dict[Mark, Quantity], raw: bytes, name: str) -> C
         site=_site(top.branch("site")),
         liquid=_liquid(top.branch("liquid")),
         supply=_supply(top.branch("supply")),
-        line=top.maybe("line", _line),
+        line=top.maybe("line", build_line),
         pump=_pump(top.branch("pump")),
         intake=top.maybe("intake", _intake),
         criteria=_criteria(top.branch("criteria")),
@@ -153,149 +68,146 @@ def build(root: Mapping, read: dict[Mark, Quantity], raw: bytes, name: str) -> C
     )
 
 
-def _revision(at: _Branch) -> Revision:
+def _revision(at: Branch) -> Revision:
     return Revision(revision=at.text("revision"), date=at.day("date"), reason=at.text("reason"))
 
 
-def _sources(at: _Branch) -> tuple[Source, ...]:
-    return tuple(
-        Source(
-            id=name.text,
-            title=_text(node, "title"),
-            document=_text(node, "document"),
-            edition=_text(node, "edition"),
-        )
-        for name, node in at.node.entries
-    )
+def _sources(at: Branch) -> tuple[Source, ...]:
+    return tuple(_source(name.text, at.branch(name.text)) for name, _ in at.node.entries)
 
 
-def _extremes(at: _Branch) -> Extremes:
-    return Extremes(
-        lowest=at.given("lowest"),
-        normal=at.given("normal"),
-        highest=at.given("highest"),
-        average=at.given("average"),
-    )
+def _source(id: str, at: Branch) -> Source:
+    return Source(id=id, title=at.text("title"), document=at.text("document"), edition=at.text("edition"))
 
 
-def _site(at: _Branch) -> Site:
+def _site(at: Branch) -> Site:
     return Site(
         elevation=at.given("elevation"),
         weather_allowance=at.given("weather_allowance"),
-        barometer=at.maybe("barometer", _extremes),
+        barometer=at.maybe("barometer", Branch.extremes),
     )
 
 
-def _liquid(at: _Branch) -> Liquid:
+def _liquid(at: Branch) -> Liquid:
     return Liquid(
         name=at.text("name"),
-        temperature=_extremes(at.branch("temperature")),
+        temperature=at.branch("temperature").extremes(),
+        mass_fraction=at.given("mass_fraction"),
+        salinity=at.given("salinity"),
         vapour_pressure=at.given("vapour_pressure"),
+        vapour_pressure_kind=at.text("vapour_pressure_kind"),
+        vapour_pressure_of=at.text("vapour_pressure_of"),
         density=at.given("density"),
         viscosity=at.given("viscosity"),
+        table=tuple(map(_row, at.each("table"))),
     )
 
 
-def _supply(at: _Branch) -> Supply:
+def _row(at: Branch) -> PropertyRow:
+    return PropertyRow(
+        temperature=at.must("temperature"),
+        density=at.given("density"),
+        viscosity=at.given("viscosity"),
+        vapour_pressure=at.given("vapour_pressure"),
+    )
+
+
+def _supply(at: Branch) -> Supply:
     kind: Any = at.text("kind")
     return Supply(
         name=at.text("name"),
         kind=kind,
-        level=at.maybe("level", _extremes),
-        pressure=at.maybe("pressure", _extremes),
-    )
-
-
-def _pipe(at: _Branch) -> Pipe:
-    return Pipe(size=at.text("size"), schedule=at.text("schedule"), bore=at.given("bore"), provenance=at.provenance)
-
-
-def _line(at: _Branch) -> Line:
-    return Line(
-        fitting_set=at.text("fitting_set"),
-        friction_contingency=at.given("friction_contingency"),
-        sections=tuple(map(_section, at.each("sections"))),
-        provenance=at.provenance,
-    )
-
-
-def _section(at: _Branch) -> Section:
-    return Section(
-        id=at.text("id"),
-        name=at.text("name"),
-        pipe=_pipe(at),
-        material=at.text("material"),
-        roughness=at.given("roughness"),
-        elements=tuple(map(_element, at.each("elements"))),
+        level=at.maybe("level", _level),
+        pressure=at.maybe("pressure", Branch.extremes),
+        elevation=at.given("elevation"),
+        velocity_head=at.text("velocity_head"),
+        point=at.text("point"),
+        high_point=at.given("high_point"),
         **at.place,
     )
 
 
-def _element(at: _Branch) -> Element:
-    kind: Any = at.text("kind")
-    drop = at.branch("drop") if kind == "strainer" else None
-    return Element(
-        id=at.text("id"),
-        kind=kind,
-        name=at.text("name"),
-        count=at.number("count", 1),
-        length=at.given("length"),
-        shape=at.text("shape"),
-        angle=at.number("angle", 90 if kind == "elbow" else 0),
-        radius=at.text("radius"),
-        type=at.text("type"),
-        flow=at.text("flow"),
-        K=at.given("K"),
-        clean=drop.given("clean") if drop else None,
-        fouled=drop.given("fouled") if drop else None,
-        at_flow=at.given("at_flow"),
-        **at.place,
-    )
+def _level(at: Branch) -> Level:
+    return Level(**vars(at.extremes()), overflow=at.given("overflow"), drawdown=at.given("drawdown"))
 
 
-def _pump(at: _Branch) -> Pump:
+def _pump(at: Branch) -> Pump:
     return Pump(
         name=at.text("name"),
-        flow=_extremes(at.branch("flow")),
+        flow=at.branch("flow").extremes(),
         datum_elevation=at.must("datum_elevation"),
         datum=at.text("datum"),
+        arrangement=at.text("arrangement"),
+        running=at.number("running", 1),
+        eyes=at.number("eyes", 1),
+        speed=at.given("speed"),
+        best_efficiency_flow=at.given("best_efficiency_flow"),
         npsh_required=_npsh_required(at.branch("npsh_required")),
+        reciprocating=at.maybe("reciprocating", _reciprocating),
+        **at.place,
     )
 
 
-def _npsh_required(at: _Branch) -> NpshRequired:
+def _npsh_required(at: Branch) -> NpshRequired:
     return NpshRequired(
-        value=at.must("value"),
-        at_flow=at.must("at_flow"),
+        value=at.given("value"),
+        at_flow=at.given("at_flow"),
+        points=tuple(CurvePoint(flow=point.must("flow"), npsh=point.must("npsh")) for point in at.each("points")),
+        interpolation=at.text("interpolation", "linear"),
         speed=at.given("speed"),
+        speed_exponent=at.given("speed_exponent"),
         impeller=at.given("impeller"),
         curve=at.text("curve"),
         basis=at.text("basis"),
         certified=at.text("certified"),
         datum=at.text("datum"),
-        provenance=at.provenance,
+        datum_elevation=at.given("datum_elevation"),
+        **at.origin,
     )
 
 
-def _intake(at: _Branch) -> Intake:
+def _reciprocating(at: Branch) -> Reciprocating:
+    return Reciprocating(
+        type=at.text("type"),
+        C=at.given("C"),
+        liquid=at.text("liquid"),
+        k=at.given("k"),
+        stabiliser=at.text("stabiliser"),
+        **at.origin,
+    )
+
+
+def _intake(at: Branch) -> Intake:
     reference: Any = at.text("reference")
     return Intake(inlet_diameter=at.must("inlet_diameter"), reference=reference, elevation=at.must("elevation"))
 
 
-def _criteria(at: _Branch) -> Criteria:
+def _criteria(at: Branch) -> Criteria:
     margin = at.branch("npsh_margin")
+    specific = at.maybe("suction_specific_speed", lambda speed: (speed.given("highest"), speed.text("in")))
     return Criteria(
         ratio=margin.given("ratio"),
         difference=margin.given("difference"),
+        service=margin.text("service"),
         submergence=at.maybe("submergence", _submergence),
+        velocity=at.given("velocity"),
+        bell_velocity=at.maybe("bell_velocity", Branch.extremes),
+        bell_method=at.maybe("bell_velocity", lambda bell: bell.text("method")) or "",
+        straight_run=at.given("straight_run"),
+        operating_region=at.maybe("operating_region", Branch.extremes),
+        suction_specific_speed=specific[0] if specific else None,
+        suction_specific_speed_in=specific[1] if specific else "",
+        vapour_clearance=at.given("vapour_clearance"),
+        loop_pressure=at.given("loop_pressure"),
+        provenance=at.provenance,
     )
 
 
-def _submergence(at: _Branch) -> Submergence:
+def _submergence(at: Branch) -> Submergence:
     return Submergence(method=at.text("method"), provenance=at.provenance)
 
 
-def _reading(at: _Branch) -> Reading:
+def _reading(at: Branch) -> Reading:
     return Reading(
         name=at.text("name"),
         date=at.day("date"),
@@ -306,16 +218,17 @@ def _reading(at: _Branch) -> Reading:
         surface_pressure=at.given("surface_pressure"),
         gauge=_gauge(at.branch("gauge")),
         strainers=at.text("strainers"),
-        **at.place,
+        **at.origin,
     )
 
 
-def _gauge(at: _Branch) -> Gauge:
+def _gauge(at: Branch) -> Gauge:
     leg: Any = at.text("leg")
     return Gauge(
         pressure=at.must("pressure"),
         elevation=at.must("elevation"),
         leg=leg,
-        tap=_pipe(at.branch("tap")),
+        tap=build_pipe(at.branch("tap")),
         tap_elevation=at.given("tap_elevation"),
+        span=at.maybe("span", Branch.extremes),
     )

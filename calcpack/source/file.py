@@ -71,8 +71,11 @@ def _whole(path: Path, wanted: str, found: str, suggestion: str = "") -> InputFa
 def decode(raw: bytes, name: str) -> tuple[str, list[Fault]]:
     """The text of the bytes without its hidden characters, and a fault for each line that has some.
 
-    Raises :class:`InputFault` where it is not UTF-8 or holds nothing.
+    Raises :class:`InputFault` where it is a PDF, is not UTF-8 or holds nothing.
     """
+    if raw.startswith(b"%PDF"):
+        hint = "`calcpack verify` reads a package back; its input file is attached to it"
+        raise InputFault([Fault(name, 0, 0, "", "an input file (YAML)", "a PDF", hint, "file")])
     other = next((encoding for mark, encoding in _ENCODINGS.items() if raw.startswith(mark)), "")
     if not other and b"\0" in raw[:4]:
         other = "UTF-16 or UTF-32"

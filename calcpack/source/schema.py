@@ -87,6 +87,12 @@ def example(part: Schema) -> str:
     return ""
 
 
+def add(part: Schema, name: str) -> str:
+    """``add `bore: 202.7 mm` with the right value``: how a key of ``part`` that is missing would be typed."""
+    sample = example(part["properties"][name])
+    return f"add `{name}: {sample}` with the right value" if sample else f"add `{name}:`"
+
+
 def quantities(root: Mapping, file: str) -> tuple[dict[Mark, Quantity], list[Fault]]:
     """Every quantity of the file by the mark of its text, and the faults of those that cannot be read."""
     read: dict[Mark, Quantity] = {}

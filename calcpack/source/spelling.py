@@ -6,6 +6,7 @@ Reading on under the corrected key keeps one slip from being two faults (``flwo`
 from __future__ import annotations
 
 from ..faults import Fault, listed, nearest, shown
+from .meant import NOT_THAT
 from .nodes import Mapping, Node, Scalar, Sequence, below, label
 from .schema import PROVENANCE, Schema, allowed, below_key, definition, own_kind, schema
 
@@ -47,6 +48,8 @@ def _correct(node: Node, part: Schema, key: str, file: str, faults: list[Fault])
 def _meant(name: str, node: Mapping, part: Schema) -> str:
     """The key that was probably meant: one that is missing before one that is merely absent."""
     free = [each for each in allowed(node, part) if node.get(each) is None]
+    if name.casefold() in NOT_THAT and "vapour_pressure" in free:
+        return "vapour_pressure"
     return nearest(name, [each for each in free if each in part.get("required", [])]) or nearest(name, free)
 
 
@@ -55,6 +58,7 @@ def _fault(name: Scalar, meant: str, node: Mapping, part: Schema, key: str, file
     scope = f" for kind {kind}" if kind else ""
     plain = [each for each in allowed(node, part) if each not in PROVENANCE]
     wanted = f"the key `{meant}`" if meant else f"one of the keys {listed(plain)}{scope}"
-    found = f"{shown(name.text)}, which is no key here"
+    why = NOT_THAT.get(name.text.casefold(), "")
+    found = f"{shown(name.text)}{f': {why}' if why else ', which is no key here'}"
     hint = f"write `{meant}`" if meant else f"leave it out{scope}" if name.text in part.get("properties", {}) else ""
     return Fault(file, *name.mark, below(key, name.text), wanted, found, hint, "unknown key")

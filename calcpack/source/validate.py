@@ -4,7 +4,9 @@ from __future__ import annotations
 
 import re
 from collections.abc import Iterator
+from contextlib import suppress
 from dataclasses import dataclass
+from datetime import date
 from decimal import Decimal
 from functools import cache
 from typing import Any
@@ -12,10 +14,11 @@ from typing import Any
 from jsonschema import Draft202012Validator
 from jsonschema.exceptions import ValidationError
 
-from ..faults import Fault, did_you_mean, listed, shown
+from ..faults import Fault, listed, shown
 from ..quantity import KINDS
+from .meant import NOT_THAT, likely
 from .nodes import Mapping, Node, Scalar, Sequence, below
-from .schema import PROVENANCE, Schema, definition, example, own_kind, parts, schema
+from .schema import PROVENANCE, Schema, add, definition, own_kind, parts, schema
 
 _INTEGER = re.compile(r"-?(0|[1-9][0-9]{0,17})")
 _DECIMAL = re.compile(r"-?(0|[1-9][0-9]{0,29})\.[0-9]{1,30}")
@@ -102,10 +105,10 @@ def _missing(place: _Place, error: ValidationError) -> Iterator[Fault]:
             continue
         part = place.part["properties"][name]
         about = str({**definition(part)[0], **part}.get("description", "")).partition(". ")[0].rstrip(".")
-        sample = example(part)
-        hint = f"add `{name}: {sample}` with the right value" if sample else f"add `{name}:`"
         wanted = f"the key `{name}`{f' for kind {kind}' if kind else ''} ({about})"
-        yield Fault(place.file, *place.node.mark, below(place.key, name), wanted, "none", hint, "missing key")
+        yield Fault(
+            place.file, *place.node.mark, below(place.key, name), wanted, "none", add(place.part, name), "missing key"
+        )
 
 
 def _value(place: _Place, error: ValidationError) -> Iterator[Fault]:
@@ -115,12 +118,16 @@ def _value(place: _Place, error: ValidationError) -> Iterator[Fault]:
         return
     if rule == "enum":
         choices = _words(error.validator_value)
-        hint = "leave the quotation marks out" if place.text in choices else did_you_mean(place.text, choices)
-        yield place.fault(listed(choices), place.found, hint, "choice")
+        hint = "leave the quotation marks out" if place.text in choices else likely(place.text, choices)
+        why = NOT_THAT.get(place.text.casefold(), "")
+        yield place.fault(listed(choices), f"{place.found}: {why}" if why else place.found, hint, "choice")
     elif rule == "type":
         yield _type(place)
-    elif rule in ("minLength", "minItems"):
-        yield place.fault("at least one item" if rule == "minItems" else "a text", "none", "", "empty value")
+    elif rule == "minLength":
+        yield place.fault("a text", "none", "", "empty value")
+    elif rule == "minItems":
+        items = len(_words(error.instance))
+        yield place.fault(f"a list of at least {error.validator_value}", f"{items or 'none'}", "", "empty value")
     elif rule in ("maxItems", "maxProperties"):
         wanted = f"at most {error.validator_value} {place.key.rpartition('.')[2]}"
         yield place.fault(
@@ -150,14 +157,27 @@ def _respelt(text: str, part: Schema) -> str:
         text.upper(),
         re.sub(r"(?<=[A-Z])(?=[0-9])", " ", text.upper()),
         re.sub(r"^SCH(EDULE)?[. ]*", "", text.upper()),
-        re.sub(r"^([0-9]{4})[ ./-]?([0-9]{1,2})[ ./-]?([0-9]{1,2})$", _year_first, text),
+        *_year_first(text),
     )
-    meant = next((each for each in tries if "pattern" in part and re.search(part["pattern"], each)), "")
-    return f"did you mean `{meant}`?" if meant else ""
+    fit = list(dict.fromkeys(each for each in tries if "pattern" in part and re.search(part["pattern"], each)))
+    return f"did you mean {listed(f'`{each}`' for each in fit)}?" if fit else ""
 
 
-def _year_first(found: re.Match[str]) -> str:
-    return f"{found[1]}-{found[2]:>02}-{found[3]:>02}"
+#: Year first; day first, as points between the numbers say; either order of day and month.
+_DATES = (
+    (r"([0-9]{4})[ ./-]?([0-9]{1,2})[ ./-]?([0-9]{1,2})", "123"),
+    (r"([0-9]{1,2})[./-]([0-9]{1,2})[./-]([0-9]{4})", "321"),
+    (r"([0-9]{1,2})[/-]([0-9]{1,2})[/-]([0-9]{4})", "312"),
+)
+
+
+def _year_first(text: str) -> Iterator[str]:
+    """The days of the calendar that a date in another order may mean."""
+    for form, order in _DATES:
+        if found := re.fullmatch(form, text):
+            year, month, day = (int(found[int(each)]) for each in order)
+            with suppress(ValueError):
+                yield str(date(year, month, day))
 
 
 def _type(place: _Place) -> Fault:
@@ -170,13 +190,19 @@ def _type(place: _Place) -> Fault:
     if kinds == "object":
         names = [name for name in part.get("properties", {}) if name not in PROVENANCE]
         first = next(iter(part.get("required", names)), "")
-        hint = f"write `{{{first}: {place.text}}}`" if place.text and 0 < len(names) <= 4 else ""
+        hint = (
+            f"write `{{{first}: {place.text}}}`"
+            if place.text and (len(part.get("required", [])) == 1 or 0 < len(names) <= 4)
+            else ""
+        )
         return place.fault(
             f"keys and values ({listed(names)})" if names else "keys and values", place.found, hint, "type"
         )
     if kinds == "integer":
         whole, _, decimals = place.text.partition(".")
         hint = f"write `{whole}`" if _INTEGER.fullmatch(whole) and decimals and not decimals.strip("0") else ""
+        if _INTEGER.fullmatch(place.text):
+            hint = "leave the quotation marks out"
         return place.fault("a whole number", place.found, hint, "number")
     hint = f'put it in quotation marks: `"{place.text}"`' if place.text else ""
     if "pattern" in part and not re.search(part["pattern"], place.text):

@@ -9,7 +9,7 @@ from ..faults import Fault, InputFault
 from ..ledger import Ledger
 from ..lookup import OutOfRange
 from ..quantity import parse
-from ..source.inputs import Calculation, Element, Given
+from ..source.inputs import Calculation, Element, Given, Provenance
 from ..value import Value
 
 
@@ -22,6 +22,10 @@ class Place(Protocol):
     def column(self) -> int: ...
     @property
     def key(self) -> str: ...
+
+
+#: Symbol of an absolute pressure -> the equation that makes it of a gauge pressure.
+_FROM_GAUGE = {"p_s": "absolute_from_gauge", "p_k": "point_from_gauge"}
 
 
 class Entry:
@@ -51,11 +55,12 @@ class Entry:
             key=f"{element.key}.count", file_line=element.line, provenance=element.provenance,
         )  # fmt: skip
 
-    def absolute(self, given: Given, title: str, barometer: Callable[[], Value]) -> Value:
-        """A pressure on the surface, absolute: as given, or a gauge pressure with the barometer added."""
+    def absolute(self, given: Given, title: str, barometer: Callable[[], Value], symbol: str = "p_s") -> Value:
+        """A pressure as the absolute one ``symbol`` stands for: as given, or a gauge pressure with the barometer added."""
         if given.quantity.reference == "absolute":
-            return self.value(given, "p_s", f"{title}, absolute")
-        return self.ledger.apply("absolute_from_gauge", {"p_g": self.gauge(given, title), "p_b": barometer()})
+            return self.value(given, symbol, f"{title}, absolute")
+        operands = {"p_g": self.gauge(given, title), "p_b": barometer()}
+        return self.ledger.apply(_FROM_GAUGE[symbol], operands)
 
     def gauge(self, given: Given, title: str) -> Value:
         """A pressure relative to the barometer; a vacuum as read becomes a negative gauge pressure on a line of its own."""
@@ -68,10 +73,12 @@ class Entry:
         """Raise :class:`InputFault` at a place in the file."""
         raise InputFault([Fault(self.calculation.named, at.line, at.column, at.key, wanted, found, suggestion)])
 
-    def look_up(self, name: str, temperature: Value, given: Given) -> Value:
-        """A property of water; outside its range the fault stands at the temperature's place in the file."""
+    def look_up(
+        self, liquid: str, name: str, temperature: Value, given: Given, fraction: Value | None = None, title: str = ""
+    ) -> Value:
+        """A property of a liquid; outside its range the fault stands at ``given``, the temperature's place in the file."""
         try:
-            return self.ledger.look_up(name, temperature)
+            return self.ledger.look_up(liquid, name, temperature, fraction, title)
         except OutOfRange as error:
             self.refuse(given, str(error), given.text, "cite the property instead")
 
@@ -82,3 +89,8 @@ class Entry:
     def find(self, text: str, reason: str) -> None:
         """Record a finding, once."""
         self.findings.setdefault(text, reason)
+
+
+def cited(of: Provenance | None) -> str:
+    """A project's own source as it is printed, ``[S1] 4.3``; empty where none is stated."""
+    return "" if of is None else " ".join(part for part in (f"[{of.source}]" if of.source else "", of.place) if part)

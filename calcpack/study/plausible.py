@@ -2,15 +2,17 @@
 
 from __future__ import annotations
 
-from .. import lookup
-from ..lookup import OutOfRange
+from itertools import pairwise
+
+from ..lookup import LIQUIDS, OutOfRange, liquid
 from ..source.inputs import Given
+from . import property_table
 from .entry import Entry
 from .state import warmest
 
 
 def check(entry: Entry) -> None:
-    """Find readings outside the extremes the file states, and cited properties of water that water does not have."""
+    """Find readings outside the extremes the file states, and cited properties that the liquid does not have."""
     c = entry.calculation
     lowest_level = c.supply.level.lowest if c.supply.level else None
     lowest_barometer = c.site.barometer.lowest if c.site.barometer else None
@@ -19,9 +21,19 @@ def check(entry: Entry) -> None:
         _beyond(entry, reading.name, "level", reading.level, lowest_level, lower=True)
         _beyond(entry, reading.name, "flow", reading.flow, c.pump.flow.highest, lower=False)
         _beyond(entry, reading.name, "temperature", reading.temperature, c.liquid.temperature.highest, lower=False)
-    if c.liquid.name == "water":
-        for name in ("density", "vapour_pressure"):
-            _like_water(entry, name, getattr(c.liquid, name))
+    for name in _FAR:
+        cited: Given | None = getattr(c.liquid, name)
+        rows = property_table.rows(entry, name)
+        for temperature, given in [(row.temperature, getattr(row, name)) for row in rows] + (
+            [(warmest(c)[1], cited)] if cited else []
+        ):
+            _like_look_up(entry, name, given, temperature)
+    _table_runs_on(entry)
+    if c.liquid.vapour_pressure_kind == "effective":
+        entry.find(
+            "The vapour pressure is an effective one: it counts gas dissolved in the liquid",
+            "it lies above the true vapour pressure; NPSH available is counted down to where gas comes out",
+        )
 
 
 def _beyond(entry: Entry, name: str, what: str, read: Given | None, extreme: Given | None, *, lower: bool) -> None:
@@ -36,21 +48,69 @@ def _beyond(entry: Entry, name: str, what: str, read: Given | None, extreme: Giv
         )
 
 
-#: How far a cited property of water may lie from the look-up before it is asked about: salt, glycol or gas explain less.
-_FAR = {"density": (0.9, 1.1), "vapour_pressure": (0.8, 1.25)}
+#: How far a cited property may lie from the look-up before it is asked about: impurities explain less.
+_FAR = {"density": (0.9, 1.1), "viscosity": (0.5, 2.0), "vapour_pressure": (0.8, 1.25)}
+#: The same of a mixture's vapour pressure beside that of pure water: a strong brine has less than half of it.
+_FAR_BELOW_WATER = (0.4, 1.02)
 
 
-def _like_water(entry: Entry, name: str, cited: Given | None) -> None:
-    if cited is None:
+def _like_look_up(entry: Entry, name: str, cited: Given, temperature: Given) -> None:
+    """Find a cited property that is not at all that of the liquid; nothing is said of a liquid that is not looked up."""
+    c = entry.calculation.liquid
+    known = _looked_up(entry, name, cited, temperature)
+    if known is None:
         return
-    temperature = warmest(entry.calculation)[1]
-    try:
-        looked_up = lookup.water(name, float(temperature.quantity.si()))
-    except OutOfRange:
+    over_mixture = name == "vapour_pressure" and LIQUIDS[c.name].mixture
+    lowest, highest = _FAR_BELOW_WATER if over_mixture else _FAR[name]
+    effective = name == "vapour_pressure" and c.vapour_pressure_kind == "effective"
+    if effective:
+        lowest, highest = (lowest if over_mixture else 1.0), float("inf")
+    share = float(cited.quantity.si()) / known
+    if lowest <= share <= highest:
         return
-    low, high = _FAR[name]
-    if not low <= float(cited.quantity.si()) / looked_up <= high:
-        entry.find(
-            f"The {name.replace('_', ' ')} cited, {cited.text}, is not that of water at {temperature.text}",
-            "the look-up differs by more than dissolved salt or gas would explain; the unit or the temperature is in doubt",
+    reason = "the look-up differs by more than impurities would explain; the unit or the temperature is in doubt"
+    if effective:
+        reason = "an effective vapour pressure lies above the true one, which the look-up gives as higher than this"
+    elif name == "vapour_pressure" and share < lowest:
+        reason = (
+            "the look-up is far higher, so that NPSH available comes out too great; the unit, the temperature, or a Reid "
+            "vapour pressure taken for the true one is in doubt"
         )
+    entry.find(
+        f"The {name.replace('_', ' ')} cited, {cited.text}, is not that of {c.name} at {temperature.text}", reason
+    )
+
+
+def _looked_up(entry: Entry, name: str, cited: Given, temperature: Given) -> float | None:
+    """The property in SI as the look-up has it, where it has it; that of its water for a mixture's vapour pressure."""
+    c = entry.calculation.liquid
+    source = LIQUIDS.get(c.name)
+    if source is None:
+        return None
+    dissolved = c.salinity or c.mass_fraction
+    of, fraction = (c.name, float(dissolved.quantity.si())) if source.mixture and dissolved else (c.name, 0.0)
+    if name == "vapour_pressure" and source.mixture:
+        of, fraction = "water", 0.0
+    elif not source.offers(name):
+        return None
+    kelvin = float(temperature.quantity.si())
+    try:
+        known = liquid(of, name, kelvin, fraction)
+        kinematic = cited.quantity.unit.kind == "kinematic_viscosity"
+        return known / liquid(of, "density", kelvin, fraction) if kinematic else known
+    except OutOfRange:
+        return None
+
+
+def _table_runs_on(entry: Entry) -> None:
+    """Find neighbours in the table whose vapour pressure does not rise, or whose viscosity does not fall, with temperature."""
+    for name, rises in (("vapour_pressure", True), ("viscosity", False)):
+        for below, above in pairwise(property_table.rows(entry, name)):
+            first, second = (getattr(row, name).quantity.si() for row in (below, above))
+            if (second <= first) if rises else (second >= first):
+                words = name.replace("_", " ")
+                entry.find(
+                    f"The {words} of the table does not {'rise' if rises else 'fall'} from {below.temperature.text} to "
+                    f"{above.temperature.text}",
+                    f"that of a liquid {'rises' if rises else 'falls'} with temperature; a row is in doubt",
+                )

@@ -10,13 +10,19 @@ from ..source.inputs import Calculation, Given, Reading
 
 @dataclass(frozen=True)
 class State:
-    """Conditions of one run.  ``barometer`` is ``None`` where the site's lowest is taken; ``strainers`` clean or fouled."""
+    """Conditions of one run.
+
+    ``barometer`` is ``None`` where the site's lowest is taken; ``drawdown`` is taken off the level; ``running`` pumps draw
+    ``flow`` each; ``strainers`` are clean or fouled.
+    """
 
     name: str
     scope: str
     flow: Given
+    running: int
     temperature: Given
     level: Given | None
+    drawdown: Given | None
     pressure: Given | None
     barometer: Given | None
     strainers: str
@@ -25,46 +31,57 @@ class State:
 def warmest(calculation: Calculation) -> tuple[str, Given]:
     """The highest temperature the file gives and the name of its extreme."""
     t = calculation.liquid.temperature
-    for name, given in (("highest", t.highest), ("normal", t.normal), ("average", t.average)):
+    for name, given in (("highest", t.highest), ("normal", t.normal), ("average", t.average), ("lowest", t.lowest)):
         if given is not None:
             return name, given
-    raise AssertionError("the schema asks for one temperature at least")
+    raise AssertionError("source asks for one temperature at least")
 
 
 def worst_case(calculation: Calculation) -> State:
     """All unfavourable extremes together: lowest level and pressure, highest temperature and flow, fouled strainers."""
-    c = calculation
-    name, temperature = warmest(c)
-    level = c.supply.level.lowest if c.supply.level else None
+    name, temperature = warmest(calculation)
+    return _unfavourable(calculation, "worst case", f"{name} temperature", temperature)
+
+
+def design_states(calculation: Calculation) -> list[State]:
+    """The states the design route is run at: the worst case, and with the coldest liquid where the file gives it."""
+    if calculation.line is None and calculation.pump.arrangement != "wet_pit":
+        return []
+    states = [worst_case(calculation)]
+    coldest = calculation.liquid.temperature.lowest
+    if coldest is not None and coldest is not states[0].temperature:
+        states.append(_unfavourable(calculation, "coldest case", "lowest temperature", coldest))
+    return states
+
+
+def _unfavourable(c: Calculation, name: str, extreme: str, temperature: Given) -> State:
+    level, drawdown = (c.supply.level.lowest, c.supply.level.drawdown) if c.supply.level else (None, None)
     pressure = c.supply.pressure.lowest if c.supply.pressure else None
     highest = c.pump.flow.highest
     assert highest is not None, "the schema asks for the highest flow"
-    words = [f"flow {typeset_minus(highest.text)}", f"{name} temperature {typeset_minus(temperature.text)}"]
+    words = [f"flow {typeset_minus(highest.text)}", f"{extreme} {typeset_minus(temperature.text)}"]
+    if c.pump.running > 1:
+        words.insert(0, f"{c.pump.running} pumps running")
     if level is not None:
         words.insert(0, f"lowest level {typeset_minus(level.text)}")
     if pressure is not None:
         words.append(f"lowest pressure {typeset_minus(pressure.text)}")
     if c.line and any(e.kind == "strainer" for s in c.line.sections for e in s.elements):
         words.append("strainer fouled")
-    return State("worst case", ", ".join(words), highest, temperature, level, pressure, None, "fouled")
+    scope = ", ".join(words)
+    return State(name, scope, highest, c.pump.running, temperature, level, drawdown, pressure, None, "fouled")
 
 
 def as_found(reading: Reading) -> State:
-    """The state of a reading."""
+    """The state of a reading, of one pump alone."""
     words = [
         f"flow {typeset_minus(reading.flow.text)}",
-        reading.temperature.text,
+        typeset_minus(reading.temperature.text),
         f"barometer {typeset_minus(reading.barometer.text)}",
     ]
     if reading.level is not None:
         words.insert(0, f"level {typeset_minus(reading.level.text)}")
     return State(
-        reading.name,
-        ", ".join(words),
-        reading.flow,
-        reading.temperature,
-        reading.level,
-        reading.surface_pressure,
-        reading.barometer,
-        reading.strainers or "clean",
-    )
+        reading.name, ", ".join(words), reading.flow, 1, reading.temperature, reading.level, None,
+        reading.surface_pressure, reading.barometer, reading.strainers or "clean",
+    )  # fmt: skip

@@ -1,4 +1,4 @@
-"""The pressure on the liquid surface."""
+"""The barometer at the site: as read, the lowest on record, or the standard atmosphere less an allowance."""
 
 from __future__ import annotations
 
@@ -30,7 +30,16 @@ def barometer(entry: Entry, state: State) -> Value:
             return entry.value(station, "p_b", f"{word} station barometer, absolute")
         read = entry.value(station, "p_r", f"{word} station barometer, absolute")
         return ledger.apply("barometer_station", {"p_r": read, "dp_w": _allowance(entry)})
-    assert site.elevation is not None, "source asks for an elevation where no barometer is given"
+    standard = standard_atmosphere(entry)
+    assert standard is not None, "source asks for an elevation where no barometer is given"
+    return ledger.apply("barometer_standard", {"p_a": standard, "dp_w": _allowance(entry)})
+
+
+def standard_atmosphere(entry: Entry) -> Value | None:
+    """The pressure of the standard atmosphere at the site, where its elevation is given."""
+    site, ledger = entry.calculation.site, entry.ledger
+    if site.elevation is None:
+        return None
     if not LOWEST_SITE <= site.elevation.quantity.si() <= HIGHEST_SITE:
         entry.refuse(
             site.elevation,
@@ -42,23 +51,13 @@ def barometer(entry: Entry, state: State) -> Value:
         "Z": entry.value(site.elevation, "Z", "Site elevation above sea level"), "r_0": ledger.constant("r_0"),
     })  # fmt: skip
     exponent = ledger.apply("atmosphere_exponent", {"K_h": ledger.constant("K_h"), "beta": ledger.constant("beta")})
-    standard = ledger.apply("standard_atmosphere", {
+    return ledger.apply("standard_atmosphere", {
         "p_0": ledger.constant("p_0"), "beta": ledger.constant("beta"), "H": height, "T_0": ledger.constant("T_0"),
         "n_a": exponent,
     })  # fmt: skip
-    return ledger.apply("barometer_standard", {"p_a": standard, "dp_w": _allowance(entry)})
 
 
 def _allowance(entry: Entry) -> Value:
     given = entry.calculation.site.weather_allowance
     assert given is not None, "source asks for the allowance where the barometer is not the lowest reading"
     return entry.value(given, "dp_w", "Weather allowance on the barometer")
-
-
-def pressure(entry: Entry, state: State) -> Value:
-    """The absolute pressure on the surface: the barometer over an open one, the vessel's own in a closed one."""
-    if state.pressure is None:
-        return entry.ledger.apply("open_surface", {"p_b": barometer(entry, state)})
-    return entry.absolute(
-        state.pressure, f"Pressure in {entry.calculation.supply.name}", lambda: barometer(entry, state)
-    )

@@ -1,24 +1,20 @@
-"""What the schema cannot see about the document: origins, ids, dates, revisions, and the order of extremes.
-
-Every check takes the tree as it is, with faults elsewhere in it, so that one run finds all of them.
-"""
+"""Origins, ids, dates and revisions."""
 
 from __future__ import annotations
 
 from collections.abc import Iterator
 from datetime import date
-from itertools import pairwise
 
-from ..faults import Fault, listed, nearest, shown
-from .build import inherit
-from .inputs import Provenance
-from .nodes import Mapping, Node, Scalar, Sequence, below, children
-from .view import View
+from ...faults import Fault, listed, nearest, shown
+from ..branch import inherit
+from ..inputs import Provenance
+from ..nodes import Mapping, Node, Scalar, Sequence, below, children
+from ..view import View
 
 
-def check_document(view: View) -> Iterator[Fault]:
+def check(view: View) -> Iterator[Fault]:
     """Every fault of the document's own order."""
-    for each in (_origins, _unique, _dates, _revisions, _order):
+    for each in (_origins, _unique, _dates, _revisions):
         yield from each(view)
 
 
@@ -123,37 +119,3 @@ def _revisions(view: View) -> Iterator[Fault]:
     if entry and issued and entry != issued:
         wanted = f"the date of the calculation, {issued}, for its current revision"
         yield view.fault(item.get("date") or item, f"revisions[{name}].date", wanted, shown(str(entry)), "", "date")
-
-
-#: What a value counts as; the values of one group can only be compared when they count alike.
-_MEASURES = {
-    "gauge": "a gauge pressure",
-    "absolute": "an absolute pressure",
-    "pressure": "a pressure difference",
-    "length": "a head",
-}
-
-
-def _order(view: View) -> Iterator[Fault]:
-    """Extremes are measured alike and stand in their order."""
-    groups: list[tuple[str, Node | None, tuple[str, ...]]] = [
-        ("supply.level", view.at("supply", "level"), ("lowest", "normal", "highest")),
-        ("supply.pressure", view.at("supply", "pressure"), ("lowest", "normal")),
-        ("site.barometer", view.at("site", "barometer"), ("lowest", "normal")),
-        ("liquid.temperature", view.at("liquid", "temperature"), ("average", "normal", "highest")),
-        ("pump.flow", view.at("pump", "flow"), ("normal", "highest")),
-    ]
-    groups += [(f"{address}.drop", element.get("drop"), ("clean", "fouled")) for address, element in view.elements()]
-    for address, node, names in groups:
-        held = [(name, view.quantity(name, node=node)) for name in names if isinstance(node, Mapping)]
-        present = [(name, value) for name, value in held if value]
-        for (low, a), (high, b) in pairwise(present):
-            place = view.at(high, node=node)
-            assert place is not None
-            ours, theirs = (_MEASURES.get(v.reference or v.unit.kind, v.unit.kind) for v in (a, b))
-            if ours != theirs:
-                wanted, hint = f"{ours}, as for `{low}`", f"write both as {ours} or both as {theirs}"
-                yield view.fault(place, f"{address}.{high}", wanted, theirs, hint, "measure")
-            elif a.si() > b.si():
-                found = f"{b.text} {b.unit.name}, below {low} ({a.text} {a.unit.name})"
-                yield view.fault(place, f"{address}.{high}", f"a value not below `{low}`", found, "", "order")

@@ -1,0 +1,67 @@
+"""An assessment: an input file computed by the routes it calls for, and judged by the rules."""
+
+from __future__ import annotations
+
+from dataclasses import dataclass
+
+from . import rules
+from .ledger import Ledger
+from .source.inputs import Calculation
+from .study.entry import Entry
+from .study.results import Difference, Judged, Results, compute
+from .verdict import Check, Unapplied
+
+
+@dataclass(frozen=True)
+class Study:
+    """Results, the rules applied to them, and those the file neither asks for nor holds data for."""
+
+    results: Results
+    checks: tuple[Check, ...]
+    unapplied: tuple[Unapplied, ...]
+
+    @property
+    def calculation(self) -> Calculation:
+        """The input."""
+        return self.results.calculation
+
+    @property
+    def ledger(self) -> Ledger:
+        """The ledger with every line."""
+        return self.results.entry.ledger
+
+    @property
+    def route(self) -> str:
+        """``design``, ``measured`` or ``both``."""
+        return self.results.route
+
+    @property
+    def judged(self) -> tuple[Judged, ...]:
+        """The results the margin rule was applied to."""
+        return self.results.judged
+
+    @property
+    def differences(self) -> tuple[Difference, ...]:
+        """Model less reading, for each reading the model was run for."""
+        return self.results.differences
+
+    @property
+    def findings(self) -> dict[str, str]:
+        """Findings with their reasons."""
+        return self.results.entry.findings
+
+    @property
+    def assumptions(self) -> dict[str, tuple[str, str]]:
+        """Assumptions the tool made, with what they may cost."""
+        return self.results.entry.assumptions
+
+
+def run(calculation: Calculation) -> Study:
+    """Compute and judge ``calculation``.  Raises :class:`~calcpack.faults.InputFault` where its numbers cannot stand."""
+    results = compute(Entry(calculation, Ledger(calculation.units)))
+    judged = rules.judge(results)
+    return Study(
+        results,
+        tuple(each for each in judged if isinstance(each, Check)),
+        tuple(each for each in judged if isinstance(each, Unapplied)),
+    )

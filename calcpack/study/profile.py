@@ -1,0 +1,60 @@
+"""Pressure along the line, at every element whose elevation the file gives."""
+
+from __future__ import annotations
+
+from dataclasses import dataclass
+
+from ..value import Value
+from .entry import Entry
+from .flow import flow_in
+from .line import Passage, Passed, contingency
+from .liquid import Liquid
+from .reducer import other_end
+
+
+@dataclass(frozen=True)
+class Node:
+    """A point of the line: the end of an element, or its highest point; ``pressure`` is absolute."""
+
+    element: str
+    words: str
+    elevation: Value
+    pressure: Value
+
+
+def nodes(entry: Entry, origin_head: Value, liquid: Liquid, passage: Passage) -> tuple[Node, ...]:
+    """The pressure after each element with an elevation; ``origin_head`` is the energy head where the line starts.
+
+    Absolute: a result below zero says that no liquid stands there, and is for a rule to judge.
+    """
+    ledger, line = entry.ledger, entry.calculation.line
+    assert line is not None, "a passage leads through a line"
+    found: list[Node] = []
+    ledger.group("Pressure along the line")
+    for number, passed in enumerate(passage.rows, 1):
+        if passed.element.elevation is None:
+            continue
+        title = f"Elevation of the line, {passed.words}, element {passed.label}"
+        elevation = entry.value(passed.element.elevation, "z_n", title)
+        operands: dict[str, Value | list[Value]] = {
+            "gamma": liquid.specific_weight,
+            "E_0": origin_head,
+            "h": [each.loss for each in passage.rows[:number]],
+            "z_n": elevation,
+            "h_V": _velocity_head(entry, passed),
+        }
+        equation = "node_pressure"
+        if line.friction_contingency is not None:
+            equation = "node_pressure_with_contingency"
+            operands["c"] = contingency(entry, line)
+        pressure = ledger.apply(equation, operands, f"absolute, after element {passed.label}")
+        found.append(Node(passed.label, passed.words, elevation, pressure))
+    return tuple(found)
+
+
+def _velocity_head(entry: Entry, passed: Passed) -> Value:
+    """The velocity head at the end of an element: in its section's bore, or in the bore that a reducer leads to."""
+    flow, element = passed.flow, passed.element
+    if element.to is None:
+        return flow.velocity_head
+    return flow_in(entry, flow.flow, other_end(entry, element), f"at the end of element {passed.label}").velocity_head

@@ -1,0 +1,91 @@
+"""Acceleration head: what a reciprocating pump takes from NPSH available by moving the liquid in strokes."""
+
+from __future__ import annotations
+
+from collections.abc import Mapping
+
+from ..quantity import parse
+from ..references import Cite
+from ..source.inputs import Given
+from ..value import Value
+from . import curve, straight
+from .entry import Entry
+from .line import Passage
+
+#: Coefficient C by the type of the pump, and k by the liquid.
+PUMPS: Mapping[str, str] = {
+    "simplex single-acting": "0.400", "simplex double-acting": "0.200", "duplex single-acting": "0.200",
+    "duplex double-acting": "0.115", "triplex": "0.066", "quintuplex": "0.040", "septuplex": "0.028", "nonuplex": "0.022",
+}  # fmt: skip
+LIQUIDS: Mapping[str, str] = {"deaerated water": "1.4", "water": "1.5", "hydrocarbon": "2.0", "hot oil": "2.5"}
+_CITE = Cite("hi61")
+#: Length of straight pipe, m, up to which the form holds: about 50 ft.
+LONGEST = 15
+#: Why no reading settles a reciprocating pump.
+UNSEEN = "the mean of a gauge reading does not show the acceleration head that the pump takes in each stroke"
+
+
+def acceleration(entry: Entry, passage: Passage) -> tuple[Value | None, str]:
+    """The acceleration head of the straight pipes of the line, and why the result cannot be judged, where it cannot.
+
+    Source: ANSI/HI 6.1-6.5 and GPSA, recalled.
+    """
+    pump, ledger = entry.calculation.pump, entry.ledger
+    its = pump.reciprocating
+    assert its is not None, "only a reciprocating pump has an acceleration head"
+    if its.stabiliser == "fitted":
+        return (
+            None,
+            "a suction stabiliser is fitted, so the form of the acceleration head does not hold: its maker states what is left",
+        )
+    ledger.group("Acceleration head")
+    speed = pump.speed or pump.npsh_required.speed
+    coefficient = _coefficient(entry, "C", "Coefficient of the pump's type", its.C, its.type, PUMPS)
+    liquid = _coefficient(entry, "k", "Coefficient of the liquid", its.k, its.liquid, LIQUIDS)
+    if speed is None or coefficient is None or liquid is None:
+        missing = [
+            name for name, there in (("speed", speed), ("type or C", coefficient), ("liquid or k", liquid)) if not there
+        ]
+        return None, f"the acceleration head is not known: the file gives no {', no '.join(missing)} of the pump"
+    if not its.stabiliser:
+        entry.assume(
+            "stabiliser",
+            "No suction stabiliser is fitted",
+            "with one, less acceleration head is left: its maker states it",
+        )
+    operands = {"n_p": _speed(entry, speed), "C": coefficient, "k": liquid, "g": ledger.constant("g")}
+    heads, pipes = [], []
+    for flow in passage.flows:
+        own = [element for element in flow.section.elements if element.kind == "pipe"]
+        if own:
+            about = flow.section.name or flow.section.id
+            length = straight.length(entry, own, about)
+            heads.append(ledger.apply("acceleration_head", operands | {"L": length, "V": flow.velocity}, about))
+            pipes += own
+    if not heads:
+        return None, ""
+    taken = heads[0] if len(heads) == 1 else ledger.apply("acceleration_heads", {"h_as": heads})
+    together = straight.length(entry, pipes, "whole line")
+    doubt = ""
+    if together.shadow > LONGEST:
+        doubt = (
+            f"the acceleration head is known for a short, rigid line of {LONGEST} m (50 ft) at most; "
+            f"this one has {ledger.shown(together)} of straight pipe (line {together.address})"
+        )
+    return taken, doubt
+
+
+def _speed(entry: Entry, given: Given) -> Value:
+    """The speed of the pump; where only that of the curve is given, the pump is taken to run at it."""
+    return (curve.pump_speed if given is entry.calculation.pump.speed else curve.curve_speed)(entry, given)
+
+
+def _coefficient(
+    entry: Entry, symbol: str, title: str, stated: Given | None, name: str, table: Mapping[str, str]
+) -> Value | None:
+    """A coefficient as stated, else that of the table."""
+    if stated is not None:
+        return entry.value(stated, symbol, f"{title}, acceleration head")
+    if not name:
+        return None
+    return entry.ledger.tabulated(symbol, f"{title}: {name}", parse(table[name], "factor"), name, _CITE)
