@@ -148,11 +148,14 @@ def _no_package(path: Path, found: str) -> InputFault:
 
 
 def _verdict(record: dict[str, Any]) -> str:
+    from .number import typeset_minus
+    from .record.lines import quantity
+
     cover = record["cover"]
     rule = next(r for r in record["checks"] if r["address"] == cover["governing"])
     margin = rule["margin"]
-    amount = f", margin {margin['headline']['text']} {margin['headline']['unit']}" if margin else f": {rule['reason']}"
-    percent = f" ({margin['percent']} %)" if margin and margin["percent"] else ""
+    amount = f", margin {quantity(margin['headline'])}" if margin else f": {rule['reason']}"
+    percent = f" ({typeset_minus(margin['percent'])} %)" if margin and margin["percent"] else ""
     about = f" ({rule['about']})" if rule["about"] else ""
     return f"Verdict: {cover['verdict']}. Governing: rule {rule['address']}, {rule['title']}{about}: {rule['verdict']}{amount}{percent}."
 

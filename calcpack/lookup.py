@@ -108,35 +108,36 @@ def _glycol(name: str, fluid: str, highest: float, solute: str) -> LiquidSource:
     )
 
 
-#: Every liquid that is looked up.  A pure one begins at its triple point, or where its viscosity does, and ends at about
-#: 0.93 of its critical temperature: beyond that no pump is laid out by saturated liquid.  Solutes that evaporate with the
+#: Every liquid that is looked up.  A pure one begins where it melts, where its viscosity begins, or where its vapour pressure
+#: is some pascals (below, versions of the library differ), and ends at about 0.93 of its critical temperature: beyond that
+#: no pump is laid out by saturated liquid.  Solutes that evaporate with the
 #: water (ammonia, alcohols) are not offered: neither Raoult's law on the water nor pure water is safe for them.
 LIQUIDS: Mapping[str, LiquidSource] = {
     liquid.name: liquid
     for liquid in (
         LiquidSource("water", "Water", 273.16, 600, "iapws95", "iapws08"),
         LiquidSource("ammonia", "Ammonia", 196, 375, "Gao-JPCRD-2020", "Fenghour-JPCRD-1995"),
-        LiquidSource("propane", "n-Propane", 87, 340, "Lemmon-JCED-2009", "Vogel-JPCRD-1998"),
-        LiquidSource("propylene", "Propylene", 89, 335, "Lemmon-PROPYLENE-2013", ""),
-        LiquidSource("n-butane", "n-Butane", 136, 395, "Buecker-JPCRD-2006B", "Vogel-HTHP-1999"),
-        LiquidSource("isobutane", "IsoButane", 115, 375, "Buecker-JPCRD-2006B", "Vogel-IJT-2000"),
-        LiquidSource("n-pentane", "n-Pentane", 144, 435, "Thol-FPE-2019-alkanes-pentane", ""),
-        LiquidSource("isopentane", "Isopentane", 114, 425, "Lemmon-JCED-2006", ""),
-        LiquidSource("cyclopentane", "Cyclopentane", 181, 475, "Gedanitz-JCED-2015", ""),
-        LiquidSource("n-hexane", "n-Hexane", 179, 470, "Thol-FPE-2019-alkanes-hexane", "Michailidou-JPCRD-2013-Hexane"),
+        LiquidSource("propane", "n-Propane", 150, 340, "Lemmon-JCED-2009", "Vogel-JPCRD-1998"),
+        LiquidSource("propylene", "Propylene", 150, 335, "Lemmon-PROPYLENE-2013", ""),
+        LiquidSource("n-butane", "n-Butane", 180, 395, "Buecker-JPCRD-2006B", "Vogel-HTHP-1999"),
+        LiquidSource("isobutane", "IsoButane", 170, 375, "Buecker-JPCRD-2006B", "Vogel-IJT-2000"),
+        LiquidSource("n-pentane", "n-Pentane", 200, 435, "Thol-FPE-2019-alkanes-pentane", ""),
+        LiquidSource("isopentane", "Isopentane", 200, 425, "Lemmon-JCED-2006", ""),
+        LiquidSource("cyclopentane", "Cyclopentane", 210, 475, "Gedanitz-JCED-2015", ""),
+        LiquidSource("n-hexane", "n-Hexane", 220, 470, "Thol-FPE-2019-alkanes-hexane", "Michailidou-JPCRD-2013-Hexane"),
         LiquidSource("cyclohexane", "CycloHexane", 280, 510, "Zhou-JPCRD-2014", "Tariq-JPCRD-2014-Cyclohexane"),
-        LiquidSource("n-heptane", "n-Heptane", 184, 500, "Span-IJT-2003B", "Michailidou-JPCRD-2014-Heptane"),
-        LiquidSource("n-octane", "n-Octane", 217, 525, "Beckmueller-IJT-2019-octane", "Huber-FPE-2004"),
-        LiquidSource("n-decane", "n-Decane", 244, 570, "Lemmon-JCED-2006", "Huber-FPE-2004"),
-        LiquidSource("n-dodecane", "n-Dodecane", 265, 610, "Lemmon-EF-2004", "Huber-EF-2004"),
+        LiquidSource("n-heptane", "n-Heptane", 230, 500, "Span-IJT-2003B", "Michailidou-JPCRD-2014-Heptane"),
+        LiquidSource("n-octane", "n-Octane", 250, 525, "Beckmueller-IJT-2019-octane", "Huber-FPE-2004"),
+        LiquidSource("n-decane", "n-Decane", 270, 570, "Lemmon-JCED-2006", "Huber-FPE-2004"),
+        LiquidSource("n-dodecane", "n-Dodecane", 290, 610, "Lemmon-EF-2004", "Huber-EF-2004"),
         LiquidSource("benzene", "Benzene", 280, 520, "Thol-HTHP-2012", "Avgeri-JPCRD-2014-Benzene"),
-        LiquidSource("toluene", "Toluene", 179, 550, "Lemmon-JCED-2006", "Avgeri-JPCRD-2015-Toluene"),
+        LiquidSource("toluene", "Toluene", 230, 550, "Lemmon-JCED-2006", "Avgeri-JPCRD-2015-Toluene"),
         LiquidSource("o-xylene", "o-Xylene", 274, 585, "Zhou-JPCRD-2012", "Cao-JPCRD-2016-oxylene"),
         LiquidSource("m-xylene", "m-Xylene", 274, 570, "Zhou-JPCRD-2012", "Cao-JPCRD-2016-mxylene"),
         LiquidSource("p-xylene", "p-Xylene", 287, 570, "Zhou-JPCRD-2012", "Balogun-JPCRD-2015-pxylene"),
-        LiquidSource("methanol", "Methanol", 177, 475, "Piazza-FPE-2013", "Xiang-JPCRD-2006"),
-        LiquidSource("ethanol", "Ethanol", 160, 475, "Schroeder-JPCRD-2014", "Kiselev-IECR-2005"),
-        LiquidSource("acetone", "Acetone", 179, 470, "Lemmon-JCED-2006", ""),
+        LiquidSource("methanol", "Methanol", 210, 475, "Piazza-FPE-2013", "Xiang-JPCRD-2006"),
+        LiquidSource("ethanol", "Ethanol", 220, 475, "Schroeder-JPCRD-2014", "Kiselev-IECR-2005"),
+        LiquidSource("acetone", "Acetone", 200, 470, "Lemmon-JCED-2006", ""),
         LiquidSource("R134a", "R134a", 171, 345, "TillnerRoth-JPCRD-1994", "Huber-IECR-2003"),
         LiquidSource("sea water", "MITSW", 273.15, 393.15, "Sharqawy2010", "Sharqawy2010", "salinity", 0.12),
         _glycol("ethylene glycol", "MEG", 373.15, "62.068"),

@@ -52,11 +52,14 @@ def rounded(x: Decimal, decimals: int, toward: str = "even") -> Decimal:
 
 
 def headline(x: Decimal, decimals: int) -> Decimal:
-    """The short form shown large: ``decimals`` places, or four significant digits where that would show too little."""
+    """The short form shown large: ``decimals`` places, or four significant digits where that would show too little.
+
+    No more digits than a value of record has.
+    """
     if x.is_zero():
         return Decimal(0)
     if Decimal("0.1") <= abs(x) < Decimal(10_000):
-        return rounded(x, decimals)
+        return rounded(x, min(decimals, DIGITS - 1 - x.adjusted()))
     four = Context(prec=4, rounding=ROUND_HALF_EVEN).plus(x)
     return four.quantize(_unit(four.adjusted() - 3), context=_WIDE)
 

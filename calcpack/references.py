@@ -194,7 +194,7 @@ Lemmon-PROPYLENE-2013           Lemmon, E. W. et al.: Equation of state for prop
 Melinder2010                    Melinder, Å.: Properties of Secondary Working Fluids for Indirect Systems. IIR 2010
 Michailidou-JPCRD-2013-Hexane   Michailidou, E. K. et al.: J. Phys. Chem. Ref. Data 42 (2013) 033104
 Michailidou-JPCRD-2014-Heptane  Michailidou, E. K. et al.: J. Phys. Chem. Ref. Data 43 (2014) 023103
-Piazza-FPE-2013                 Piazza, L. and Span, R.: Fluid Phase Equilibria 349 (2013) 12-24
+Piazza-FPE-2013                 Piazza, L. and Span, R.: Fluid Phase Equilibria 349 (2013) 12-24 (CoolProp 7: de Reuck and Craven 1993)
 Schroeder-JPCRD-2014            Schroeder, J. A. et al.: J. Phys. Chem. Ref. Data 43 (2014) 043102
 Sharqawy2010                    Sharqawy, M. H. et al.: Desalination and Water Treatment 16 (2010) 354-380
 Span-IJT-2003B                  Span, R. and Wagner, W.: Int. J. Thermophys. 24 (2003) 41-109

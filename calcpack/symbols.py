@@ -85,6 +85,8 @@ dT      ΔT       .      temperature_difference step of temperature for the cost
 dT_s    ΔT       s      temperature_difference step of temperature for the vessel's nearness to boiling
 dz      Δz       .      length               change of the surface level
 E_0     E        0      length               energy head where the line starts, absolute, over the file's datum
+E_m     E        m      length               energy head at the point before, absolute, over the file's datum
+E_n     E        n      length               energy head at a point of the line, absolute, over the file's datum
 e_n     e        n      ratio                exponent of the speed ratio
 eps     ε        .      bore                 roughness of the pipe wall
 eps_c   ε        c      bore                 roughness of clean commercial steel, as the fitting set takes it
@@ -125,7 +127,6 @@ K_s     K        s      ratio                loss coefficient on the velocity he
 K_h     k        h      lapse_rate           hydrostatic constant g₀M₀/R*, U.S. Standard Atmosphere 1976
 L       L        .      length               length of straight pipe
 L_m     L        min    length               straight run needed before the pump
-L_n     L        n      length               length of equal pipes together
 L_s     L        s      length               straight pipe, together
 L_t     L        t      length               length of a taper
 l_1     l        1      length               length of 1 ft, to which a formula's number refers
@@ -237,6 +238,7 @@ V_i     V        i      velocity             mean velocity at the inlet or bell
 V_l     V        i,min  velocity             velocity at the inlet or bell, the least
 V_m     V        max    velocity             velocity in the line, the most
 w       w        .      ratio                mass fraction dissolved in water; of sea water its salinity
+x_b     x        b      ratio                width of the interval next to it, over its own
 x_D     x        D      ratio                straight run asked for, in diameters
 x_w     x        w      ratio                mole fraction of water
 y       y        .      ratio                place between two rows of the table, by the inverse of temperature

@@ -2,7 +2,8 @@
 
 from __future__ import annotations
 
-from .record.lines import Json
+from .number import typeset_minus
+from .record.lines import Json, quantity
 
 _GLYPH = {"met": "met", "not met": "NOT MET", "not applicable": "n/a", "not assessed": "not assessed"}
 
@@ -11,16 +12,25 @@ def table(record: Json) -> str:
     """Verdict, rules, findings, key results, unverified inputs and cautions, for reading."""
     c, cover = record["calculation"], record["cover"]
     rows = [f"{c['number']} rev {c['revision']}  {c['title']}", f"{c['system']}; route: {record['route']}", ""]
-    rows += [f"Verdict: {cover['verdict']}", f"  {cover['statement']}", "", "Rules"]
+    rows += [f"Verdict: {cover['verdict']}", f"  {cover['statement']}"]
+    if record["findings"]:
+        rows.append(f"  Open findings, below: {len(record['findings'])}.")
+    rows += ["", "Rules"]
     for r in record["checks"]:
         about = f", {r['about']}" if r["about"] else ""
-        rows.append(f"  {r['address']}  {_GLYPH[r['verdict']]:12} {r['title']}{about}")
-        rows.append(f"       {_sides(r)}")
-        rows.append(f"       {r['reason']}. Criterion: {r['criterion']}. Source: {r['source']}")
+        rows.append(f"  {r['address']:5} {_GLYPH[r['verdict']]:12} {r['title']}{about}")
+        rows += [
+            f"        {words}"
+            for words in (_sides(r), f"{r['reason']}. {r['criterion']}. Source: {r['source']}")
+            if words
+        ]
+    if record["unapplied"]:
+        rows += ["", "Rules not applied", *(f"  {u['title']}: {u['missing']}" for u in record["unapplied"])]
     rows += ["", "Key results"]
-    for x in _lines(record):
-        if x["key_result"]:
-            rows.append(f"  {x['address']:6} {x['headline']['text']:>10} {x['headline']['unit']:8} {x['title']}")
+    for part in record["computation"]:
+        for x in (b["line"] for b in part["blocks"] if "line" in b):
+            if x["key_result"]:
+                rows.append(f"  {x['address']:6} {quantity(x['headline']):>14}  {x['title']} ({part['title']})")
     if record["findings"]:
         rows += ["", "Findings", *(f"  {f['text']}: {f['reason']}." for f in record["findings"])]
     if cover["unverified"]:
@@ -34,12 +44,9 @@ def table(record: Json) -> str:
 
 
 def _sides(r: Json) -> str:
+    """Both sides and the margin; empty where there are none to compare."""
     if not (r["left"] and r["right"] and r["margin"]):
-        return "no two sides to compare"
-    left, right, margin = (r[k]["headline"] for k in ("left", "right", "margin"))
-    percent = f" ({r['margin']['percent']} %)" if r["margin"]["percent"] else ""
-    return f"{left['text']} {left['unit']}, to be {r['relation']} {right['text']} {right['unit']}; margin {margin['text']} {margin['unit']}{percent}"
-
-
-def _lines(record: Json) -> list[Json]:
-    return [b["line"] for part in record["computation"] for b in part["blocks"] if "line" in b]
+        return ""
+    left, right, margin = (quantity(r[k]["headline"]) for k in ("left", "right", "margin"))
+    percent = f" ({typeset_minus(r['margin']['percent'])} %)" if r["margin"]["percent"] else ""
+    return f"{left}, to be {r['relation']} {right}; margin {margin}{percent}"

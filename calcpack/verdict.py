@@ -24,7 +24,8 @@ PASSING: frozenset[Verdict] = frozenset({"met", "not applicable"})
 class Rule:
     """A criterion; ``text`` is a comparison that holds where the rule is met.
 
-    ``decides``: what is left over is a margin, which per cent can weigh against others; else a consistency of the input.
+    ``decides``: what is left over is a margin whose per cent can be weighed against those of others; a consistency of the
+    input has none.
     """
 
     name: str

@@ -16,9 +16,9 @@ from pathlib import Path
 
 import numpy as np
 
-from calcpack.assessment import Study, run
 from calcpack.arithmetic import InFloat, OnArrays, evaluate
-from calcpack.catalog import EQUATION, EQUATIONS
+from calcpack.assessment import Study, run
+from calcpack.catalog import EQUATIONS
 from calcpack.equations import Equation
 from calcpack.formula import Call, Cmp, walk
 from calcpack.source import load
@@ -86,7 +86,15 @@ BY_HAND: dict[str, Callable[[dict[str, np.ndarray]], np.ndarray]] = {
 
 
 #: How numpy spells the functions of the formula language.
-IN_NUMPY = {"sqrt": np.sqrt, "log10": np.log10, "ln": np.log, "exp": np.exp, "max": np.maximum, "min": np.minimum, "pi": np.pi}
+IN_NUMPY = {
+    "sqrt": np.sqrt,
+    "log10": np.log10,
+    "ln": np.log,
+    "exp": np.exp,
+    "max": np.maximum,
+    "min": np.minimum,
+    "pi": np.pi,
+}
 
 
 def plain() -> list[Equation]:
@@ -106,7 +114,7 @@ def arrays() -> tuple[float, str, int]:
     for equation in chosen:
         values = {s: rng.uniform(0.1, 0.9, 100_000) + (10 if s == "T_0" else 0) for s in equation.operands}
         code = compile(equation.text, equation.name, "eval")
-        by_hand = BY_HAND.get(equation.name) or (lambda v, code=code: eval(code, IN_NUMPY, v))  # noqa: S307
+        by_hand = BY_HAND.get(equation.name) or (lambda v, code=code: eval(code, IN_NUMPY, v))
         with np.errstate(all="ignore"):  # random numbers may lie outside a logarithm's domain; the time is the same
             pairs = [
                 (best(lambda: evaluate(equation.tree, values, on), 20), best(lambda: by_hand(values), 20))  # noqa: B023
@@ -179,7 +187,9 @@ def main() -> None:
     ratio, name, count = arrays()
     print(f"array path              worst ratio to numpy {ratio:.2f} ({name}; {count} equations, 100 000 points)")
     for elements, taken, lines in growth():
-        print(f"{elements:5} elements          {taken * 1e3:8.1f} ms, {taken / elements * 1e3:.2f} ms an element, {lines} lines")
+        print(
+            f"{elements:5} elements          {taken * 1e3:8.1f} ms, {taken / elements * 1e3:.2f} ms an element, {lines} lines"
+        )
     calculation = load(SAMPLE)
     run(calculation)
     whole, lines = best(lambda: run(calculation), 20), len(run(calculation).ledger.lines())

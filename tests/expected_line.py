@@ -128,11 +128,25 @@ LINE: dict[str, Faults] = {
             "keep the one that is not",
         ),
         (
+            "{bore: 154 mm}",
+            "line.sections[P1].elements[R2].from",
+            "no pipe of this section before",
+            "a section of its own",
+        ),
+        (
             "DN 100}}",
             "line.sections[P1].elements[R3].to.schedule",
             "`schedule` beside `size`: a nominal",
             "`schedule: STD`",
         ),
+    ],
+    "pipe_behind_a_reducer": [
+        (
+            "to: {bore: 100 mm}}",
+            "line.sections[P1].elements[R1].to",
+            "no pipe of this section after",
+            "a section of its own",
+        )
     ],
     "reducer_flat_side": [
         (

@@ -3,9 +3,11 @@
 from __future__ import annotations
 
 import re
+from collections.abc import Mapping
 from decimal import Decimal
 from fractions import Fraction
 from functools import cache
+from importlib import import_module
 from pathlib import Path
 from typing import Any
 
@@ -84,7 +86,7 @@ def computed(check: Check, system: str) -> dict[str, Value]:
     return values
 
 
-CHAINS = [c for c in CHECKS if "quantity" not in c and "fitting" not in c]
+CHAINS = [c for c in CHECKS if not {"quantity", "fitting", "table"} & set(c)]
 
 
 @pytest.mark.parametrize("system", ["SI", "US"])
@@ -118,6 +120,30 @@ FITTINGS = [c for c in CHECKS if "fitting" in c]
 def test_the_published_coefficient_is_tabulated(check: Check) -> None:
     found = coefficient("crane", *check["fitting"], 8)
     assert found is not None and found.constants == check["expected"]
+
+
+def reached(held: Any, path: str) -> Any:
+    """What stands in a table under dotted names: places of a tuple, keys, or attributes."""
+    for name in path.split("."):
+        if isinstance(held, tuple):
+            held = held[int(name)]
+            continue
+        held = held[name] if isinstance(held, Mapping) else getattr(held, name)
+    return held
+
+
+TABLES = [c for c in CHECKS if "table" in c]
+
+
+@pytest.mark.parametrize("check", TABLES, ids=[c["id"] for c in TABLES])
+def test_the_published_figure_is_tabulated(check: Check) -> None:
+    module, name, *keys = check["table"]
+    held = getattr(import_module(f"calcpack.{module}"), name)
+    for key in keys:
+        held = held[key]
+    assert {str(path): reached(held, str(path)) for path in check["expected"]} == {
+        str(path): expected for path, expected in check["expected"].items()
+    }
 
 
 def test_the_file_says_where_each_figure_comes_from() -> None:

@@ -17,7 +17,9 @@ import fluids
 import numpy
 import pint
 import pytest
+from lines import LINES
 from plants import INTAKE, Document, plant, studied
+from pumps import PUMPS
 from test_checks import CHECKS
 from test_fitting_set import every
 
@@ -32,13 +34,14 @@ from calcpack.quantity import parse
 from calcpack.references import REFERENCES, Cite
 from calcpack.root import residual, solve
 from calcpack.roughness import AGED, NEW
-from calcpack.rules import Rule, margin, submergence, temperature
+from calcpack.rules import topics
 from calcpack.symbols import KINDS, NOMENCLATURE
 from calcpack.units import COHERENT
 from calcpack.value import Line
+from calcpack.verdict import Rule
 
 PACKAGE = Path(calcpack.__file__).parent
-RULES: tuple[Rule, ...] = (margin.NPSH_MARGIN, submergence.SUBMERGENCE, temperature.HIGHEST_TEMPERATURE)
+RULES = [each for topic in topics() for each in vars(topic).values() if isinstance(each, Rule)]
 by_name = pytest.mark.parametrize("equation", EQUATIONS, ids=[e.name for e in EQUATIONS])
 
 # --- the list ---------------------------------------------------------------------------------------------------------
@@ -192,6 +195,8 @@ PLANTS: tuple[Document, ...] = (
             }
         }
     ),
+    *LINES,
+    *PUMPS,
 )  # fmt: skip
 
 
@@ -217,15 +222,16 @@ SI = {
     "ratio": "dimensionless", "length": "m", "bore": "m", "area": "m**2", "velocity": "m/s", "acceleration": "m/s**2", "flow": "m**3/s",
     "pressure": "Pa", "pressure_difference": "Pa", "density": "kg/m**3", "dynamic_viscosity": "Pa*s", "kinematic_viscosity": "m**2/s",
     "specific_weight": "N/m**3", "temperature": "K", "temperature_difference": "K", "lapse_rate": "K/m", "speed": "1/s",
+    "specific_speed": "dimensionless",
 }  # fmt: skip
 #: Values of usual size, in SI, at which every formula is inside its domain.
 USUAL = {
     "length": 3.2, "bore": 0.25, "area": 0.03, "velocity": 1.7, "acceleration": 9.80665, "flow": 0.05, "pressure": 1.0e5,
     "pressure_difference": 2.0e3, "density": 998.2, "dynamic_viscosity": 1.0e-3, "kinematic_viscosity": 1.0e-6, "specific_weight": 9789.0,
-    "temperature": 293.0, "temperature_difference": 5.0, "lapse_rate": 0.0065, "ratio": 1.3, "speed": 24.0,
+    "temperature": 293.0, "temperature_difference": 5.0, "lapse_rate": 0.0065, "ratio": 1.3, "speed": 24.0, "specific_speed": 145.0,
 }  # fmt: skip
 OWN = {"Re": 3.0e5, "r": 2.0e-4, "f": 0.016, "f_T": 0.014, "eps": 4.6e-5, "eps_c": 4.6e-5, "r_0": 6.356766e6, "Z": 900.0, "H": 900.0,
-       "n_a": 5.2559, "K_h": 0.034163195, "n": 3.0, "Fr": 0.6, "c": 0.1}  # fmt: skip
+       "n_a": 5.2559, "K_h": 0.034163195, "n": 3.0, "Fr": 0.6, "c": 0.1, "Q_A": 0.03, "Q_B": 0.08}  # fmt: skip
 
 
 @cache

@@ -290,10 +290,14 @@ def test_a_conversion_line_is_exact(name: str, system: str) -> None:
 
 
 def test_units_of_one_dimension_have_one_coherent_unit() -> None:
-    """Printed numbers go straight into a formula: every coherent unit is a product of the system's base units."""
+    """Printed numbers go straight into a formula: every coherent unit is a product of the system's base units.
+
+    But for absolute temperatures, which formulas take the ratios of only (tests/test_liquid.py): degrees Rankine in US.
+    """
     for system, base in (("SI", {"L": 1.0, "M": 1.0}), ("US", {"L": 0.3048, "M": 0.45359237 * 9.80665 / 0.3048})):
         for kind, (length, mass, _, _) in KINDS.items():
             size = base["L"] ** float(length) * base["M"] ** float(mass)
+            size *= 5 / 9 if (system, kind) == ("US", "absolute_temperature") else 1.0
             assert float(COHERENT[system][kind].factor) == pytest.approx(size, rel=1e-14), (system, kind)
             assert COHERENT[system][kind].offset == 0
             assert PLANT[system][kind][0].kind == COHERENT[system][kind].kind

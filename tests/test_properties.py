@@ -95,8 +95,9 @@ OIL = {
 
 
 @EXAMPLES
-@given(number(12, 45, 1), number(1, 12, 1))
+@given(number(12, 20, 1), number(1, 5, 1))
 def test_a_viscous_liquid_gains_by_warming(cold: float, step: float) -> None:
+    """As long as the flow stays laminar; where it turns, the friction factor jumps, and warming may cost."""
     base = OIL | {"liquid.temperature.highest": f"{cold} °C", "line.fitting_set": "hooper_2k"}
     warmer = base | {"liquid.temperature.highest": f"{cold + step:.1f} °C"}
     assert available(plant(warmer)) > available(plant(base))

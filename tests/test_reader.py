@@ -225,7 +225,7 @@ def test_falsehoods_in_tables_rules_and_cover_are_found() -> None:
     wanted = {
         rows[0]["address"]: "n K h_V gives another loss", rows[1]["address"]: "K differs from line",
         losses["total"]["address"]: "the loss shown is not the result",
-        "9.1": "the inequality gives another verdict",
+        "9.1": "what is asked and the numbers give another verdict",
         "9.3": "the margin is another", made["inputs"][3]["address"]: "used otherwise than given",
         "C2": "the factor is not the exact one", "": "the cover's tally is not that of the rules",
     }  # fmt: skip

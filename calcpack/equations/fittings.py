@@ -50,7 +50,7 @@ EQUATIONS = (
     Equation(
         "loss_between_points",
         "h",
-        "h_A + (h_B - h_A) * (Q - Q_A) / (Q_B - Q_A)",
+        "h_A + (h_B - h_A) * ((Q - Q_A) / (Q_B - Q_A))",
         "Loss at this flow, on the straight line between two points of the maker's curve",
         DEFINITION,
     ),

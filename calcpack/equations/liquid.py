@@ -43,7 +43,7 @@ EQUATIONS = (
     Equation(
         "density_between",
         "rho",
-        "rho_1 + (rho_2 - rho_1) * (T_t - T_1) / (T_2 - T_1)",
+        "rho_1 + (rho_2 - rho_1) * ((T_t - T_1) / (T_2 - T_1))",
         "Density between two rows of the table",
         PRACTICE,
         "linear in temperature",

@@ -1,19 +1,15 @@
-"""Pressure at points of the line."""
+"""Energy and pressure at points of the line."""
 
-from ..references import Cite
+from ..references import DEFINITION, Cite
 from . import Equation
 
-_BALANCE = Cite("", "energy balance from the supply to the point")
-_WHERE = "absolute; less every loss up to the point and the velocity head there"
+_BALANCE = Cite("", "energy balance from the point before")
 
 EQUATIONS = (
-    Equation("node_pressure", "p_n", "gamma * (E_0 - sum(h) - z_n - h_V)", "Pressure", _BALANCE, _WHERE),
+    Equation("energy_after", "E_n", "E_m - sum(h)", "Energy head", _BALANCE),
     Equation(
-        "node_pressure_with_contingency",
-        "p_n",
-        "gamma * (E_0 - (1 + c) * sum(h) - z_n - h_V)",
-        "Pressure",
-        _BALANCE,
-        f"{_WHERE}; with the contingency on the losses",
+        "energy_after_with_contingency", "E_n", "E_m - (1 + c) * sum(h)", "Energy head", _BALANCE,
+        "with the contingency on the losses",
     ),
-)
+    Equation("node_pressure", "p_n", "gamma * (E_n - z_n - h_V)", "Pressure", DEFINITION, "absolute"),
+)  # fmt: skip

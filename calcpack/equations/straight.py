@@ -4,7 +4,6 @@ from ..references import DEFINITION, Cite
 from . import Equation
 
 EQUATIONS = (
-    Equation("equal_pipes", "L_n", "n * L", "Length of equal pipes together", DEFINITION),
     Equation("straight_pipe", "L_s", "sum(L)", "Straight pipe, together", DEFINITION),
     Equation("straight_run_needed", "L_m", "x_D * D", "Straight run needed before the pump", DEFINITION),
     Equation(

@@ -20,7 +20,11 @@ def build_up(d: Drawing, scale: Scale, sketch: Mapping[str, Any]) -> None:
     pitch = (WIDTH - BARS) / (len(shown) + len(ends))
     wide = min(6.0, pitch - 0.8)
     for i, step in enumerate(shown):
-        x, top, tall = BARS + pitch * i, scale.y(max(step.start, step.end)), abs(scale.y(step.start) - scale.y(step.end))
+        x, top, tall = (
+            BARS + pitch * i,
+            scale.y(max(step.start, step.end)),
+            abs(scale.y(step.start) - scale.y(step.end)),
+        )
         d.area(x, top, wide, tall, PALE if step.name in HEIGHTS else "#FFFFFF", 0.2)
         if step.name in HATCHED:
             d.hatch(x, top, wide, tall, 1.4 if HATCHED[step.name] else 0.9, HATCHED[step.name])

@@ -117,7 +117,9 @@ def _point(d: Drawing, scale: Scale, sketch: Sketch) -> None:
     x, y = _run(sketch)[0], scale.y(_start(sketch))
     for side in (-HALF, HALF):
         d.between(TANK + 2, y + side, x, y + side, 0.35)
-    d.line(f"M{TANK + 2} {y - 2.6:.2f}L{TANK + 1} {y - 0.5:.2f}L{TANK + 3} {y + 0.5:.2f}L{TANK + 2} {y + 2.6:.2f}", 0.25)
+    d.line(
+        f"M{TANK + 2} {y - 2.6:.2f}L{TANK + 1} {y - 0.5:.2f}L{TANK + 3} {y + 0.5:.2f}L{TANK + 2} {y + 2.6:.2f}", 0.25
+    )
     words = [(line, True) for line in _two_lines(supply["name"], PUMP - TANK - 8)]
     if point:
         d.circle(TANK + 8, y, 0.7, fill=INK)
@@ -143,7 +145,10 @@ def _line(d: Drawing, scale: Scale, sketch: Sketch) -> None:
             d.between(x1, y1 + side, x2, y2 + side, 0.35)
         d.between(x1, y1, x2, y2, 0.15, SECOND, "3 0.8 0.6 0.8")
     if sketch["intake"] and sketch["intake"]["reference"] == "bell_lip":
-        d.line(f"M{first} {start - HALF:.2f}L{first - 1.6} {start - 2.4:.2f}V{start + 2.4:.2f}L{first} {start + HALF:.2f}", 0.35)
+        d.line(
+            f"M{first} {start - HALF:.2f}L{first - 1.6} {start - 2.4:.2f}V{start + 2.4:.2f}L{first} {start + HALF:.2f}",
+            0.35,
+        )
     lowest = max(y for _, y in path)
     for i, element in enumerate(elements):
         x = first + 2 + pitch * (i + 0.5)
@@ -213,7 +218,9 @@ def _element(d: Drawing, kind: str, x: float, y: float, half: float) -> None:
         case "tee":
             d.line(f"M{x - 0.8} {y - half:.2f}V{y - half - 1.8:.2f}M{x + 0.8} {y - half:.2f}V{y - half - 1.8:.2f}", 0.3)
         case "reducer":
-            d.line(f"M{x - 1.2} {y - half - 0.5:.2f}L{x + 1.2} {y - half + 0.4:.2f}V{y + half - 0.4:.2f}L{x - 1.2} {y + half + 0.5:.2f}Z", 0.3, fill="#FFFFFF")
+            wide, narrow = half + 0.5, half - 0.4
+            right = f"L{x + 1.2} {y - narrow:.2f}V{y + narrow:.2f}"
+            d.line(f"M{x - 1.2} {y - wide:.2f}{right}L{x - 1.2} {y + wide:.2f}Z", 0.3, fill="#FFFFFF")
         case "equipment":
             d.area(x - 1.6, y - half - 1.2, 3.2, 2 * half + 2.4, "#FFFFFF", 0.3)
         case "entrance" | "pipe":
@@ -236,7 +243,13 @@ def _hanging(d: Drawing, scale: Scale, sketch: Sketch) -> None:
     d.area(COLUMN - 3.2, top - 3.4, 6.4, 3.4, "#FFFFFF", 0.4)
     d.line(f"M{COLUMN - 1.3} {datum + 1.0:.2f}L{COLUMN} {datum - 1.4:.2f}L{COLUMN + 1.3} {datum + 1.0:.2f}Z", 0.25)
     d.label(COLUMN, top - 4.6, _cut(sketch["pump"]["name"], NAME_ROOM), "middle", bold=True)
-    d.label(COLUMN - 4.4, _clear(lip + 0.9, 2.6, scale), f"bell {label(str(_start(sketch)), signed=True)}", "end", colour=SECOND)
+    d.label(
+        COLUMN - 4.4,
+        _clear(lip + 0.9, 2.6, scale),
+        f"bell {label(str(_start(sketch)), signed=True)}",
+        "end",
+        colour=SECOND,
+    )
 
 
 # --- words ------------------------------------------------------------------------------------------------------------

@@ -159,7 +159,17 @@ def sources(line: Mapping[str, Any], context: Context) -> list[Markup]:
         )
     if line["kind"] == "lookup":
         rows.append(Markup.escape(line["library"]))
-    return [r for r in (*rows, Markup.escape(line["source"]), Markup.escape(line["note"])) if r]
+    return [r for r in (*rows, Markup.escape(line["source"]), noted(line["note"], context)) if r]
+
+
+def noted(words: str, context: Context) -> Markup:
+    """A note with its symbols, ``h_V``, written as such, in the face of the note: the serif is for operands."""
+    written = {f"{s.base}_{s.sub}": s for s in context.names.values()} | dict(context.names)
+    out = Markup("")
+    for part in re.split(r"(\w+_\w+)", words):
+        shown = written.get(part)
+        out += Markup("{}<sub>{}</sub>").format(shown.base, shown.sub) if shown and "_" in part else part
+    return out
 
 
 def residuals(line: Mapping[str, Any]) -> list[dict[str, Any]]:

@@ -43,7 +43,7 @@ def _aligned(value: str) -> str:
 
 def _joint(value: str, unit: str, room: float) -> Markup:
     """What stands between a number and its unit: a space, or a new row where the column is too narrow for both."""
-    together = _indent(value) + _width(f"{numeral(value).text(chr(0xA0))} {unit}")
+    together = _indent(value) + text.number_width(value, metrics.SANS_REGULAR, 8.8) + _width(f" {unit}")
     return Markup("&nbsp;") if together <= room * POINT else Markup("<br>")
 
 

@@ -92,13 +92,14 @@ def context(record: Mapping[str, Any]) -> dict[str, Any]:
 def _caption(sketch: Mapping[str, Any]) -> dict[str, str]:
     """What the figure shows, in words."""
     shown = {step.name for step in steps(sketch)}
-    left = "levels, datum and suction line as modelled, the numbers in circles follow the flow and are listed below"
+    below = "datum and suction line as modelled, the numbers in circles follow the flow and are listed below"
+    left = f"levels, {below}"
     if sketch["pump"]["arrangement"] == "wet_pit":
         left = "sump, level and pump as modelled; the triangle is the pump’s datum"
     elif not sketch["elements"]:
         left = "levels, datum and gauge"
     elif sketch["supply"]["point"]:
-        left = "the point where the pressure is known, datum and suction line as modelled, the numbers in circles follow the flow and are listed below"
+        left = f"the point where the pressure is known, {below}"
     cancel = " and ".join(head["name"] for head in sketch["heads"] if head["name"] not in shown)
     return {"left": left, "cancel": tables.capital(cancel)}
 
@@ -127,13 +128,17 @@ def _factors(r: Mapping[str, Any]) -> dict[tuple[str, str], str]:
 def _cover(r: Mapping[str, Any], shared: Context) -> dict[str, Any]:
     cover = r["cover"]
     governing = next((c for c in r["checks"] if c["address"] == cover["governing"]), None)
-    shown = sorted(r["checks"], key=lambda c: (c["address"] != cover["governing"], RANK.index(c["verdict"]), _percent(c)))
+    shown = sorted(
+        r["checks"], key=lambda c: (c["address"] != cover["governing"], RANK.index(c["verdict"]), _percent(c))
+    )
     return {
         "glyph": glyphs.verdict(cover["verdict"], 14.0),
         "word": tables.capital(cover["verdict"]),
         "statement": text.together(cover["statement"]),
         "long": len(cover["statement"]) > LONG_STATEMENT,
         "many": len(shown) > MANY_RULES,
+        "listed": 4 if len(shown) > MANY_RULES else 12,
+        "route": _route(r),
         "tally": [(n, word) for word, n in cover["tally"].items() if n],
         "governs": tables.rule(governing, shared) if governing else None,
         "rules": [tables.rule(c, shared) for c in shown],
@@ -149,6 +154,12 @@ def _cover(r: Mapping[str, Any], shared: Context) -> dict[str, Any]:
         "project": cut(r["calculation"]["project"], 75 * POINT, 8.8),
         "title": cut(r["calculation"]["title"], 120 * POINT, 8.8),
     }
+
+
+def _route(r: Mapping[str, Any]) -> str:
+    start = "the point where pressure is known" if r["sketch"]["supply"]["point"] else "the surface"
+    words = {"design": f"design, from {start}; not measured", "measured": "measured, from the gauge"}
+    return words.get(r["route"], "design and measured, side by side")
 
 
 def _percent(check: Mapping[str, Any]) -> Decimal:

@@ -58,7 +58,7 @@ def paper_edge(sheet: Sheet) -> float:
     for width, height, edge in PAPERS:
         if abs(sheet.width - width * MM) < 1 and abs(sheet.height - height * MM) < 1:
             return edge * MM
-    raise NotAPackage(f"sheet {sheet.number} is neither A4 nor Letter")
+    raise NotAPackage(f"a PDF whose sheet {sheet.number} is neither A4 nor Letter")
 
 
 def bands(sheets: Iterable[Sheet]) -> Iterator[Band]:

@@ -92,12 +92,12 @@ def sheets(data: bytes) -> list[Sheet]:
     """Every page of a PDF.  Raises :class:`NotAPackage` where PDFium cannot open the file or a page of it."""
     try:
         document = pdfium.PdfDocument(data)
-    except pdfium.PdfiumError as error:
-        raise NotAPackage(f"the file cannot be opened as a PDF: {error}") from None
+    except pdfium.PdfiumError:
+        raise NotAPackage("a file that does not open as a PDF") from None
     try:
         return [_sheet(document, i) for i in range(len(document))]
-    except pdfium.PdfiumError as error:
-        raise NotAPackage(f"a page of the file cannot be read: {error}") from None
+    except pdfium.PdfiumError:
+        raise NotAPackage("a PDF with a page that cannot be read") from None
     finally:
         document.close()
 

@@ -34,12 +34,12 @@ def verify(pdf: bytes) -> Report:
 def read_back(found: Sequence[Sheet]) -> Report:
     """Read a package back from its sheets; raises as :func:`verify` does."""
     if not any(strip(sheet) for sheet in found):
-        raise NotAPackage("no sheet bears a sheet number as our packages do")
+        raise NotAPackage("a PDF of which no sheet bears a sheet number as packages do")
     reading = Reading()
     for band in bands(found):
         reading.read(band)
     if not reading.book.classes:
-        raise NotAPackage("it holds no line of computation")
+        raise NotAPackage("a PDF without a line of computation")
     return reading.closed(found)
 
 

@@ -5,7 +5,7 @@ from __future__ import annotations
 import operator
 from collections.abc import Sequence
 from dataclasses import dataclass, replace
-from decimal import ROUND_CEILING, ROUND_FLOOR, Decimal
+from decimal import ROUND_CEILING, ROUND_FLOOR, ROUND_HALF_EVEN, Decimal
 from fractions import Fraction
 
 from .arithmetic import WIDE, of_record, rounded
@@ -49,8 +49,9 @@ def read_rule(band: Band, givens: dict[str, Quantity], book: Book) -> str:
     left, right = _side(upper.column(*LEFT)), _side(upper.column(*RIGHT))
     asked, sides = _pair(band, relation, left, right, book)
     rising = asked in "≥>"
-    _reported(band, "left side", left, sides[0], ROUND_FLOOR if rising else ROUND_CEILING, givens, book)
-    _reported(band, "right side", right, sides[1], ROUND_CEILING if rising else ROUND_FLOOR, givens, book)
+    down, up = (ROUND_FLOOR, ROUND_CEILING) if sides[0] != sides[1] else (ROUND_HALF_EVEN, ROUND_HALF_EVEN)
+    _reported(band, "left side", left, sides[0], down if rising else up, givens, book)
+    _reported(band, "right side", right, sides[1], up if rising else down, givens, book)
     a, b = sides[0].value, sides[1].value
     if not _HOLDS[relation](a, b):
         book.note(band.sheet, band.address, "the numbers do not stand in the relation printed", f"{a} {relation} {b}")
@@ -126,18 +127,24 @@ def _reported(
 
 
 def _margin(band: Band, room: Decimal, limit: Quantity, book: Book) -> None:
-    """The margin as shown, its per cent of the limit and its digits of record."""
-    cell = band.column(*MARGIN)
-    number, rest = scalar(words(g for g in cell if g.bold))
-    unit, margin = named(rest), of_record(room)
-    shown = rounded(Fraction(margin) * factor(limit.unit, unit), number, ROUND_FLOOR)
-    if shown != number:
-        book.note(band.sheet, band.address, "the margin is another", number, shown)
-    for row in rows(g for g in cell if g.colour == SECOND and not g.bold):
-        printed, name = scalar(str(row))
+    """The margin as shown, its per cent of the limit and its digits of record, each with its sign."""
+    cell, margin = band.column(*MARGIN), of_record(room)
+    shown = words(g for g in cell if g.bold)
+    number, rest = scalar(shown)
+    unit = named(rest)
+    found = rounded(Fraction(margin) * factor(limit.unit, unit), number, ROUND_FLOOR)
+    if found != number or not _signed(shown, margin):
+        book.note(band.sheet, band.address, "the margin is another", shown, found)
+    for row in map(str, rows(g for g in cell if g.colour == SECOND and not g.bold)):
+        printed, name = scalar(row)
         if name == "%":
             per_cent = WIDE.divide(WIDE.multiply(margin, Decimal(100)), abs(limit.value))
-            if rounded(per_cent, printed, ROUND_FLOOR) != printed:
-                book.note(band.sheet, band.address, "the margin in per cent is another", printed, per_cent)
-        elif Quantity(printed, named(name)) != Quantity(margin, limit.unit):
+            if rounded(per_cent, printed, ROUND_FLOOR) != printed or not _signed(row, margin):
+                book.note(band.sheet, band.address, "the margin in per cent is another", row, per_cent)
+        elif Quantity(printed, named(name)) != Quantity(margin, limit.unit) or not _signed(row, margin):
             book.note(band.sheet, band.address, "the margin of record is another", row, f"{margin} {limit.unit}")
+
+
+def _signed(printed: str, margin: Decimal) -> bool:
+    """Whether a margin bears its sign: a minus where something is missing, else a plus."""
+    return printed.startswith("−" if margin < 0 else "+")

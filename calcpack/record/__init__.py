@@ -7,21 +7,19 @@ import hashlib
 import json
 from collections import Counter
 from collections.abc import Iterator
-from decimal import Decimal
 
 from .. import __version__, formula
 from ..assessment import Study
 from ..lookup import library
 from ..source.inputs import Given
 from ..symbols import NOMENCLATURE
-from ..value import Value, drift
-from ..verdict import ALLOWED, reported_decimals
 from . import words
 from .checks import checks, reported
 from .cover import cover
 from .limits import limits
-from .lines import Json, References, conversions, line, number, part, short
+from .lines import Json, References, conversions, line, part
 from .method import method
+from .rounding import effects, greatest, rounding
 from .sketch import sketch
 
 FORMAT = "calcpack record 1"
@@ -32,7 +30,7 @@ def assemble(study: Study) -> Json:
     c, ledger, references, shown = study.calculation, study.ledger, References(), reported(study)
     computation = [part(ledger, p, references, shown) for p in ledger.parts if p.blocks]
     inputs = [line(ledger, x, references) for x in ledger.inputs]
-    judged = checks(study, references)
+    judged, moved = checks(study, references), effects(study)
     assumptions = _assumptions(study, inputs)
     record: Json = {
         "format": FORMAT,
@@ -43,7 +41,7 @@ def assemble(study: Study) -> Json:
         },
         "revisions": [{"revision": r.revision, "date": r.date.isoformat(), "reason": r.reason} for r in c.revisions],
         "route": study.route,
-        "cover": cover(study, judged, inputs, assumptions),
+        "cover": cover(study, judged, inputs, assumptions) | {"rounding": greatest(moved)},
         "purpose": words.purpose(c),
         "scope": words.scope(study),
         "exclusions": words.cautions(c)[-1:],
@@ -63,7 +61,7 @@ def assemble(study: Study) -> Json:
         "limits_note": words.limits_note(judged),
         "cautions": words.cautions(c),
         "software": _software(study),
-        "rounding": _rounding(study),
+        "rounding": rounding(moved),
         "conversions": conversions(ledger.lines()),
         "nomenclature": _nomenclature(study),
         "input_file": {"name": c.path, "sha256": c.sha256, "text": c.raw.decode("utf-8-sig")},
@@ -156,35 +154,6 @@ def _software(study: Study) -> list[Json]:
     found.append({"name": library("jsonschema"), "role": "form of the input file"})
     found.append({"name": library("weasyprint"), "role": "pages"})
     return found
-
-
-def _headlines(study: Study) -> Iterator[tuple[str, Value]]:
-    seen: set[str] = set()
-    for x in study.ledger.lines():
-        if x.key_result:
-            seen.add(x.value.address)
-            yield x.value.title, x.value
-    for check in study.checks:
-        for v in (check.left, check.right):
-            if v is not None and v.address not in seen and NOMENCLATURE[v.symbol].kind == "length":
-                seen.add(v.address)
-                yield v.title, v
-
-
-#: A drift below this is the noise of double precision, not of rounding.
-NOISE = Decimal("1e-9")
-
-
-def _rounding(study: Study) -> list[Json]:
-    """The proof that line rounding does not matter: each headline value in both books."""
-    rows = []
-    for title, v in _headlines(study):
-        shadow = float(v.shadow / v.unit.factor)
-        rows.append({
-            "address": v.address, "what": title, "record": number(v.record), "shadow": short(shadow), "unit": v.unit.name,
-            "drift": f"{drift(v):.1E}" if drift(v) > NOISE else "0", "limit": f"{ALLOWED[reported_decimals(v) or 0]:f}",
-        })  # fmt: skip
-    return rows
 
 
 def _nomenclature(study: Study) -> list[Json]:

@@ -12,7 +12,7 @@ from ..ledger import Ledger
 from ..number import rounded
 from ..quantity import PLANT, Unit
 from ..symbols import NOMENCLATURE
-from ..value import Value, in_unit
+from ..value import Line, Value, in_unit
 from ..verdict import Check, reported_decimals
 from .lines import Json, References, number, value
 
@@ -20,7 +20,7 @@ _SIGN = {">=": "≥", "<=": "≤", ">": ">", "<": "<"}
 _OPPOSITE = {">=": "<", "<=": ">", ">": "<=", "<": ">="}
 _HOLDS = {">=": operator.ge, "<=": operator.le, ">": operator.gt, "<": operator.lt}
 #: Decimals beyond which no value of record has a digit left to show.
-_ALL_DIGITS = 12
+_ALL_DIGITS = 8
 
 
 def checks(study: Study, references: References) -> list[Json]:
@@ -46,7 +46,7 @@ def _check(ledger: Ledger, c: Check, address: str, references: References) -> Js
         shown = _headlines(ledger, c, c.left, c.right)
         left, right = (_side(v, s, h) for v, s, h in zip((c.left, c.right), names, shown, strict=True))
         found = _SIGN[op if _HOLDS[op](c.left.record, c.right.record) else _OPPOSITE[op]]
-        margin = _margin(ledger, c, c.left, c.margin, min(_places(h["text"]) for h in shown))
+        margin = _margin(ledger, c, c.left, c.margin, _places(ledger, (c.left, c.right), shown))
     return {
         "address": address,
         "id": c.rule.name,
@@ -82,9 +82,15 @@ def _side(v: Value, symbol: str, headline: Json) -> Json:
 
 
 def _headlines(ledger: Ledger, c: Check, left: Value, right: Value) -> list[Json]:
-    """Both sides as reported, at as many decimals as keep true the relation that is printed between them."""
+    """Both sides as reported, at as many decimals as keep true the relation that is printed between them.
+
+    What there is is rounded down and what is needed up, so that neither flatters; two equal values are one figure.
+    """
     op = c.rule.tree.op
     toward, holds = ("down", "up") if op in (">=", ">") else ("up", "down"), _HOLDS[op](left.record, right.record)
+    if left.record == right.record:
+        toward = ("even", "even")
+    sides = []
     for more in range(_ALL_DIGITS):
         sides = [_reported(ledger, v, t, more) for v, t in zip((left, right), toward, strict=True)]
         a, b = ((Fraction(x) + unit.offset) * unit.factor for x, unit, _ in sides)
@@ -94,8 +100,10 @@ def _headlines(ledger: Ledger, c: Check, left: Value, right: Value) -> list[Json
 
 
 def _reported(ledger: Ledger, v: Value, toward: str, more: int) -> tuple[Decimal, Unit, Json]:
-    """A side as its input was typed, or in plant units at the decimals line rounding allows and ``more``."""
-    line = next((x for x in ledger.inputs if ledger.used[x.value.address] is v), None)
+    """A side as it was stated, or in plant units at the decimals line rounding allows and ``more``."""
+    line = _stated(ledger, v)
+    if line is not None and line.kind == "lookup":
+        return v.record, v.unit, {"text": number(v.record), "unit": v.unit.name}
     if line is not None:
         text, _, unit = line.given.partition(" ")
         return line.value.record, line.value.unit, {"text": text, "unit": unit}
@@ -104,5 +112,16 @@ def _reported(ledger: Ledger, v: Value, toward: str, more: int) -> tuple[Decimal
     return shown, plant, {"text": str(shown), "unit": plant.name}
 
 
-def _places(text: str) -> int:
-    return len(text.partition(".")[2])
+def _stated(ledger: Ledger, v: Value) -> Line | None:
+    """The input, or the entry of a table, that a side is, where it is one."""
+    line = ledger.line_of(v)
+    if line.kind == "lookup" and not line.operands:
+        return line
+    return next((x for x in ledger.inputs if ledger.used[x.value.address] is v), None)
+
+
+def _places(ledger: Ledger, sides: tuple[Value, Value], shown: list[Json]) -> int:
+    """Decimals of a margin: as few as a computed side shows, or as many as were stated."""
+    places = [len(h["text"].partition(".")[2]) for h in shown]
+    computed = [n for n, v in zip(places, sides, strict=True) if _stated(ledger, v) is None]
+    return min(computed) if computed else max(places)

@@ -6,11 +6,10 @@ from collections import Counter
 from decimal import Decimal
 
 from ..assessment import Study
-from ..number import MINUS, typeset_minus
-from ..symbols import NOMENCLATURE
-from ..value import drift
-from ..verdict import ALLOWED, reported_decimals
-from .lines import Json
+from ..number import MINUS
+from ..rules.margin import NPSH_MARGIN
+from ..verdict import PASSING
+from .lines import Json, quantity
 from .words import SILENT
 
 _RANK = {"not met": 0, "not assessed": 1, "met": 2, "not applicable": 3}
@@ -51,7 +50,6 @@ def cover(study: Study, judged: list[Json], inputs: list[Json], assumptions: lis
         "governing": governing(judged)["address"],
         "counts": {state: counts[state] for state in STATES},
         "unverified": unverified,
-        "rounding": _rounding(study),
     }
 
 
@@ -67,7 +65,7 @@ def _sentence(r: Json) -> str:
     about = f" ({r['about']})" if r["about"] else ""
     if r["margin"] is None:
         return f"{r['title']}{about}: {r['verdict']}, {r['reason']}."
-    left, right, margin = (_quantity(r[k]["headline"]) for k in ("left", "right", "margin"))
+    left, right, margin = (quantity(r[k]["headline"]) for k in ("left", "right", "margin"))
     if r["id"] == "highest_temperature":
         met = r["verdict"] == "met"
         return f"The highest temperature was used, {left}." if met else f"{r['title']}: {r['reason']}."
@@ -81,35 +79,25 @@ def _sentence(r: Json) -> str:
 
 
 #: Rule -> its left side in a sentence, where the title of its line would not do.
-_SUBJECTS = {"npsh_margin": "NPSH available", "submergence": "Submergence"}
-
-
-def _quantity(headline: Json) -> str:
-    """A short form in a sentence; a pure number has no unit."""
-    unit = "" if headline["unit"] == "1" else f" {headline['unit']}"
-    return f"{typeset_minus(headline['text'])}{unit}"
+_SUBJECTS = {NPSH_MARGIN.name: "NPSH available", "submergence": "Submergence"}
 
 
 def _statement(study: Study, judged: list[Json]) -> str:
-    """A few sentences in plant units: what decides, everything that fails, and where model and reading differ."""
-    first = governing(judged)
-    told = [first] + [r for r in judged if r["verdict"] in ("not met", "not assessed") and r is not first]
-    if first["id"] != "npsh_margin":
-        told += [r for r in judged if r["id"] == "npsh_margin" and r not in told]
-    words = [_sentence(r) for r in told]
+    """A few sentences in plant units: what decides, every rule that fails, NPSH, and where model and reading differ."""
+    decides = governing(judged)["address"]
+    told: dict[str, list[Json]] = {}
+    for r in sorted(judged, key=lambda r: weight(r["verdict"], _percent(r))):
+        told.setdefault(r["id"], []).append(r)
+    words = []
+    for first, *others in told.values():
+        if first["address"] == decides or first["id"] == NPSH_MARGIN.name or first["verdict"] not in PASSING:
+            words.append(_sentence(first))
+        more = sum(r["verdict"] == first["verdict"] for r in others)
+        if more and first["verdict"] not in PASSING:
+            words.append(
+                f"By the same rule {more} more {'results are' if more > 1 else 'result is'} {first['verdict']}."
+            )
     if study.differences:
         apart = ", ".join(f"{study.ledger.shown(d.value)} ({d.name})" for d in study.differences)
         words.append(f"Model less reading, at the state of the reading: {apart}.")
     return " ".join(words)
-
-
-def _rounding(study: Study) -> str:
-    sides = [
-        v for c in study.checks for v in (c.left, c.right) if v is not None and NOMENCLATURE[v.symbol].kind == "length"
-    ]
-    if not sides:
-        return ""
-    worst = max(sides, key=drift)
-    unit = worst.unit.name
-    limit = ALLOWED[reported_decimals(worst) or 0]
-    return f"largest effect of line rounding on a result: {drift(worst):.6f} {unit} (line {worst.address}); limit {limit:f} {unit}"

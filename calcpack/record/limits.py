@@ -26,7 +26,11 @@ def limits(study: Study) -> list[Json]:
     ]
     running = study.calculation.pump.running
     if running > 1:
-        row = {"what": "pumps running", "limit": f"{'not above' if passing else 'computed at'} {running}", "address": ""}
+        row = {
+            "what": "pumps running",
+            "limit": f"{'not above' if passing else 'computed at'} {running}",
+            "address": "",
+        }
         rows.insert(1, row)
     return rows
 
@@ -41,7 +45,7 @@ def _stated(c: Calculation) -> list[tuple[str, str, Given | None]]:
         ("level of the surface", "not below", level.lowest if level else None),
         ("drawdown of the surface", "not above", level.drawdown if level else None),
         ("temperature of the liquid", "not above", c.liquid.temperature.highest),
-        ("temperature of the liquid", "not below", coldest),
+        ("lowest temperature of the liquid", "not below", coldest),
         (f"pressure {place}", "not below", pressure.lowest if pressure else None),
         ("barometer at the site", "not below", c.site.barometer.lowest if c.site.barometer else None),
     ]

@@ -10,7 +10,7 @@ from typing import Any
 from .. import formula
 from ..conversion import conversion_tree, factor_text
 from ..ledger import Ledger
-from ..number import DIGITS
+from ..number import DIGITS, typeset_minus
 from ..references import REFERENCES, Cite
 from ..value import Line, Losses, Part, Value
 
@@ -57,6 +57,12 @@ def headline(ledger: Ledger, v: Value) -> Json:
     """The short form in plant units."""
     x, unit = ledger.headline(v)
     return {"text": number(x), "unit": unit.name}
+
+
+def quantity(headline: Json) -> str:
+    """A short form in a sentence; a pure number has no unit."""
+    unit = "" if headline["unit"] in ("", "1") else f" {headline['unit']}"
+    return f"{typeset_minus(headline['text'])}{unit}"
 
 
 def _shown(ledger: Ledger, of: Line, reported: Reported) -> Json:

@@ -70,7 +70,8 @@ def _design(c: Calculation) -> Iterator[str]:
     if c.supply.kind == "saturated":
         yield (
             "The vessel is saturated: its liquid and its vapour are at one temperature, and the pressure on the surface is the vapour "
-            "pressure itself. The two terms cancel; what is left is the static head less the losses. Both are printed, so that a reader sees them cancel."
+            "pressure itself. The two terms cancel; what is left is the static head less the losses. Both are printed, so that a "
+            "reader sees them cancel."
         )
     if c.pump.arrangement == "wet_pit":
         yield (
@@ -115,7 +116,9 @@ def _losses(line: Line) -> str:
         )
     sets = list(dict.fromkeys(SETS[e.set or line.fitting_set].name for e in elements if from_set(e)))
     if sets:
-        words.append(f"fittings by the loss coefficients of {' and '.join(sets)}, on the velocity head of their own bore")
+        words.append(
+            f"fittings by the loss coefficients of {' and '.join(sets)}, on the velocity head of their own bore"
+        )
     words += dict.fromkeys(text for key, text in _STATED.items() for e in elements if getattr(e, key) is not None)
     if "strainer" in kinds or any(e.loss is not None for e in elements):
         words.append("strainers and other makers' losses by the square of the flow")
@@ -168,11 +171,13 @@ def _needed(c: Calculation) -> str:
         ]
     if c.pump.speed is not None and npsh.speed is not None and c.pump.speed.quantity.si() != npsh.speed.quantity.si():
         words.append(
-            "It is carried from the speed of the curve to the speed of operation: the flow with the ratio of speeds, NPSH required with a power of it."
+            "It is carried from the speed of the curve to the speed of operation: the flow with the ratio of speeds, NPSH required "
+            "with a power of it."
         )
     if npsh.datum_elevation is not None:
         words.append(
-            "It counts from another elevation than the pump's datum; NPSH available is shifted there, on a line of its own, before the two are compared."
+            "It counts from another elevation than the pump's datum; NPSH available is shifted there, on a line of its own, before "
+            "the two are compared."
         )
     return " ".join(words)
 

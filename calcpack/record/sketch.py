@@ -108,14 +108,20 @@ def _point(study: Study) -> Json | None:
     if supply.elevation is None or supply.pressure is None or supply.pressure.lowest is None:
         return None
     unit = study.ledger.coherent("z")
-    return {"name": supply.point, "elevation": _length(unit, supply.elevation), "pressure": typeset_minus(supply.pressure.lowest.text)}
+    return {
+        "name": supply.point,
+        "elevation": _length(unit, supply.elevation),
+        "pressure": typeset_minus(supply.pressure.lowest.text),
+    }
 
 
 def _elements(study: Study) -> list[Json]:
     line = study.calculation.line
+    if line is None:
+        return []
     return [
         {"row": label(line, s, e), "kind": e.kind, "name": e.name or e.kind, "pumps": s.pumps}
-        for s in (line.sections if line else ()) for e in s.elements
+        for s in line.sections for e in s.elements
     ]  # fmt: skip
 
 

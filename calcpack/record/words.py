@@ -122,7 +122,11 @@ def limits_note(judged: list[Json]) -> str:
     """What the limits of use mean under the verdict."""
     if all(r["verdict"] in PASSING for r in judged):
         return "The verdict holds at these values and on the safe side of each; outside them the package no longer applies."
-    short = [word for verdict, word in (("not met", "met"), ("not assessed", "assessed")) if any(r["verdict"] == verdict for r in judged)]
+    short = [
+        word
+        for verdict, word in (("not met", "met"), ("not assessed", "assessed"))
+        if any(r["verdict"] == verdict for r in judged)
+    ]
     return (
         f"These are the values computed, not permitted limits: at them not every rule is {' or '.join(short)}. "
         "No limit of operation follows from this package."

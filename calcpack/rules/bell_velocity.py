@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 from collections.abc import Iterator
+from dataclasses import dataclass
 from math import inf
 
 from ..quantity import parse
@@ -24,7 +25,15 @@ WINDOWS = (
     (1.260, "315 to 1260 L/s", "0.9 m/s", "2.4 m/s"),
     (inf, "above 1260 L/s", "1.2 m/s", "2.1 m/s"),
 )
-_TITLES = {"V_l": "the least", "V_h": "the most"}
+
+
+@dataclass(frozen=True)
+class _Limit:
+    """A limit of the velocity: its text, its value, and the range of flow it is published for."""
+
+    text: str
+    value: Value
+    range: str = ""
 
 
 def judge(results: Results) -> Iterator[Check | Unapplied]:
@@ -34,39 +43,35 @@ def judge(results: Results) -> Iterator[Check | Unapplied]:
     if asked is None:
         yield Unapplied("Velocity at the inlet", "the file asks for no limits")
         return
-    source = cited(asked.lowest or asked.highest or c.criteria.provenance)
+    method = c.criteria.bell_method
+    source = cited(asked.lowest or asked.highest or (method.provenance if method else None))
     if c.intake is None:
-        missing = "the file describes no inlet"
-        yield lacking(
-            BELL_HIGH, missing, asked=True, criterion="The velocity at the inlet keeps its limits", source=source
-        )
+        criterion = "The velocity at the inlet keeps its limits"
+        yield lacking(BELL_HIGH, "the file describes no inlet", asked=True, criterion=criterion, source=source)
         return
     entry.ledger.group("Velocity at the inlet")
-    flow = results.inlet_flow
-    velocity = inlet_velocity(entry, flow)
-    if c.criteria.bell_method:
-        lowest, highest, words = _window(entry, flow)
-    else:
-        lowest, highest, words = _own(entry, asked.lowest, "V_l"), _own(entry, asked.highest, "V_h"), ""
-    for rule, limit, word in ((BELL_LOW, lowest, "at least"), (BELL_HIGH, highest, "at most")):
-        if limit:
-            criterion = f"The velocity at the inlet is {word} {entry.ledger.shown(limit)}{words}"
-            yield compare(rule, velocity, limit, criterion=criterion, source=source)
+    velocity = inlet_velocity(entry, results.inlet_flow)
+    reason = f"the mean velocity of the flow through the inlet (line {velocity.address})"
+    for rule, limit, word in zip((BELL_LOW, BELL_HIGH), _limits(results), ("at least", "at most"), strict=True):
+        if limit is not None:
+            criterion = f"The velocity at the inlet is {word} {limit.text}{limit.range}"
+            yield compare(rule, velocity, limit.value, criterion=criterion, source=source, met=reason, not_met=reason)
 
 
-def _own(entry: Entry, given: Given | None, symbol: str) -> Value | None:
-    """A limit of the project."""
-    return None if given is None else entry.value(given, symbol, f"Velocity at the inlet, {_TITLES[symbol]}")
+def _limits(results: Results) -> tuple[_Limit | None, _Limit | None]:
+    """The lowest and the highest velocity: the project's own, else those of ANSI/HI 9.8 for the flow through one bell."""
+    entry, asked = results.entry, results.calculation.criteria.bell_velocity
+    if asked is not None and not results.calculation.criteria.bell_method:
+        return _own(entry, asked.lowest, "V_l", "the least"), _own(entry, asked.highest, "V_h", "the most")
+    _, words, lowest, highest = next(row for row in WINDOWS if results.inlet_flow.shadow < row[0])
+    return _published(entry, lowest, words, "V_l", "the least"), _published(entry, highest, words, "V_h", "the most")
 
 
-def _window(entry: Entry, flow: Value) -> tuple[Value | None, Value | None, str]:
-    """The limits of ANSI/HI 9.8 for the flow through one bell."""
-    _, words, lowest, highest = next(row for row in WINDOWS if flow.shadow < row[0])
-    place = f"flow through one bell {words}"
+def _own(entry: Entry, given: Given | None, symbol: str, title: str) -> _Limit | None:
+    return None if given is None else _Limit(given.text, entry.value(given, symbol, f"Velocity at the inlet, {title}"))
 
-    def entered(symbol: str, title: str, text: str) -> Value:
-        return entry.ledger.tabulated(
-            symbol, f"Velocity at the inlet, {title}", parse(text, "velocity_limit"), place, _CITE
-        )
 
-    return entered("V_l", "the least", lowest), entered("V_h", "the most", highest), f" ({place}, ANSI/HI 9.8)"
+def _published(entry: Entry, text: str, words: str, symbol: str, title: str) -> _Limit:
+    place, quantity = f"flow through one bell {words}", parse(text, "velocity_limit")
+    value = entry.ledger.tabulated(symbol, f"Velocity at the inlet, {title}", quantity, place, _CITE)
+    return _Limit(text, value, f" ({place}, ANSI/HI 9.8)")

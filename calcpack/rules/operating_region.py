@@ -3,12 +3,15 @@
 from __future__ import annotations
 
 from collections.abc import Iterator
+from typing import Literal
 
 from ..references import PRACTICE
+from ..source.inputs import Given
 from ..study.best_efficiency import region
-from ..study.entry import cited
+from ..study.entry import Entry, cited
 from ..study.results import Results
 from ..study.supply import flow_of
+from ..value import Value
 from ..verdict import Check, Rule, Unapplied, compare, lacking
 
 ORDER = 90
@@ -25,29 +28,27 @@ def judge(results: Results) -> Iterator[Check | Unapplied]:
         return
     entry.ledger.group("Operating region")
     if asked.highest is not None:
-        criterion, source = (
-            f"The highest flow is at most {asked.highest.text} of that at best efficiency",
-            cited(asked.highest),
-        )
-        upper = region(entry, "highest", asked.highest)
-        yield (
-            compare(REGION_UPPER, flow_of(entry, results.worst), upper, criterion=criterion, source=source)
-            if upper
-            else lacking(REGION_UPPER, _MISSING, asked=True, criterion=criterion, source=source)
-        )
+        flow = flow_of(entry, results.worst)
+        yield _check(entry, REGION_UPPER, "highest", asked.highest, flow, "highest")
     if asked.lowest is not None:
-        word, given = ("lowest", pump.flow.lowest) if pump.flow.lowest else ("normal", pump.flow.normal)
-        criterion, source = (
-            f"The {word} flow is at least {asked.lowest.text} of that at best efficiency",
-            cited(asked.lowest),
-        )
-        lower = region(entry, "lowest", asked.lowest)
-        if lower is None or given is None:
-            missing = _MISSING if lower is None else "the file gives neither the lowest nor the normal flow of the pump"
-            yield lacking(REGION_LOWER, missing, asked=True, criterion=criterion, source=source)
-        else:
-            flow = entry.value(given, "Q", f"Flow of one pump, {word}")
-            yield compare(REGION_LOWER, flow, lower, criterion=criterion, source=source)
+        given = pump.flow.lowest or pump.flow.normal
+        word = "normal" if given is pump.flow.normal and given else "lowest"
+        low = None if given is None else entry.value(given, "Q", f"Flow of one pump, {word}")
+        yield _check(entry, REGION_LOWER, "lowest", asked.lowest, low, word)
 
 
-_MISSING = "the file gives no best_efficiency_flow of the pump"
+def _check(
+    entry: Entry, rule: Rule, end: Literal["lowest", "highest"], share: Given, flow: Value | None, word: str
+) -> Check | Unapplied:
+    """A flow against one end of the region."""
+    most = "at most" if end == "highest" else "at least"
+    criterion = f"The {word} flow is {most} {share.text} of that at best efficiency"
+    at_end = region(entry, end, share)
+    if at_end is None or flow is None:
+        missing = "no best_efficiency_flow" if at_end is None else "neither the lowest nor the normal flow"
+        reason = f"the file gives {missing} of the pump"
+        return lacking(rule, reason, asked=True, criterion=criterion, source=cited(share))
+    reason = (
+        f"the {word} flow is held against the {'upper' if end == 'highest' else 'lower'} end (line {at_end.address})"
+    )
+    return compare(rule, flow, at_end, criterion=criterion, source=cited(share), met=reason, not_met=reason)

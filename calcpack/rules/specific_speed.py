@@ -31,4 +31,5 @@ def judge(results: Results) -> Iterator[Check | Unapplied]:
         yield lacking(SPECIFIC_SPEED, missing, asked=True, criterion=criterion, source=cited(asked))
         return
     limit = entry.value(asked, "N_sm", f"Suction specific speed, the most, {units} units")
-    yield compare(SPECIFIC_SPEED, found, limit, criterion=criterion, source=cited(asked))
+    reason = f"found at best efficiency, where NPSH required is read from the maker's curve (line {found.address})"
+    yield compare(SPECIFIC_SPEED, found, limit, criterion=criterion, source=cited(asked), met=reason, not_met=reason)

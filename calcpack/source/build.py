@@ -11,6 +11,7 @@ from .branch import Branch
 from .build_line import build_line, build_pipe
 from .inputs import (
     Calculation,
+    Choice,
     Criteria,
     CurvePoint,
     Gauge,
@@ -26,7 +27,6 @@ from .inputs import (
     Revision,
     Site,
     Source,
-    Submergence,
     Supply,
 )
 from .nodes import Mapping, Mark
@@ -188,23 +188,23 @@ def _criteria(at: Branch) -> Criteria:
     return Criteria(
         ratio=margin.given("ratio"),
         difference=margin.given("difference"),
-        service=margin.text("service"),
-        submergence=at.maybe("submergence", _submergence),
+        service=_choice(margin, "service"),
+        submergence=at.maybe("submergence", lambda branch: _choice(branch, "method")),
         velocity=at.given("velocity"),
         bell_velocity=at.maybe("bell_velocity", Branch.extremes),
-        bell_method=at.maybe("bell_velocity", lambda bell: bell.text("method")) or "",
+        bell_method=at.maybe("bell_velocity", lambda branch: _choice(branch, "method")),
         straight_run=at.given("straight_run"),
         operating_region=at.maybe("operating_region", Branch.extremes),
         suction_specific_speed=specific[0] if specific else None,
         suction_specific_speed_in=specific[1] if specific else "",
         vapour_clearance=at.given("vapour_clearance"),
         loop_pressure=at.given("loop_pressure"),
-        provenance=at.provenance,
     )
 
 
-def _submergence(at: Branch) -> Submergence:
-    return Submergence(method=at.text("method"), provenance=at.provenance)
+def _choice(at: Branch, name: str) -> Choice | None:
+    chosen = at.text(name)
+    return Choice(name=chosen, provenance=at.provenance) if chosen else None
 
 
 def _reading(at: Branch) -> Reading:

@@ -6,50 +6,10 @@ from dataclasses import dataclass
 from datetime import date
 from typing import Literal
 
-from ..quantity import Quantity
-
-
-@dataclass(frozen=True, kw_only=True)
-class Provenance:
-    """Where a value comes from and how far it is trusted; empty texts where the file does not say.
-
-    ``status`` is ``verified``, ``maker``, ``preliminary``, ``assumed`` or empty.
-    """
-
-    source: str = ""
-    place: str = ""
-    status: str = ""
-    note: str = ""
-    confirm: str = ""
-
-
-@dataclass(frozen=True, kw_only=True)
-class Given(Provenance):
-    """A value as the file gives it: its address, its text, what was read from it, its origin, its place."""
-
-    key: str
-    text: str
-    quantity: Quantity
-    line: int
-    column: int
-
-
-@dataclass(frozen=True, kw_only=True)
-class Extremes:
-    """One quantity that varies, by its named extremes."""
-
-    lowest: Given | None = None
-    normal: Given | None = None
-    highest: Given | None = None
-    average: Given | None = None
-
-
-@dataclass(frozen=True, kw_only=True)
-class Level(Extremes):
-    """Levels of a surface; ``drawdown`` is taken off the lowest while the pump runs."""
-
-    overflow: Given | None = None
-    drawdown: Given | None = None
+from .given import Extremes as Extremes
+from .given import Given as Given
+from .given import Level as Level
+from .given import Provenance as Provenance
 
 
 @dataclass(frozen=True, kw_only=True)
@@ -325,10 +285,10 @@ class Intake:
 
 
 @dataclass(frozen=True, kw_only=True)
-class Submergence:
-    """How the least submergence is found."""
+class Choice:
+    """A published method or service that a criterion names, with the origin of the choice."""
 
-    method: str
+    name: str
     provenance: Provenance
 
 
@@ -345,18 +305,17 @@ class Criteria:
 
     ratio: Given | None
     difference: Given | None
-    service: str
-    submergence: Submergence | None
+    service: Choice | None
+    submergence: Choice | None
     velocity: Given | None
     bell_velocity: Extremes | None
-    bell_method: str
+    bell_method: Choice | None
     straight_run: Given | None
     operating_region: Extremes | None
     suction_specific_speed: Given | None
     suction_specific_speed_in: str
     vapour_clearance: Given | None
     loop_pressure: Given | None
-    provenance: Provenance
 
 
 @dataclass(frozen=True, kw_only=True)

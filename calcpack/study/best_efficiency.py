@@ -35,11 +35,11 @@ def suction_specific_speed(entry: Entry, units: Literal["US", "metric"]) -> tupl
     if pump.reciprocating is not None:
         return None, "a reciprocating pump has no suction specific speed"
     ledger.group("Suction specific speed")
-    best, speed = flow(entry), _speed(entry)
+    best, speed = flow(entry), pump.npsh_required.speed
     if best is None:
         return None, "the file gives no best_efficiency_flow"
     if speed is None:
-        return None, "the file gives no speed of the pump or of its curve"
+        return None, "the file gives no speed of the NPSH curve"
     at_curve = curve.own_flow(entry, best)
     read = curve.at(entry, at_curve, only_there=True)
     if read.npsh is None:
@@ -50,16 +50,8 @@ def suction_specific_speed(entry: Entry, units: Literal["US", "metric"]) -> tupl
         symbol: ledger.tabulated(symbol, f"Unit of the suction specific speed, {text}", parse(text, kind), units, DEFINITION)
         for (symbol, kind), text in zip((("n_u", "speed"), ("Q_u", "flow"), ("l_u", "length")), UNITS[units], strict=True)
     }  # fmt: skip
-    operands = {"n_p": speed, "Q_e": eye, "NPSH_b": read.npsh, **unit}
+    operands = {"n_p": curve.curve_speed(entry, speed), "Q_e": eye, "NPSH_b": read.npsh, **unit}
     return ledger.apply("suction_specific_speed", operands, f"{units} units"), ""
-
-
-def _speed(entry: Entry) -> Value | None:
-    """The speed of the curve; where the file gives that of the pump alone, the curve is taken to be at it."""
-    pump = entry.calculation.pump
-    if pump.npsh_required.speed is not None:
-        return curve.curve_speed(entry, pump.npsh_required.speed)
-    return None if pump.speed is None else curve.pump_speed(entry, pump.speed)
 
 
 def region(entry: Entry, end: Literal["lowest", "highest"], share: Given | Value) -> Value | None:

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 from bisect import bisect_left
 from dataclasses import dataclass, replace
+from math import isclose
 from typing import Literal
 
 from ..quantity import parse
@@ -82,16 +83,25 @@ def at(entry: Entry, flow: Value, *, only_there: bool = False) -> Read:
         return Read(None, _outside(entry, flow, lowest, highest))
     if npsh.points:
         return Read(_between(entry, flow))
-    if only_there and flow.record != highest.record:
+    there = _one(flow.shadow, highest.shadow)
+    if only_there and not there:
         return Read(None, f"NPSH required is stated at {_given(npsh.at_flow).text} only")
-    beside = "" if flow.record == highest.record else "NPSH required is the one of a higher flow, on the safe side"
+    beside = "" if there else "NPSH required is the one of a higher flow, on the safe side"
     value = _given(npsh.value)
     return Read(entry.value(value, "NPSHR", f"NPSH required, {_basis(npsh)}", note=_curve(npsh)), beside=beside)
 
 
+#: Relative difference below which two flows are one: the noise of double precision, where one was scaled.
+_NOISE = 1e-9
+
+
 def beyond(a: Value, b: Value) -> bool:
-    """Whether ``a`` exceeds ``b`` in either book."""
-    return a.record > b.record or a.shadow > b.shadow
+    """Whether ``a`` exceeds ``b``, by more than the noise of double precision."""
+    return a.shadow > b.shadow and not _one(a.shadow, b.shadow)
+
+
+def _one(a: float, b: float) -> bool:
+    return isclose(a, b, rel_tol=_NOISE)
 
 
 def _outside(entry: Entry, flow: Value, lowest: Value | None, highest: Value) -> str:
@@ -105,15 +115,16 @@ def _between(entry: Entry, flow: Value) -> Value:
     """The curve at ``flow``, which lies within its ends."""
     npsh = entry.calculation.pump.npsh_required
     flows = [float(point.flow.quantity.si()) for point in npsh.points]
+    place = next((n for n, at_point in enumerate(flows) if _one(flow.shadow, at_point)), None)
+    if place is not None:
+        return _npsh(entry, place)
     above = bisect_left(flows, flow.shadow)
-    if flows[above] == flow.shadow:
-        return _npsh(entry, above)
     operands = {"Q": flow, **_neighbours(entry, above - 1)}
     if npsh.interpolation != "smooth" or len(flows) == 2:
         return entry.ledger.apply("npsh_between_points", operands)
     slopes = {"dN_A": _slope(entry, above - 1, -1), "dN_B": _slope(entry, above - 1, +1)}
-    place = entry.ledger.apply("curve_place", operands)
-    return entry.ledger.apply("npsh_on_smooth_curve", operands | slopes | {"t": place})
+    part = entry.ledger.apply("curve_place", operands)
+    return entry.ledger.apply("npsh_on_smooth_curve", operands | slopes | {"t": part})
 
 
 def _neighbours(entry: Entry, place: int) -> dict[str, Value]:
@@ -148,7 +159,8 @@ def _slope(entry: Entry, place: int, side: Literal[-1, 1]) -> Value:
     inner = 0 <= place + side < len(entry.calculation.pump.npsh_required.points) - 1
     width, rise = _interval(entry, place)
     next_width, next_rise = _interval(entry, place + side if inner else place - side)
-    operands = {"b": width, "dN": rise, "b_n": next_width, "dN_n": next_rise}
+    widths = ledger.apply("curve_widths", {"b": width, "b_n": next_width})
+    operands = {"dN": rise, "dN_n": next_rise, "x_b": widths}
     alike = _sign(rise) == _sign(next_rise)
     if inner:
         return ledger.apply("curve_slope" if alike and _sign(rise) else "curve_slope_flat", operands)

@@ -48,13 +48,7 @@ def _roughness(entry: Entry, section: Section) -> Value:
     about, material = named(section), section.material
     if section.roughness is not None:
         return entry.value(section.roughness, "eps", f"Roughness of the wall, {about}")
-    if not material:
-        entry.refuse(
-            section,
-            "`material` or `roughness`: a fitting of this section needs the friction factor",
-            "neither",
-            "add `material: commercial steel` or the like",
-        )
+    assert material, "source asks for a wall where a friction factor is found from it"
     aged = section.condition == "aged"
     found = (roughness.AGED if aged else roughness.NEW).get(material)
     if found is None:
@@ -83,23 +77,18 @@ def _roughness(entry: Entry, section: Section) -> Value:
 
 #: Where the formula of Hazen and Williams is in common use: temperature in K, coefficient, velocity in m/s (practice).
 TEMPERATURES, COEFFICIENTS, VELOCITIES = (275.15, 313.15), (60, 160), (0.3, 3.0)
-#: Liquids it holds for: its manual says water only.
-WATERS = ("water", "sea water")
 
 
 def hazen_williams(entry: Entry, liquid: Liquid, flow: Flow, length: Value, about: str) -> Value:
     """Head lost in straight pipe by Hazen and Williams; refused where the formula does not hold."""
     ledger, given = entry.ledger, flow.section.coefficient_C
     assert given is not None, "source asks for the coefficient"
-    name = entry.calculation.liquid.name
-    if name not in WATERS:
-        entry.refuse(given, "water: the formula of Hazen and Williams holds for no other liquid", name, _DARCY)
     if flow.reynolds.record <= TURBULENT_ABOVE:
         entry.refuse(
             given,
             f"turbulent flow, a Reynolds number above {TURBULENT_ABOVE}, for the formula of Hazen and Williams",
             f"{flow.reynolds.record}",
-            _DARCY,
+            "leave `loss_method` out: Darcy and Weisbach hold for every flow",
         )
     c = entry.value(given, "C_h", f"Coefficient of Hazen and Williams, {named(flow.section)}")
     lost = ledger.apply(
@@ -125,6 +114,3 @@ def hazen_williams(entry: Entry, liquid: Liquid, flow: Flow, length: Value, abou
             f"{', '.join(outside)}: it knows neither viscosity nor Reynolds number; compare with Darcy and Weisbach",
         )
     return lost
-
-
-_DARCY = "leave `loss_method` out: Darcy and Weisbach hold for every liquid and flow"

@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 from dataclasses import dataclass
+from itertools import pairwise
 
 from ..fitting_set import SETS
 from ..source.inputs import Element, Line, Section
@@ -62,6 +63,8 @@ def losses(entry: Entry, state: State, flow: Value, liquid: Liquid) -> Passage:
         entry.find(
             "The line has no entrance: its loss is left out", "a line from a tank or basin begins with an entrance loss"
         )
+    for (before, *_), (element, *_) in pairwise(rows):
+        reducer.lie(entry, before, element)
     entry.ledger.group("Losses from the supply to the suction nozzle")
     title = f"Losses, supply to suction nozzle: {_sets(entry, line)} coefficients; {state.scope}"
     labelled = [(label(line, flow.section, element), words, content) for element, flow, words, content in rows]
@@ -99,8 +102,6 @@ def _section(at: Passing) -> list[tuple[Element, Flow, str, Content]]:
         else:
             ledger.group(f"Fittings, {about}")
         rows[place] = (element, at.flow, *loss(at, element))
-        if element.kind == "reducer":
-            reducer.flat_side(at.entry, section.elements[place - 1] if place else None, element)
     return [rows[place] for place in range(len(rows))]
 
 

@@ -29,10 +29,33 @@ def check(entry: Entry) -> None:
         ):
             _like_look_up(entry, name, given, temperature)
     _table_runs_on(entry)
+    _pump(entry)
     if c.liquid.vapour_pressure_kind == "effective":
         entry.find(
             "The vapour pressure is an effective one: it counts gas dissolved in the liquid",
             "it lies above the true vapour pressure; NPSH available is counted down to where gas comes out",
+        )
+
+
+def _pump(entry: Entry) -> None:
+    """Find what the maker's figure, or the margin over it, was not made for."""
+    c = entry.calculation
+    npsh = c.pump.npsh_required
+    if npsh.basis != "NPSH3":
+        entry.find(
+            "NPSH required is not stated as NPSH3, by a fall of head of 3 %",
+            "the margins in print are counted over NPSH3: ask the maker on which basis the figure stands",
+        )
+    for low, high in pairwise(npsh.points):
+        if high.npsh.quantity.si() < low.npsh.quantity.si():
+            entry.find(
+                f"NPSH required falls from {low.npsh.text} at {low.flow.text} to {high.npsh.text} at {high.flow.text}",
+                "it rises with flow, but for some pumps at the lowest flows: a point may be misread",
+            )
+    if c.pump.reciprocating is not None and c.criteria.service:
+        entry.find(
+            f"The margin of the service “{c.criteria.service.name}” is published for rotodynamic pumps",
+            "a reciprocating pump needs the margin that its maker or the project states",
         )
 
 

@@ -31,23 +31,23 @@ def nodes(entry: Entry, origin_head: Value, liquid: Liquid, passage: Passage) ->
     assert line is not None, "a passage leads through a line"
     found: list[Node] = []
     ledger.group("Pressure along the line")
-    for number, passed in enumerate(passage.rows, 1):
+    energy, lost = origin_head, list[Value]()
+    for passed in passage.rows:
+        lost.append(passed.loss)
         if passed.element.elevation is None:
             continue
+        about = f"after element {passed.label}"
         title = f"Elevation of the line, {passed.words}, element {passed.label}"
         elevation = entry.value(passed.element.elevation, "z_n", title)
-        operands: dict[str, Value | list[Value]] = {
-            "gamma": liquid.specific_weight,
-            "E_0": origin_head,
-            "h": [each.loss for each in passage.rows[:number]],
-            "z_n": elevation,
-            "h_V": _velocity_head(entry, passed),
-        }
-        equation = "node_pressure"
-        if line.friction_contingency is not None:
-            equation = "node_pressure_with_contingency"
-            operands["c"] = contingency(entry, line)
-        pressure = ledger.apply(equation, operands, f"absolute, after element {passed.label}")
+        if line.friction_contingency is None:
+            energy = ledger.apply("energy_after", {"E_m": energy, "h": lost}, about)
+        else:
+            operands = {"E_m": energy, "c": contingency(entry, line), "h": lost}
+            energy = ledger.apply("energy_after_with_contingency", operands, about)
+        lost = []
+        pressure = ledger.apply("node_pressure", {
+            "gamma": liquid.specific_weight, "E_n": energy, "z_n": elevation, "h_V": _velocity_head(entry, passed),
+        }, f"absolute, {about}")  # fmt: skip
         found.append(Node(passed.label, passed.words, elevation, pressure))
     return tuple(found)
 

@@ -39,21 +39,19 @@ def acceleration(entry: Entry, passage: Passage) -> tuple[Value | None, str]:
             "a suction stabiliser is fitted, so the form of the acceleration head does not hold: its maker states what is left",
         )
     ledger.group("Acceleration head")
-    speed = pump.speed or pump.npsh_required.speed
-    coefficient = _coefficient(entry, "C", "Coefficient of the pump's type", its.C, its.type, PUMPS)
-    liquid = _coefficient(entry, "k", "Coefficient of the liquid", its.k, its.liquid, LIQUIDS)
-    if speed is None or coefficient is None or liquid is None:
-        missing = [
-            name for name, there in (("speed", speed), ("type or C", coefficient), ("liquid or k", liquid)) if not there
-        ]
-        return None, f"the acceleration head is not known: the file gives no {', no '.join(missing)} of the pump"
     if not its.stabiliser:
         entry.assume(
             "stabiliser",
             "No suction stabiliser is fitted",
             "with one, less acceleration head is left: its maker states it",
         )
-    operands = {"n_p": _speed(entry, speed), "C": coefficient, "k": liquid, "g": ledger.constant("g")}
+    assert pump.speed is not None, "source asks for the speed of a reciprocating pump"
+    operands = {
+        "n_p": curve.pump_speed(entry, pump.speed),
+        "C": _coefficient(entry, "C", "Coefficient of the pump's type", its.C, its.type, PUMPS),
+        "k": _coefficient(entry, "k", "Coefficient of the liquid", its.k, its.liquid, LIQUIDS),
+        "g": ledger.constant("g"),
+    }
     heads, pipes = [], []
     for flow in passage.flows:
         own = [element for element in flow.section.elements if element.kind == "pipe"]
@@ -75,17 +73,10 @@ def acceleration(entry: Entry, passage: Passage) -> tuple[Value | None, str]:
     return taken, doubt
 
 
-def _speed(entry: Entry, given: Given) -> Value:
-    """The speed of the pump; where only that of the curve is given, the pump is taken to run at it."""
-    return (curve.pump_speed if given is entry.calculation.pump.speed else curve.curve_speed)(entry, given)
-
-
 def _coefficient(
     entry: Entry, symbol: str, title: str, stated: Given | None, name: str, table: Mapping[str, str]
-) -> Value | None:
+) -> Value:
     """A coefficient as stated, else that of the table."""
     if stated is not None:
         return entry.value(stated, symbol, f"{title}, acceleration head")
-    if not name:
-        return None
     return entry.ledger.tabulated(symbol, f"{title}: {name}", parse(table[name], "factor"), name, _CITE)

@@ -64,13 +64,13 @@ def coefficient(entry: Entry, flow: Flow, element: Element) -> Value:
     return ledger.apply("on_larger_bore", {"K_s": on_smaller, "b_D": ratio}, about)
 
 
-def flat_side(entry: Entry, before: Element | None, element: Element) -> None:
-    """Find a reducer in which gas collects, where the elevations of its two ends tell.
+def lie(entry: Entry, before: Element, element: Element) -> None:
+    """Find a reducer in which gas collects, where its elevation and that of the element before it tell.
 
     Source: Bloch, H. P.: Eccentric reducers and straight runs of pipe at pump suction. Hydrocarbon Processing, 1 September
     2010, quoting Karassik and the Hydraulic Institute.
     """
-    if before is None or before.elevation is None or element.elevation is None:
+    if element.kind != "reducer" or before.elevation is None or element.elevation is None:
         return
     comes_from, here = before.elevation.quantity.si(), element.elevation.quantity.si()
     if element.flat_side == "bottom" and comes_from <= here:

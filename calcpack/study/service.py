@@ -12,7 +12,7 @@ from ..source.inputs import Given
 from ..value import Value
 from . import best_efficiency
 from .curve import beyond
-from .entry import Entry
+from .entry import Entry, cited
 
 
 @dataclass(frozen=True)
@@ -78,8 +78,9 @@ class Published:
 
 def margin(entry: Entry, flow: Value) -> Published:
     """The margin published for the service of the file, at ``flow``; the stricter one where it cannot be told."""
-    name = entry.calculation.criteria.service
-    service = SERVICES[name]
+    asked = entry.calculation.criteria.service
+    assert asked is not None, "source asks for a margin or a service"
+    name, service = asked.name, SERVICES[asked.name]
     entry.ledger.group("Margin published for the service")
     strict, when = _strict(entry, service, flow)
     chosen = service.strict if strict and service.strict else service.usual
@@ -96,7 +97,9 @@ def margin(entry: Entry, flow: Value) -> Published:
         "editions differ, and the criterion belongs to the project: state a ratio or a difference to replace it"
         + (f"; {service.beside}" if service.beside else ""),
     )
-    return Published(chosen, ratio, difference, f"service {place}", f"{service.named} (line {ratio.address})")
+    own = cited(asked.provenance)
+    named = f"{own}, which names the service; " if own else ""
+    return Published(chosen, ratio, difference, f"service {place}", f"{named}{service.named} (line {ratio.address})")
 
 
 def _strict(entry: Entry, service: Service, flow: Value) -> tuple[bool, str]:

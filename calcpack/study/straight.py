@@ -28,16 +28,10 @@ class Run:
 
 def length(entry: Entry, pipes: Sequence[Element], about: str) -> Value:
     """The length of straight pipes together."""
-    lengths = [_length(entry, pipe) for pipe in pipes]
+    lengths = [
+        entry.value(given, "L", f"Length of straight pipe, {pipe.id}") for pipe in pipes if (given := pipe.length)
+    ]
     return lengths[0] if len(lengths) == 1 else entry.ledger.apply("straight_pipe", {"L": lengths}, about)
-
-
-def _length(entry: Entry, pipe: Element) -> Value:
-    assert pipe.length is not None, "the schema asks for a pipe's length"
-    one = entry.value(pipe.length, "L", f"Length of straight pipe, element {pipe.id}")
-    if pipe.count == 1:
-        return one
-    return entry.ledger.apply("equal_pipes", {"n": entry.count(pipe), "L": one}, f"element {pipe.id}")
 
 
 def run(entry: Entry, passage: Passage) -> Run:

@@ -6,8 +6,8 @@ from collections.abc import Callable, Mapping
 
 from ..source.inputs import Given
 from ..value import Value
-from .entry import Entry
 from .barometer import barometer
+from .entry import Entry
 from .liquid import Liquid, vapour_pressure_beside
 from .state import State
 

@@ -18,7 +18,7 @@ MAX_ELEMENTS = 200
 
 
 def check(view: View) -> Iterator[Fault]:
-    for each in (_count, _bores, _walls, _hazen_williams, _pumps, _entrances):
+    for each in (_count, _bores, _walls, _hazen_williams, _pumps, _entrances, _reducers):
         yield from each(view)
 
 
@@ -128,3 +128,17 @@ def _entrances(view: View) -> Iterator[Fault]:
             wanted = "the entrance as the first element: the line is listed from the supply to the pump"
             yield view.fault(element, address, wanted, f"element {number + 1} of the line", "move it up", "entrance")
         first = first or address
+
+
+def _reducers(view: View) -> Iterator[Fault]:
+    """A section has one bore: no pipe of it follows a reducer to another bore, or stands before one from another bore."""
+    for address, section in view.sections():
+        kinds = [view.text("kind", node=item) for _, item in view.items("elements", node=section)]
+        for number, (name, element) in enumerate(view.items("elements", node=section)):
+            for end, beyond, word in (("to", kinds[number:], "after"), ("from", kinds[:number], "before")):
+                node = element.get(end)
+                if node and kinds[number] == "reducer" and "pipe" in beyond:
+                    wanted = f"no pipe of this section {word} a reducer with `{end}`: it has another bore"
+                    hint = f"give the pipe {word} it a section of its own"
+                    place = f"{address}.elements[{name}].{end}"
+                    yield view.fault(node, place, wanted, "one", hint, "reducer")

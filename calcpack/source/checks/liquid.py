@@ -109,7 +109,7 @@ def _mixture(view: View, liquid: Mapping) -> Iterator[Fault]:
     elif of and _given(liquid, "vapour_pressure"):
         wanted = "either `vapour_pressure` or `vapour_pressure_of`"
         yield view.fault(of, key, wanted, "both", "leave one of the two out", "liquid")
-    elif of and known and not known.solute and view.text("vapour_pressure_of", node=liquid) == "raoult":
+    elif of and known and not known.raoult and view.text("vapour_pressure_of", node=liquid) == "raoult":
         wanted = f"water for {name}: Raoult's law holds for glycols, not for a salt that falls into ions"
         yield view.fault(of, key, wanted, "raoult", "write `water`", "liquid")
 
