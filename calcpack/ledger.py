@@ -141,7 +141,9 @@ class Ledger:
         if made is None:
             tree = conversion_tree(value.symbol, value.unit, to)
             record = of_record(evaluate(tree, {value.symbol: value.record}, InDecimal()))
-            title = f"{value.title.removesuffix(', looked up')}, {'as a fraction' if to.name == '1' else f'in {to.name}'}"
+            title = (
+                f"{value.title.removesuffix(', looked up')}, {'as a fraction' if to.name == '1' else f'in {to.name}'}"
+            )
             made = Value(self._address(COMPUTATION), value.symbol, record, value.shadow, to, title)
             self._made["convert", value.address, to.name] = made
             if value.address in self.used:

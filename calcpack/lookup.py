@@ -280,7 +280,9 @@ CONSTANTS: Mapping[str, Constant] = {
         Constant("Q_1", "1 ft³/s", "Flow the formula's number refers to, exact", DEFINITION),
         Constant("dp_C", "1 psi", "Pressure drop at which Cv is the flow in gal/min, exact", Cite("flomatic")),
         Constant("dp_K", "1 bar", "Pressure drop at which Kv is the flow in m³/h, exact", Cite("adca")),
-        Constant("rho_w", "999.1 kg/m³", "Density of the water of Cv (60 °F) and Kv (15 °C)", Cite("iapws95", "at 15 °C")),
+        Constant(
+            "rho_w", "999.1 kg/m³", "Density of the water of Cv (60 °F) and Kv (15 °C)", Cite("iapws95", "at 15 °C")
+        ),
         Constant("dT_s", "2 K", "Step of temperature for the vessel's nearness to boiling", PRACTICE),
     )
 }

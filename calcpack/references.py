@@ -115,9 +115,7 @@ _ALL = (
         "secondary",
     ),
     Reference("power_da", "POWER magazine: Can your boiler feed pump handle a deaerator pressure transient?", "opened"),
-    Reference(
-        "hi98bell", "ANSI/HI 9.8-1998: Pump Intake Design, table of velocities at the inlet bell", "recalled"
-    ),
+    Reference("hi98bell", "ANSI/HI 9.8-1998: Pump Intake Design, table of velocities at the inlet bell", "recalled"),
     Reference("hi963", "ANSI/HI 9.6.3: Rotodynamic Pumps, Guideline for Operating Regions", "recalled"),
     Reference(
         "hi61",

@@ -57,7 +57,7 @@ def test_the_catalogue_is_what_the_folder_holds() -> None:
 
 
 def test_names_are_unique_and_their_number_is_pinned() -> None:
-    assert len(EQUATIONS) == len(EQUATION) == 57
+    assert len(EQUATIONS) == len(EQUATION) == 125
     assert {name: e.name for name, e in EQUATION.items()} == {name: name for name in EQUATION}
 
 
@@ -131,27 +131,55 @@ def test_a_published_figure_exists_or_it_is_a_definition(equation: Equation) -> 
 
 #: Equations that are definitions, identities or common practice; the list is pinned so that none slips in.
 WITHOUT_SOURCE = {
-    "open_surface",
-    "needed_ratio_alone",
-    "needed_difference_alone",
     "barometer_station",
+    "open_surface",
+    "saturated_surface",
+    "drawn_down_level",
+    "point_from_gauge",
     "absolute_from_gauge",
     "gauge_from_vacuum",
     "specific_weight",
     "dynamic_viscosity",
     "warmer_temperature",
+    "colder_temperature",
     "cost_of_temperature",
+    "water_mole_fraction",
+    "density_between",
+    "place_between",
+    "vapour_pressure_between",
+    "viscosity_between",
+    "kinematic_viscosity_between",
+    "section_flow",
     "bore_area",
     "mean_velocity",
     "velocity_head",
     "relative_roughness",
-    "strainer_drop",
+    "drop_as_head",
+    "flow_coefficient_head",
+    "loss_between_points",
+    "equal_elements",
     "sum_of_rows",
     "losses_with_contingency",
     "losses",
+    "bore_ratio",
+    "taper_half_angle",
+    "on_larger_bore",
+    "energy_after",
+    "energy_after_with_contingency",
+    "node_pressure",
     "static_head",
     "surface_head",
     "vapour_head",
+    "point_head",
+    "point_static_head",
+    "npsh_point",
+    "npsh_point_moving",
+    "npsh_wet_pit",
+    "npsh_less_withheld",
+    "npsh_less_acceleration",
+    "npsh_at_required_datum",
+    "energy_head",
+    "energy_head_moving",
     "gauge_height",
     "barometer_head",
     "gauge_head",
@@ -162,20 +190,70 @@ WITHOUT_SOURCE = {
     "vapour_head_change",
     "loss_change",
     "npsh_carried",
-    "margin_ratio",
-    "margin_difference",
+    "straight_pipe",
+    "straight_run_needed",
+    "acceleration_heads",
+    "flow_at_curve_speed",
+    "npsh_between_points",
+    "curve_width",
+    "curve_widths",
+    "curve_rise",
+    "curve_place",
+    "npsh_at_speed",
     "needed_by_ratio",
     "needed_by_difference",
+    "needed_ratio_alone",
+    "needed_difference_alone",
     "needed_greater",
+    "margin_ratio",
+    "margin_difference",
+    "eye_flow",
+    "suction_specific_speed",
+    "region_lower",
+    "region_upper",
     "inlet_area",
     "inlet_velocity",
     "submergence",
+    "pressure_kept",
+    "inlet_gauge_running",
+    "inlet_gauge_at_rest",
+    "gauge_on_the_line",
+    "high_point_gauge",
+    "barometer_lowest_likely",
+    "barometer_highest_likely",
 }
 
 
 def test_the_equations_without_source_are_pinned() -> None:
     assert sorted(e.name for e in EQUATIONS if not e.source.key) == sorted(WITHOUT_SOURCE)
 
+
+_POINT = {
+    "supply": {"name": "main M-1", "kind": "main", "pressure": {"lowest": "150 kPa gauge"}, "elevation": "0.4 m",
+               "velocity_head": "counted", "source": "S1", "status": "verified"},
+    "line.sections.0.elements.0": {"id": "1", "kind": "tee", "flow": "run", "elevation": "0.4 m"},
+}  # fmt: skip
+_CITED = {"source": "S1", "status": "verified"}
+_TABLE = [
+    {"temperature": "10 °C", "density": "960 kg/m³", "viscosity": "2 mPa·s", "vapour_pressure": "10 Pa absolute"},
+    {"temperature": "60 °C", "density": "925 kg/m³", "viscosity": "1 mPa·s", "vapour_pressure": "90 Pa absolute"},
+]
+_IN_STOKES = [{**row, "viscosity": f"{n} cSt"} for row, n in zip(_TABLE, (9, 6), strict=True)]
+#: Each kind of supply and each way to the properties of a liquid.
+SUPPLIES: tuple[Document, ...] = (
+    plant(_POINT),
+    plant(_POINT | {"supply.velocity_head": "left_out", "line.withheld_head": "0.3 m"}),
+    plant({"supply.kind": "saturated", "intake": INTAKE}),
+    plant({"supply.kind": "gas_blanketed", "supply.pressure": {"lowest": "3 kPa absolute"}}),
+    plant({"supply.level.drawdown": "0.2 m", "pump.arrangement": "wet_pit"}, line=False),
+    plant({"pump.npsh_required.datum_elevation": "-0.2 m"}),
+    plant({"liquid": {"name": "oil", "temperature": {"highest": "25 °C"}, "table": _TABLE, **_CITED}}),
+    plant({"liquid": {"name": "oil", "temperature": {"highest": "25 °C"}, "table": _IN_STOKES, **_CITED}}),
+    plant({"liquid": {"name": "sea water", "salinity": "35 g/kg", "vapour_pressure_of": "raoult",
+                      "temperature": {"highest": "25 °C"}, **_CITED}}),
+    plant({"liquid": {"name": "ethylene glycol", "mass_fraction": "35 %", "vapour_pressure_of": "raoult",
+                      "temperature": {"highest": "25 °C"}, **_CITED}}),
+)  # fmt: skip
 
 #: Plants that between them call for every equation.
 PLANTS: tuple[Document, ...] = (
@@ -197,6 +275,7 @@ PLANTS: tuple[Document, ...] = (
     ),
     *LINES,
     *PUMPS,
+    *SUPPLIES,
 )  # fmt: skip
 
 
@@ -221,17 +300,18 @@ def test_every_equation_is_used(monkeypatch: pytest.MonkeyPatch) -> None:
 SI = {
     "ratio": "dimensionless", "length": "m", "bore": "m", "area": "m**2", "velocity": "m/s", "acceleration": "m/s**2", "flow": "m**3/s",
     "pressure": "Pa", "pressure_difference": "Pa", "density": "kg/m**3", "dynamic_viscosity": "Pa*s", "kinematic_viscosity": "m**2/s",
-    "specific_weight": "N/m**3", "temperature": "K", "temperature_difference": "K", "lapse_rate": "K/m", "speed": "1/s",
+    "specific_weight": "N/m**3", "temperature": "K", "absolute_temperature": "K", "temperature_difference": "K", "lapse_rate": "K/m", "speed": "1/s",
     "specific_speed": "dimensionless",
 }  # fmt: skip
 #: Values of usual size, in SI, at which every formula is inside its domain.
 USUAL = {
     "length": 3.2, "bore": 0.25, "area": 0.03, "velocity": 1.7, "acceleration": 9.80665, "flow": 0.05, "pressure": 1.0e5,
     "pressure_difference": 2.0e3, "density": 998.2, "dynamic_viscosity": 1.0e-3, "kinematic_viscosity": 1.0e-6, "specific_weight": 9789.0,
-    "temperature": 293.0, "temperature_difference": 5.0, "lapse_rate": 0.0065, "ratio": 1.3, "speed": 24.0, "specific_speed": 145.0,
+    "temperature": 293.0, "absolute_temperature": 293.0, "temperature_difference": 5.0, "lapse_rate": 0.0065, "ratio": 1.3, "speed": 24.0, "specific_speed": 145.0,
 }  # fmt: skip
 OWN = {"Re": 3.0e5, "r": 2.0e-4, "f": 0.016, "f_T": 0.014, "eps": 4.6e-5, "eps_c": 4.6e-5, "r_0": 6.356766e6, "Z": 900.0, "H": 900.0,
-       "n_a": 5.2559, "K_h": 0.034163195, "n": 3.0, "Fr": 0.6, "c": 0.1, "Q_A": 0.03, "Q_B": 0.08}  # fmt: skip
+       "n_a": 5.2559, "K_h": 0.034163195, "n": 3.0, "Fr": 0.6, "c": 0.1, "Q_A": 0.03, "Q_B": 0.08,
+       "T_1": 283.0, "T_t": 300.0, "T_2": 313.0}  # fmt: skip
 
 
 @cache
@@ -503,7 +583,9 @@ def test_looked_up_properties_are_consistent_with_the_library_s_derived_outputs(
     """Through other inputs than the look-up's own: from pressure back to temperature, from volume, from density."""
     from CoolProp.CoolProp import PropsSI
 
-    pressure, density, viscosity = (lookup.liquid("water", n, kelvin) for n in ("vapour_pressure", "density", "viscosity"))
+    pressure, density, viscosity = (
+        lookup.liquid("water", n, kelvin) for n in ("vapour_pressure", "density", "viscosity")
+    )
     assert PropsSI("T", "P", pressure, "Q", 0, "Water") == pytest.approx(kelvin, rel=1e-7)
     assert PropsSI("D", "P", pressure, "Q", 0, "Water") == pytest.approx(density, rel=1e-6)
     assert PropsSI("V", "T", kelvin, "D", density, "Water") == pytest.approx(viscosity, rel=1e-6)

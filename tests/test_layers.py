@@ -93,7 +93,7 @@ def test_the_reader_knows_nothing_of_ours(path: Path) -> None:
 
 def test_only_the_package_s_own_file_knows_every_step() -> None:
     known = {name for name, ours in imports(PACKAGE / "__init__.py") if ours}
-    assert known == {"arithmetic", "assessment", "page", "reader", "record", "source"}
+    assert known == {"arithmetic", "assessment", "faults", "page", "reader", "record", "source"}
 
 
 def test_every_room_has_a_layer_and_every_layer_its_rooms() -> None:

@@ -18,14 +18,19 @@ from typing import Any
 import pypdfium2
 import pypdfium2.raw as raw
 import pytest
+from plants import INTAKE, plant, recorded
 
+from calcpack.assessment import run
 from calcpack.page import pdf, view
+from calcpack.page.figures import elevation
 from calcpack.page.glyphs import margin_bar, status, verdict
+from calcpack.page.lines import Context, noted
 from calcpack.page.pdf import PageError, render
+from calcpack.page.scale import ends_at, steps
 from calcpack.page.text import linear, printable
+from calcpack.page.typeset import Display
 from calcpack.record import assemble, canonical
 from calcpack.source import load
-from calcpack.assessment import run
 
 # The engine leaves its colour profile open until the collector comes by.
 pytestmark = pytest.mark.filterwarnings("ignore:.*sRGB2014.icc:pytest.PytestUnraisableExceptionWarning")
@@ -130,6 +135,87 @@ def test_cover_holds_verdict_counts_and_blank_signatures(letter: bytes, american
         assert word in cover
     assert american["fingerprint"][:4] in cover
     assert american["cover"]["statement"][:30] in cover.replace("\r\n", " ")
+
+
+def test_cover_lists_every_rule_those_without_numbers_too(other: Record, a4: bytes) -> None:
+    with pypdfium2.PdfDocument(a4) as document:
+        cover = words(document)[0]
+    table = cover[cover.index("the governing one first") :]
+    for check in other["checks"]:
+        assert re.search(rf"\b{re.escape(check['address'])} {re.escape(check['title'])}", table), check["address"]
+    for word, n in (("not assessed", 1), ("not applicable", 1)):
+        assert len(re.findall(rf"^.*{word}$", table, re.MULTILINE)) >= n
+
+
+def test_rules_not_applied_are_printed_with_what_the_file_would_need(letter: bytes, american: Record) -> None:
+    with pypdfium2.PdfDocument(letter) as document:
+        text = re.sub(r"\s+", " ", " ".join(words(document)))
+    after = text[text.index("Rules not applied") :]
+    assert american["unapplied"]
+    for rule in american["unapplied"]:
+        assert rule["title"] in after and rule["missing"] in after
+
+
+def test_a_comparison_that_fails_is_not_printed_as_if_it_held(letter: bytes, american: Record) -> None:
+    failed = next(c for c in american["checks"] if c["verdict"] == "not met")
+    with pypdfium2.PdfDocument(letter) as document:
+        text = " ".join(words(document))
+    left, right = (failed[s]["headline"]["text"] for s in ("left", "right"))
+    assert failed["relation"] == "≥" and failed["found"] == "<"
+    assert not re.search(rf"{re.escape(left)}[^<0-9]*≥[^0-9]*{re.escape(right)}", text)
+
+
+KINDS = {
+    "saturated": ({"supply.kind": "saturated", "supply.level.lowest": "12 m"}, ("vapour", "static head")),
+    "loop": (
+        {
+            "supply": {
+                "name": "chilled loop", "kind": "loop", "pressure": {"lowest": "150 kPa gauge"}, "elevation": "0.4 m",
+                "point": "expansion tank", "velocity_head": "left_out",
+            },
+            "intake": None,
+        },
+        ("chilled loop", "expansion tank", "+0.4, 150 kPa gauge", "pressure at the point"),
+    ),
+    "wet pit": (
+        {"pump.arrangement": "wet_pit", "line": None, "intake": INTAKE | {"reference": "bell_lip"}},
+        ("bell −1.0", "P-1", "NPSH available"),
+    ),
+    "points of the line": (
+        {"line.sections.0.elements.1.elevation": "0.5 m", "line.sections.0.elements.3.elevation": "0 m"},
+        ("static head", "surface pressure"),
+    ),
+    "another datum": (
+        {"pump.npsh_required.datum_elevation": "-0.25 m", "line.withheld_head": "0.5 m"},
+        ("−0.25", "head withheld −0.500"),
+    ),
+}  # fmt: skip
+
+
+@pytest.mark.parametrize(("changes", "labels"), KINDS.values(), ids=KINDS.keys())
+def test_the_figure_of_each_kind_of_supply(changes: dict[str, Any], labels: tuple[str, ...]) -> None:
+    drawn = elevation(recorded(plant(changes))["sketch"])
+    shown = [text.replace("\u00a0", "") for text in re.findall(r"<text[^>]*>([^<]*)</text>", drawn)]
+    assert all(any(label in text for text in shown) for label in labels), shown
+
+
+def test_two_heads_that_cancel_are_left_out_of_the_figure() -> None:
+    sketch = recorded(plant({"supply.kind": "saturated", "supply.level.lowest": "12 m"}))["sketch"]
+    assert {head["name"] for head in sketch["heads"]} >= {"surface pressure", "vapour pressure"}
+    assert [step.name for step in steps(sketch)] == ["static head", "losses"]
+
+
+def test_the_build_up_ends_at_npsh_available_from_the_datum_it_counts_from() -> None:
+    """A shift of datum moves where the bar stands, not where it ends; what is withheld is the last head taken."""
+    sketch = recorded(plant({"pump.npsh_required.datum_elevation": "-0.25 m", "line.withheld_head": "0.5 m"}))["sketch"]
+    last = steps(sketch)[-1]
+    assert last.name == "head withheld"
+    assert last.end == pytest.approx(ends_at(sketch) + float(sketch["available"]), abs=1e-4)
+
+
+def test_symbols_in_a_note_are_written_as_symbols_in_the_face_of_the_note() -> None:
+    shared = Context({"h_V": Display("h", "V", False), "g": Display("g", "", False)}, frozenset(), {})
+    assert noted("h_V is there, g too; a_b is not", shared) == "h<sub>V</sub> is there, g too; a_b is not"
 
 
 def test_every_section_is_there_and_bookmarked(document: pypdfium2.PdfDocument) -> None:

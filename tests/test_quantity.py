@@ -166,12 +166,16 @@ def test_display_tables_cover_every_kind_of_the_nomenclature() -> None:
 
 
 def test_the_us_system_is_coherent() -> None:
-    """Factors multiply as the dimensions do: the foot, the slug, the second and the kelvin are base units."""
+    """Factors multiply as the dimensions do: the foot, the slug, the second and the kelvin are base units.
+
+    Only where temperatures stand in a ratio alone is the degree Rankine taken, to which a °F typed converts exactly.
+    """
     us = COHERENT["US"]
     foot, slug = us["length"].factor, us["density"].factor * us["length"].factor ** 3
     for kind, exponents in symbols.KINDS.items():
         length, mass, _, _ = exponents
-        assert us[kind].factor == foot ** int(length) * slug ** int(mass), kind
+        degree = Fraction(5, 9) if kind == "absolute_temperature" else 1
+        assert us[kind].factor == degree * foot ** int(length) * slug ** int(mass), kind
 
 
 def test_every_dimension_of_a_kind_has_units() -> None:

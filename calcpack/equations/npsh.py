@@ -29,7 +29,7 @@ EQUATIONS = (
         "NPSHA_d",
         "H_s + z - H_v - h_L",
         "Net positive suction head available",
-        Cite("doe1018", "Centrifugal Pump Operation"),
+        Cite("", "energy balance from the point"),
         "from the point where pressure is known; its velocity head is left out, on the safe side",
     ),
     Equation(
@@ -37,7 +37,7 @@ EQUATIONS = (
         "NPSHA_d",
         "H_s + z + h_V - H_v - h_L",
         "Net positive suction head available",
-        Cite("doe1018", "Centrifugal Pump Operation"),
+        Cite("", "energy balance from the point"),
         "from the point where pressure is known; the velocity head there is part of its energy",
     ),
     Equation(
@@ -45,7 +45,7 @@ EQUATIONS = (
         "NPSHA_d",
         "H_s + z - H_v",
         "Net positive suction head available",
-        Cite("doe1018", "Centrifugal Pump Operation"),
+        Cite("", "energy balance from the surface"),
         "no line: the pump hangs in its sump",
     ),
     Equation("npsh_less_withheld", "NPSHA_q", "NPSHA - h_w", "Net positive suction head available, less the head withheld", PRACTICE),

@@ -10,10 +10,11 @@ from __future__ import annotations
 from ..references import Cite
 from .coefficient import Coefficient, Entries
 
+_TABLE = Cite("hooper")
 _ROW = Cite("hooper", "row of gate, ball and plug valves, full line size (heading recalled)")
 
 
-def _two(title: str, K_1: str, K_oo: str, cite: Cite = Cite("hooper")) -> Coefficient:
+def _two(title: str, K_1: str, K_oo: str, cite: Cite = _TABLE) -> Coefficient:
     return Coefficient(title, {"K_1": K_1, "K_oo": K_oo}, "hooper_2k", cite)
 
 

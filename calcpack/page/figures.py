@@ -6,6 +6,7 @@ Everything is placed from the record's own numbers; positions on paper are the o
 from __future__ import annotations
 
 from collections.abc import Mapping, Sequence
+from math import ceil
 from typing import Any
 
 from .build_up import build_up
@@ -16,7 +17,8 @@ from .text import cut
 TANK, PIPE, PUMP = 18.0, 42.0, 79.0
 COLUMN = 56.0  # of a pump that hangs in its sump
 HALF, SHARED = 1.3, 2.0  # half the bore of a pipe of one pump and of several, as drawn (mm)
-CROWDED, STAGGER = 4.6, 4.4  # below this pitch every second row number stands lower by so much (mm)
+#: Numbers of elements: the pitch at which they stand side by side, the rows they may take, and the height of a row (mm).
+ABREAST, MOST_ROWS, ROW = 4.6, 4, 4.4
 NAME_ROOM = 34.0  # for a name in the figure
 CLOSED = {"gas_blanketed": "gas", "saturated": "vapour"}  # what stands over the surface of a closed vessel
 Sketch = Mapping[str, Any]
@@ -24,7 +26,7 @@ Sketch = Mapping[str, Any]
 
 def elevation(sketch: Sketch) -> str:
     """The figure as SVG.  Raises :class:`KeyError` where the record's sketch lacks a part."""
-    scale = scale_of(sketch, 9.0 + (STAGGER if _pitch(sketch) < CROWDED else 0.0))
+    scale = scale_of(sketch, 9.0 + ROW * (_rows(sketch) - 1))
     d = Drawing(WIDTH, scale.bottom + 9.0)
     axis(d, scale)
     if sketch["pump"]["arrangement"] == "wet_pit":
@@ -59,6 +61,11 @@ def _run(sketch: Sketch) -> tuple[float, float]:
 def _pitch(sketch: Sketch) -> float:
     first, last = _run(sketch)
     return (last - first - 4) / max(len(sketch["elements"]), 1)
+
+
+def _rows(sketch: Sketch) -> int:
+    """How many rows the numbers of the elements take."""
+    return min(MOST_ROWS, ceil(ABREAST / _pitch(sketch)))
 
 
 def _vessel(d: Drawing, scale: Scale, sketch: Sketch, right: float, floor: float) -> None:
@@ -149,20 +156,24 @@ def _line(d: Drawing, scale: Scale, sketch: Sketch) -> None:
             f"M{first} {start - HALF:.2f}L{first - 1.6} {start - 2.4:.2f}V{start + 2.4:.2f}L{first} {start + HALF:.2f}",
             0.35,
         )
-    lowest = max(y for _, y in path)
+    lowest, every = max(y for _, y in path), ceil(ABREAST / pitch / MOST_ROWS)
     for i, element in enumerate(elements):
         x = first + 2 + pitch * (i + 0.5)
         y = _height(path, x)
         half = SHARED if element["pumps"] > 1 else HALF
         _element(d, element["kind"], x, y, half)
-        below = lowest + 6.2 + (STAGGER if i % 2 and pitch < CROWDED else 0.0)
+        if i % every:
+            continue
+        below = lowest + 6.2 + ROW * (i // every % _rows(sketch))
         d.between(x, y + half + 0.4, x, below - 1.9, 0.12, SECOND)
         d.circle(x, below, 1.9, 0.2)
         d.label(x, below + 0.9, str(i + 1), "middle", size=2.5)
     _grade(d, scale, sketch)
     d.circle(PUMP, end, 3.2, 0.4)
     d.line(f"M{PUMP - 1.2} {end + 1.4:.2f}L{PUMP + 1.6} {end:.2f}L{PUMP - 1.2} {end - 1.4:.2f}Z", 0.25)
-    d.label(PUMP, end + 6.2, _cut(sketch["pump"]["name"], NAME_ROOM), "middle", bold=True)
+    name = _cut(sketch["pump"]["name"], NAME_ROOM)
+    numbered = first + 4.8 + pitch * (len(elements) - 0.5) if elements else 0.0  # where the last number ends
+    d.label(max(PUMP - text_width(name, bold=True) / 2, numbered), end + 6.2, name, bold=True)
     if gauge := sketch["gauge"]:
         x, y = PUMP - 7.0, scale.y(float(gauge["elevation"]))
         d.between(x, end - HALF if y < end else end + HALF, x, y, 0.2)

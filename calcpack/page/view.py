@@ -16,8 +16,8 @@ PAPERS = {"A4": ("210mm 297mm", "20mm", "14mm"), "Letter": ("215.9mm 279.4mm", "
 LISTING_SIZE, LISTING_WIDTH = 7.8, 128 * POINT
 #: A longer statement leaves its place beside the verdict and runs over the whole width under it.
 LONG_STATEMENT = 230
-#: More rules than these are set in small rows on the cover.
-MANY_RULES = 4
+#: More rules than these leave the rest of the cover less room.
+MANY_RULES = 8
 SCOPE_WIDTH = 77 * POINT  # room for the scope above a sheet
 FIGURE_SPACE = "\u2007"
 #: Rules on the cover stand in this order.

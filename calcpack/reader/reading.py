@@ -18,7 +18,7 @@ from .losses import Table, is_losses, read_row, worked
 from .nomenclature import check_symbols, listed_symbols
 from .recompute import recompute
 from .report import Report
-from .rules import read_rule
+from .rules import Judged, read_rule
 from .tree import Symbol
 from .visible import check_strip, check_visible, strip
 
@@ -53,7 +53,7 @@ class Reading:
         self.conversions: dict[str, Conversion] = {}
         self.converting: list[tuple[Line, str]] = []
         self.known: set[Symbol] = set()
-        self.verdicts: list[str] = []
+        self.rules: dict[str, Judged] = {}
         self.order: list[tuple[int, str]] = []
 
     def read(self, band: Band) -> None:
@@ -77,7 +77,7 @@ class Reading:
             self.inputs.append(row)
         elif section == "9":
             givens = {row.by or row.address: row.given for row in self.inputs}
-            self.verdicts.append(read_rule(band, givens, self.book))
+            self.rules[band.address] = read_rule(band, givens, self.book)
         elif is_losses(band):
             if read_row(band, self.table, self.book):
                 self.book.classes[band.address] = "recomputed"
@@ -108,14 +108,14 @@ class Reading:
         book.findings += [finding for _, finding in book.aside.values()]
         self._addresses()
         check_symbols(self.known, book)
-        check_cover(found[0], self.verdicts, book)
+        check_cover(found[0], self.rules, book)
         for sheet in found:
             check_visible(sheet, book)
             check_strip(sheet, len(found), book)
         kinds = Counter(book.classes.values())
         return Report(
             len(found), kinds["recomputed"], kinds["bracketed"], kinds["looked up"] + kinds["tabulated"],
-            kinds["looked up"], len(self.inputs), len(self.verdicts),
+            kinds["looked up"], len(self.inputs), len(self.rules),
             tuple(book.unread), tuple(book.findings),
         )  # fmt: skip
 

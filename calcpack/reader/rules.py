@@ -35,8 +35,16 @@ class Side:
     address: str
 
 
-def read_rule(band: Band, givens: dict[str, Quantity], book: Book) -> str:
-    """Check one rule and return its verdict; ``givens`` are inputs as given, by the line that is used.
+@dataclass(frozen=True)
+class Judged:
+    """A rule as printed: its verdict, and both sides and the margin as shown large, where it has them."""
+
+    verdict: str
+    shown: tuple[Quantity, ...] = ()
+
+
+def read_rule(band: Band, givens: dict[str, Quantity], book: Book) -> Judged:
+    """Check one rule; ``givens`` are inputs as given, by the line that is used.
 
     Raises :class:`~calcpack.reader.failures.Unread`.
     """
@@ -45,7 +53,7 @@ def read_rule(band: Band, givens: dict[str, Quantity], book: Book) -> str:
     if not relation:
         if verdict == "met":
             book.note(band.sheet, band.address, "met without two sides to compare")
-        return verdict
+        return Judged(verdict)
     left, right = _side(upper.column(*LEFT)), _side(upper.column(*RIGHT))
     asked, sides = _pair(band, relation, left, right, book)
     rising = asked in "≥>"
@@ -59,8 +67,8 @@ def read_rule(band: Band, givens: dict[str, Quantity], book: Book) -> str:
     if verdict == "not applicable" or (verdict != "not assessed" and (verdict == "met") != holds):
         what = "what is asked and the numbers give another verdict"
         book.note(band.sheet, band.address, what, verdict, "met" if holds else "not met")
-    _margin(upper, WIDE.subtract(a, b) if rising else WIDE.subtract(b, a), sides[1], book)
-    return verdict
+    margin = _margin(upper, WIDE.subtract(a, b) if rising else WIDE.subtract(b, a), sides[1], book)
+    return Judged(verdict, (left.shown, right.shown, margin))
 
 
 def _verdict(band: Band) -> tuple[str, Band]:
@@ -126,7 +134,7 @@ def _reported(
         book.note(band.sheet, band.address, f"the {what} is not the result of record", side.shown, shown)
 
 
-def _margin(band: Band, room: Decimal, limit: Quantity, book: Book) -> None:
+def _margin(band: Band, room: Decimal, limit: Quantity, book: Book) -> Quantity:
     """The margin as shown, its per cent of the limit and its digits of record, each with its sign."""
     cell, margin = band.column(*MARGIN), of_record(room)
     shown = words(g for g in cell if g.bold)
@@ -143,6 +151,7 @@ def _margin(band: Band, room: Decimal, limit: Quantity, book: Book) -> None:
                 book.note(band.sheet, band.address, "the margin in per cent is another", row, per_cent)
         elif Quantity(printed, named(name)) != Quantity(margin, limit.unit) or not _signed(row, margin):
             book.note(band.sheet, band.address, "the margin of record is another", row, f"{margin} {limit.unit}")
+    return Quantity(number, unit)
 
 
 def _signed(printed: str, margin: Decimal) -> bool:

@@ -29,12 +29,13 @@ def checks(study: Study, references: References) -> list[Json]:
 
 
 def reported(study: Study) -> dict[str, Json]:
-    """Address -> short form of every value that a rule compares, so that one value is reported in one way everywhere."""
+    """Address -> short form of every result that a rule compares, so that one value is reported in one way everywhere."""
     found: dict[str, Json] = {}
     for c in study.checks:
         if c.left is not None and c.right is not None:
             for side, headline in zip((c.left, c.right), _headlines(study.ledger, c, c.left, c.right), strict=True):
-                found.setdefault(side.address, headline)
+                if _stated(study.ledger, side) is None:
+                    found.setdefault(side.address, headline)
     return found
 
 

@@ -67,6 +67,8 @@ def _design(c: Calculation) -> Iterator[str]:
             f"pressure as head{losses.format('the surface')}. No velocity head is added: the energy at a still surface already contains what "
             "becomes velocity head at the pump."
         )
+    if c.supply.level is not None and c.supply.level.drawdown is not None:
+        yield "While the pumps run the surface falls by the drawdown that the file states; it is taken off the level."
     if c.supply.kind == "saturated":
         yield (
             "The vessel is saturated: its liquid and its vapour are at one temperature, and the pressure on the surface is the vapour "
@@ -135,8 +137,8 @@ def _losses(line: Line) -> str:
 def _line(c: Calculation) -> Iterator[str]:
     if shared(c):
         yield (
-            f"Several pumps share the line. Each section carries the flow of the pumps it serves that run, {c.pump.running} at most, each "
-            "with the flow of one pump; velocity, friction and losses of a section are those of its own flow."
+            f"Several pumps share the line. Each section carries the flow of those it serves that run ({c.pump.running} here), each with the "
+            "flow of one pump; velocity, friction and losses of a section are those of its own flow."
         )
     if c.line is not None and any(e.elevation is not None for s in c.line.sections for e in s.elements):
         yield (

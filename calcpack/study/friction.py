@@ -110,7 +110,7 @@ def hazen_williams(entry: Entry, liquid: Liquid, flow: Flow, length: Value, abou
     ]
     if outside:
         entry.find(
-            f"The formula of Hazen and Williams is used outside its usual range in {named(flow.section)} (line {lost.address})",
+            f"The formula of Hazen and Williams is used outside its usual range in {named(flow.section)}",
             f"{', '.join(outside)}: it knows neither viscosity nor Reynolds number; compare with Darcy and Weisbach",
         )
     return lost

@@ -42,7 +42,7 @@ def nodes(entry: Entry, origin_head: Value, liquid: Liquid, passage: Passage) ->
         if line.friction_contingency is None:
             energy = ledger.apply("energy_after", {"E_m": energy, "h": lost}, about)
         else:
-            operands = {"E_m": energy, "c": contingency(entry, line), "h": lost}
+            operands: dict[str, Value | list[Value]] = {"E_m": energy, "c": contingency(entry, line), "h": lost}
             energy = ledger.apply("energy_after_with_contingency", operands, about)
         lost = []
         pressure = ledger.apply("node_pressure", {
