@@ -13,6 +13,7 @@ from typing import Any
 
 from plants import INTAKE, plant, recorded
 
+from calcpack.assessment import run
 from calcpack.page.pdf import render
 from calcpack.reader.bands import ACCENT, INK, MM, NUMBER, SECOND, Band, bands
 from calcpack.reader.glyphs import Glyph, Sheet, sheets
@@ -21,7 +22,6 @@ from calcpack.reader.losses import FACTORS, LOSS, RECORD, SUM, is_losses
 from calcpack.reader.rules import LEFT, MARGIN, RIGHT, TEXT
 from calcpack.record import assemble, canonical
 from calcpack.source import load
-from calcpack.assessment import run
 
 SAMPLES = {path.name[0]: path for path in sorted((Path(__file__).parent.parent / "sample_inputs").glob("*.yaml"))}
 Record = dict[str, Any]
@@ -193,6 +193,77 @@ _HIGH = {"elevation": {"value": "1600 m", **_BY}, "weather_allowance": {"value":
 _GAS = {"lowest": "22 kPa gauge", **_BY}
 _COLUMN = {"lowest": "29.5 inHg absolute", **_BY}
 _US = {"calculation.units": "US"}
+_CURVE = {
+    "pump.npsh_required.value": None,
+    "pump.npsh_required.at_flow": None,
+    "pump.npsh_required.points": [
+        {"flow": f"{flow} m³/h", "npsh": f"{npsh} m"} for flow, npsh in ((120, 2.6), (180, 3.9), (240, 6.1), (300, 9.4))
+    ],
+}
+_SPEED = {"pump.speed": "1450 r/min", "pump.npsh_required.speed_exponent": "2"}
+_EYES = {
+    "pump.eyes": 2,
+    "pump.best_efficiency_flow": "210 m³/h",
+    "criteria.suction_specific_speed": {"highest": "220", "in": "metric"},
+}
+_TABLE = {
+    "name": "fuel oil",
+    "temperature": {"lowest": "60 °F", "highest": "130 °F"},
+    **_BY,
+    "table": [
+        {"temperature": t, "density": f"{d} lb/ft³", "viscosity": f"{v} cSt", "vapour_pressure": f"{p} psi absolute"}
+        for t, d, v, p in (("50 °F", 60.1, 900, 0.001), ("100 °F", 59.2, 150, 0.004), ("150 °F", 58.3, 45, 0.02))
+    ],
+}
+_MAIN = {
+    "supply": {
+        "name": "city main",
+        "kind": "main",
+        "pressure": {"lowest": "35 psi gauge", **_BY},
+        "elevation": {"value": "-3 ft", **_BY},
+        "velocity_head": "counted",
+    },
+    "line.sections.0.elements.0": {"id": "1", "kind": "tee", "flow": "branch"},
+}
+_LOSSES = {
+    "line.mixed_sets": "intended",
+    "line.sections.0.elements": [
+        {"id": "1", "kind": "entrance", "shape": "flush"},
+        {"id": "2", "kind": "pipe", "length": "12 m", "elevation": "0.5 m"},
+        {"id": "3", "kind": "elbow", "radius": "long", "set": "hooper_2k"},
+        {"id": "4", "kind": "valve", "Cv": "900"},
+        {"id": "5", "kind": "valve", "L_over_D": "13"},
+        {
+            "id": "6",
+            "kind": "equipment",
+            "name": "E-1",
+            "curve": [{"flow": "150 m³/h", "loss": "8 kPa"}, {"flow": "250 m³/h", "loss": "20 kPa"}],
+        },
+        {"id": "7", "kind": "connector", "loss": "0.2 m", "at_flow": "200 m³/h", "count": 2},
+        {
+            "id": "8",
+            "kind": "reducer",
+            "type": "concentric",
+            "to": {"bore": "150 mm"},
+            "length": "0.2 m",
+            "elevation": "0.1 m",
+        },
+    ],
+}
+_WITHHELD = {"line.withheld_head": {"value": "0.5 m", **_BY}, "pump.npsh_required.datum_elevation": "-0.4 m"}
+_HAZEN = {
+    "line.loss_method": "hazen_williams",
+    "line.sections.0.hazen_williams_C": "120",
+    "line.fitting_set": "darby_3k",
+}
+_ASKED = {
+    "criteria.velocity": "2.4 m/s",
+    "criteria.operating_region": {"lowest": "70 %", "highest": "120 %"},
+    "pump.flow.lowest": "120 m³/h",
+    "pump.best_efficiency_flow": "190 m³/h",
+    "liquid.name": "sea water",
+    "liquid.salinity": "35 g/kg",
+}
 _MIXED = {"pump.flow.highest": "880 gpm", "supply.level.lowest": "5 ft", "site.barometer": _COLUMN}
 #: Plants unlike the samples: name -> changes to the invented plant, whether it has a line, how many readings.
 PLANTS: dict[str, tuple[dict[str, Any], bool, int]] = {
@@ -204,6 +275,20 @@ PLANTS: dict[str, tuple[dict[str, Any], bool, int]] = {
     "contingency": ({"line.friction_contingency": {"value": "10 %", **_BY}}, True, 0),
     "small loss": ({"line.sections.0.elements.3.K": "0.001"}, True, 0),
     "readings only": ({**_US, "calculation.paper": "A4"}, False, 2),
+    "saturated, curve, speed": (
+        {**_US, **_CURVE, **_SPEED, **_EYES, "supply.kind": "saturated", "supply.level.lowest": "52 ft"}, True, 0
+    ),
+    "smooth curve": ({**_CURVE, "pump.npsh_required.interpolation": "smooth"}, True, 0),
+    "a table's liquid, coldest case": ({**_US, "liquid": _TABLE}, True, 0),
+    "a main": ({**_US, **_MAIN}, True, 0),
+    "every way to state a loss": (_LOSSES, True, 0),
+    "withheld head, another datum": (_WITHHELD, True, 0),
+    "Hazen and Williams": ({**_US, **_HAZEN}, True, 0),
+    "more criteria": (_ASKED, True, 0),
+    "wet pit": (
+        {"line": None, "pump.arrangement": "wet_pit", "intake": INTAKE | {"reference": "bell_lip"}, "supply.level.drawdown": "6 in"},
+        True, 0,
+    ),
 }  # fmt: skip
 
 

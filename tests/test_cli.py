@@ -152,6 +152,87 @@ def test_closed_output_is_quiet() -> None:
     assert "Traceback" not in done.stderr and "defect" not in done.stderr
 
 
+def test_new_writes_an_input_file_that_works(tmp_path: Path, capsys: pytest.CaptureFixture[str]) -> None:
+    target = tmp_path / "mine.yaml"
+    assert cli.run(["new", str(target)]) == 0
+    assert capsys.readouterr().out.strip() == str(target)
+    record = calcpack.assess(target)
+    assert record["cover"]["verdict"] == "met" and record["route"] == "design"
+    assert target.read_text("utf-8").count("#") > 15
+
+
+@pytest.mark.parametrize("case", ["a file", "a folder", "a dangling link", "no folder"])
+def test_new_overwrites_nothing(case: str, tmp_path: Path, capsys: pytest.CaptureFixture[str]) -> None:
+    target = tmp_path / "mine.yaml"
+    match case:
+        case "a file":
+            target.write_text("mine")
+        case "a folder":
+            target.mkdir()
+        case "a dangling link":
+            target.symlink_to(tmp_path / "elsewhere.yaml")
+        case "no folder":
+            target = tmp_path / "missing" / "mine.yaml"
+    before = sorted(p.name for p in tmp_path.rglob("*"))
+    assert cli.run(["new", str(target)]) == 2
+    assert "wanted a file that can be written" in capsys.readouterr().err
+    assert sorted(p.name for p in tmp_path.rglob("*")) == before
+    assert case != "a file" or target.read_text() == "mine"
+
+
+@pytest.mark.parametrize(
+    ("command", "wanted", "undone"),
+    [
+        ("assess", "wanted an input file (YAML); found a PDF", "nothing was computed"),
+        ("draft", "wanted an input file (YAML); found a PDF", "nothing was written"),
+        ("verify", "found a file that does not open as a PDF", "nothing was verified"),
+    ],
+)
+def test_a_file_of_the_wrong_kind_is_named_as_what_it_is(
+    command: str, wanted: str, undone: str, tmp_path: Path, capsys: pytest.CaptureFixture[str]
+) -> None:
+    package = tmp_path / "p.pdf"
+    package.write_bytes(b"%PDF-1.7\n\xe2\xe3\xcf\xd3 nothing more")
+    assert cli.run([command, str(package)]) == 2
+    told = capsys.readouterr().err
+    assert wanted in told and undone in told and ".." not in told
+
+
+def test_a_package_that_is_not_there(tmp_path: Path, capsys: pytest.CaptureFixture[str]) -> None:
+    assert cli.run(["verify", str(tmp_path / "missing.pdf")]) == 2
+    assert "found no file of that name" in capsys.readouterr().err
+
+
+def test_an_odd_file_name_is_written_out(tmp_path: Path, capsys: pytest.CaptureFixture[str]) -> None:
+    for arguments in (["verify", str(tmp_path / "a\x1b[2Jb.pdf")], ["new", str(tmp_path / "a\x1b[2Jb" / "c.yaml")]):
+        assert cli.run(arguments) == 2
+        told = capsys.readouterr().err
+        assert "\x1b" not in told and "<U+001B>" in told
+
+
+def test_the_exceptions_of_the_interface_are_at_hand_and_cost_no_import() -> None:
+    probe = (
+        "import sys, calcpack; before = set(sys.modules); names = calcpack.InputFault, calcpack.NotAPackage\n"
+        "assert 'calcpack.reader' not in before and 'calcpack.faults' not in before\n"
+        "try: calcpack.verify(b'nothing')\n"
+        "except calcpack.NotAPackage as error: print(error)"
+    )
+    done = subprocess.run([sys.executable, "-c", probe], capture_output=True, text=True, cwd=ROOT)
+    assert done.stdout.strip() == "a file that does not open as a PDF", done.stderr
+    with pytest.raises(AttributeError, match="no attribute"):
+        calcpack.nothing_of_the_kind  # noqa: B018
+    with pytest.raises(calcpack.InputFault) as caught:
+        calcpack.assess(BAD)
+    assert caught.value.faults  # type: ignore[attr-defined]
+
+
+def test_findings_stand_below_the_verdict_in_a_terminal(capsys: pytest.CaptureFixture[str]) -> None:
+    assert cli.run(["assess", str(SAMPLES / "c_transfer_pump_both_routes.yaml")]) == 0
+    told = capsys.readouterr().out
+    assert "Open findings, below: 2." in told and "section" not in told
+    assert told.index("Open findings") < told.index("\nFindings\n")
+
+
 @pytest.mark.campaign
 def test_killed_at_any_moment_leaves_old_or_new(tmp_path: Path) -> None:
     """Kill the command at 40 moments of its run: the target holds the old bytes or a whole new package, never less."""

@@ -140,7 +140,7 @@ def test_cover_holds_verdict_counts_and_blank_signatures(letter: bytes, american
 def test_cover_lists_every_rule_those_without_numbers_too(other: Record, a4: bytes) -> None:
     with pypdfium2.PdfDocument(a4) as document:
         cover = words(document)[0]
-    table = cover[cover.index("the governing one first") :]
+    table = cover[cover.index("the governing one first") :].replace("\r", "")
     for check in other["checks"]:
         assert re.search(rf"\b{re.escape(check['address'])} {re.escape(check['title'])}", table), check["address"]
     for word, n in (("not assessed", 1), ("not applicable", 1)):
@@ -173,9 +173,9 @@ KINDS = {
                 "name": "chilled loop", "kind": "loop", "pressure": {"lowest": "150 kPa gauge"}, "elevation": "0.4 m",
                 "point": "expansion tank", "velocity_head": "left_out",
             },
-            "intake": None,
+            "line.sections.0.elements.0": {"id": "1", "kind": "tee", "flow": "run"},
         },
-        ("chilled loop", "expansion tank", "+0.4, 150 kPa gauge", "pressure at the point"),
+        ("chilled loop", "expansion tank", "+0.400, 150 kPa gauge", "pressure at the point"),
     ),
     "wet pit": (
         {"pump.arrangement": "wet_pit", "line": None, "intake": INTAKE | {"reference": "bell_lip"}},
@@ -187,7 +187,7 @@ KINDS = {
     ),
     "another datum": (
         {"pump.npsh_required.datum_elevation": "-0.25 m", "line.withheld_head": "0.5 m"},
-        ("−0.25", "head withheld −0.500"),
+        ("−0.25", "head withheld −0.5"),
     ),
 }  # fmt: skip
 

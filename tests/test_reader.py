@@ -25,10 +25,11 @@ from reader_packages import (
 )
 from reader_pictures import DISPLAYS, ROW, Trees, expected, pdf, printed
 
+import calcpack.page.pdf
 import calcpack.reader
 from calcpack import formula
 from calcpack.page.layout import MEASURE, Setting, line, with_numbers
-from calcpack.page.pdf import render
+from calcpack.page.pdf import fill, render
 from calcpack.reader import NotAPackage, Report, verify
 from calcpack.reader.arithmetic import of_record
 from calcpack.reader.factors import printed_factor
@@ -117,6 +118,24 @@ def test_a_sum_is_read_with_its_symbol_and_its_terms() -> None:
     assert not isinstance(found, str)
     assert found[0].right == Op("sum", (expected(formula.Name("h")),))
     assert found[1].right == expected(with_numbers(formula.parse("sum(h)"), {"h": terms}))
+
+
+@pytest.mark.parametrize("count", [1, 2, 5, 12, 20])
+def test_a_long_sum_inside_brackets_is_broken_and_read_whole(count: int) -> None:
+    tree = formula.parse("g * (z_s - (1 + c) * sum(h) - z_d - h_V)")
+    values = {
+        "g": "9757.47",
+        "z_s": "10.8052",
+        "c": "0.1",
+        "h": ["0.0803475"] * count,
+        "z_d": "-1.2",
+        "h_V": "0.160695",
+    }
+    setting = line("p_s", tree, values, DISPLAYS)
+    assert setting.width <= MEASURE + 0.01
+    found = read_pictures([setting], rows=4)[0]
+    assert not isinstance(found, str), found
+    assert [form.right for form in found] == [expected(tree), expected(with_numbers(tree, values))]
 
 
 # --- numbers, units, factors -----------------------------------------------------------------------------
@@ -231,6 +250,47 @@ def test_falsehoods_in_tables_rules_and_cover_are_found() -> None:
     }  # fmt: skip
     assert {address: words for address, words in wanted.items() if words not in found.get(address, "")} == {}
     assert "the left side is not the result of record" in found["9.3"]
+
+
+def test_a_headline_rounded_aside_stands_only_where_a_rule_reports_it_so() -> None:
+    """A result that a rule compares is rounded to the safe side on its line too; any other is rounded to the nearest."""
+    made = record("a")
+    shown = {c[s]["address"] for c in made["checks"] for s in ("left", "right") if c[s]}
+    needed = next(x for x in lines(made) if x["symbol"] == "S_m")
+    assert needed["address"] in shown and float(needed["headline"]["text"]) > float(needed["value"])
+    assert verify(package("a")).ok
+    plain = next(x for x in lines(made) if x["symbol"] == "H_s")
+    assert plain["address"] not in shown
+    text = Decimal(plain["headline"]["text"])
+    step = Decimal(1).scaleb(-len(plain["headline"]["text"].partition(".")[2]))
+    plain["headline"]["text"] = str(text + step if text < Decimal(plain["value"]) else text - step)
+    assert "the headline is not the result" in found_at(verify(render(made, []))).get(plain["address"], "")
+
+
+def test_a_relation_that_the_numbers_do_not_have_is_found() -> None:
+    made = record("a")
+    failed = next(c for c in made["checks"] if c["verdict"] == "not met")
+    failed["found"] = "≥"
+    found = found_at(verify(render(made, [])))
+    assert "the numbers do not stand in the relation printed" in found[failed["address"]]
+
+
+def test_a_cover_with_other_figures_or_fewer_rules_is_found() -> None:
+    made = record("a")
+    html = fill(made)
+    first = made["checks"][0]["left"]["headline"]["text"]
+    assert html.count(f"{first} ft</td>") == 1
+    changed = _printed(html.replace(f"{first} ft</td>", f"{float(first) + 1:.2f} ft</td>"), made)
+    assert "the cover gives other figures" in found_at(verify(changed))[made["checks"][0]["address"]]
+    row = html[html.index("<tr>", html.index("the governing one first")) :].partition("</tr>")[0] + "</tr>"
+    assert "the cover leaves rules out" in found_at(verify(_printed(html.replace(row, "", 1), made)))[""]
+
+
+def _printed(html: str, made: dict[str, Any]) -> bytes:
+    """Changed HTML of a package as a PDF."""
+    with pytest.MonkeyPatch.context() as patch:
+        patch.setattr(calcpack.page.pdf, "fill", lambda _: html)
+        return render(made, [])
 
 
 def unseen(name: str, seed: int, count: int) -> list[str]:

@@ -21,6 +21,7 @@ from calcpack.assessment import Study
 from calcpack.faults import InputFault
 from calcpack.number import last_unit
 from calcpack.roughness import NEW
+from calcpack.symbols import NOMENCLATURE
 from calcpack.value import drift
 from calcpack.verdict import reported_decimals
 
@@ -37,7 +38,7 @@ def metres(x: float, digits: int = 3) -> str:
 
 def npsh(study: Study, number: int = 0) -> float:
     """NPSH available of the result judged, in metres."""
-    return study.judged[number].npsh.shadow
+    return study.judged[number].available.npsh.shadow
 
 
 def faults(document: Document) -> str:
@@ -127,7 +128,7 @@ def test_both_routes_agree_on_one_physical_state(document: Document, elevation: 
     """Energy balance: the gauge the model implies gives back the model's NPSH available, within line rounding."""
     document = changed(document, {"calculation.units": units})
     study = studied(implied_reading(document, studied(document), elevation=round(elevation, 3), leg=leg))
-    design, carried = study.judged
+    design, carried = (each.available for each in study.judged)
     (difference,) = study.differences
     assert abs(difference.value.shadow) < 1e-4, "the gauge is written to 0.1 Pa"
     assert abs(float(difference.value.record * Decimal(float(difference.value.unit.factor)))) < 1e-3
@@ -154,7 +155,7 @@ def test_a_reading_is_carried_as_the_model_moves(
     then = changed(document, at_reading)
     reading = implied_reading(then, studied(then), elevation=0.4, leg="filled")["readings"]
     both = studied(changed(document, {"readings": reading}))
-    design, carried = both.judged
+    design, carried = (each.available for each in both.judged)
     # The velocity head on the tap and the gauge's own rounding remain; the liquid's weight differs between the states.
     assert carried.npsh.shadow == pytest.approx(design.npsh.shadow, abs=2e-3)
 
@@ -198,7 +199,7 @@ def test_the_published_consistency_case_holds_at_any_velocity(velocity: float) -
     if velocity == 2.0:
         assert gauge == pytest.approx(-43.109, abs=5e-4)
     assert npsh(study) == pytest.approx(5.9123, abs=2e-4)
-    assert both.judged[1].npsh.shadow == pytest.approx(5.9123, abs=2e-4)
+    assert both.judged[1].available.npsh.shadow == pytest.approx(5.9123, abs=2e-4)
 
 
 # --- the way NPSH available moves -------------------------------------------------------------------------------------
@@ -246,11 +247,13 @@ def test_npsh_of_water_under_an_open_surface_falls_with_temperature(document: Do
 @given(systems(), st.integers(1, 100))
 def test_the_order_of_elements_changes_nothing_beyond_rounding(document: Document, seed: int) -> None:
     elements = list(document["line"]["sections"][0]["elements"])
-    random.Random(seed).shuffle(elements)
+    entrance, *rest = elements
+    random.Random(seed).shuffle(rest)
+    elements = [entrance, *rest]
     other = studied(changed(document, {SECTION + "elements": elements}))
     base = studied(document)
     assert npsh(other) == pytest.approx(npsh(base), abs=1e-9)
-    a, b = other.judged[0].npsh.record, base.judged[0].npsh.record
+    a, b = other.judged[0].available.npsh.record, base.judged[0].available.npsh.record
     assert abs(a - b) <= 2 * last_unit(b)
     assert verdicts(other) == verdicts(base)
 
@@ -259,7 +262,7 @@ def test_the_order_of_elements_changes_nothing_beyond_rounding(document: Documen
 @given(systems(), st.sampled_from(["SI", "US"]))
 def test_line_rounding_stays_far_below_a_reported_digit(document: Document, units: str) -> None:
     study = studied(changed(document, {"calculation.units": units}))
-    for value in (study.judged[0].npsh, study.need.limit):
+    for value in (study.judged[0].available.npsh, study.judged[0].needed.limit):
         assert reported_decimals(value) == 2 and drift(value) < Decimal("0.001")
     assert verdicts(study)["npsh_margin"] != "not assessed"
 
@@ -294,8 +297,10 @@ def restated(of: Any) -> Any:
 
 
 def as_typed(path: Path) -> Document:
-    """The file with every value as text, save the two keys that hold whole numbers."""
+    """The file with every value as text, save the keys that hold whole numbers."""
     loaded: Document = yaml.load(path.read_text("utf-8"), yaml.BaseLoader)
+    for part in (loaded["pump"], *loaded.get("line", {}).get("sections", ())):
+        part.update({key: int(part[key]) for key in ("running", "eyes", "pumps") if key in part})
     for element in (e for s in loaded.get("line", {}).get("sections", ()) for e in s["elements"]):
         element.update({key: int(element[key]) for key in ("count", "angle") if key in element})
     return loaded
@@ -313,7 +318,8 @@ def test_a_sample_restated_in_the_other_units_says_the_same(path: Path) -> None:
             for x, y in ((a.left, b.left), (a.right, b.right)):
                 assert x.shadow == pytest.approx(y.shadow, rel=1e-7), "full precision, on nine digits typed"
                 of_record = [float((Fraction(v.record) + v.unit.offset) * v.unit.factor) for v in (x, y)]
-                assert of_record[0] == pytest.approx(of_record[1], abs=1e-3), "within drift"
+                room = 1e-3 if NOMENCLATURE[x.symbol].kind == "length" else 2e-5 * abs(x.shadow)
+                assert of_record[0] == pytest.approx(of_record[1], abs=room), "within drift"
 
 
 @pytest.mark.parametrize("path", SAMPLES, ids=lambda p: p.stem)
@@ -539,12 +545,9 @@ def test_the_transition_zone_is_a_finding(times: float, zone: str, finding: bool
 # --- rules in their plants --------------------------------------------------------------------------------------------
 
 
-@pytest.mark.parametrize("intake", [None, INTAKE])
-def test_a_main_has_no_surface_and_so_no_submergence(intake: Document | None) -> None:
-    main = {"supply": {"name": "main M-4", "kind": "main"}, "readings.0.level": None, "intake": intake}
-    study = studied(
-        plant({k: v for k, v in main.items() if v is not None or k.startswith("readings")}, line=False, readings=1)
-    )
+def test_a_main_has_no_surface_and_so_no_submergence() -> None:
+    main = {"supply": {"name": "main M-4", "kind": "main"}, "readings.0.level": None}
+    study = studied(plant(main, line=False, readings=1))
     (check,) = [c for c in study.checks if c.rule.name == "submergence"]
     assert check.verdict == "not applicable" and "main M-4" in check.reason and "no free surface" in check.reason
     assert (check.left, check.right) == (None, None)
@@ -595,8 +598,8 @@ MARGINS: tuple[tuple[dict[str, str], float, str], ...] = (
 @pytest.mark.parametrize(("asked", "needed", "word"), MARGINS)
 def test_the_greater_margin_governs(asked: dict[str, str], needed: float, word: str) -> None:
     study = studied(plant({"criteria.npsh_margin": asked}))
-    assert study.need.limit.shadow == pytest.approx(needed) and word in study.need.governs
-    assert ("governs" in study.need.governs) is (len(asked) == 2), "one margin alone governs nothing"
+    assert study.judged[0].needed.limit.shadow == pytest.approx(needed) and word in study.judged[0].needed.governs
+    assert ("governs" in study.judged[0].needed.governs) is (len(asked) == 2), "one margin alone governs nothing"
     for name, symbol in (("ratio", "M_r"), ("difference", "M_d")):
         assert found(study, symbol).shadow > 0, f"the margin {name} is printed whichever is asked for"
 
@@ -605,12 +608,12 @@ BOILING: tuple[dict[str, Any], ...] = (
     {"liquid.temperature.highest": "101 °C"},
     {"liquid.temperature.highest": "100 °C", "site.barometer.lowest": "90 kPa absolute"},
     {
-        "liquid.temperature.highest": "120 °C",
+        "liquid.temperature.highest": "125 °C",
         "supply.kind": "gas_blanketed",
         "supply.pressure": {"lowest": "98 kPa gauge", "source": "S1"},
     },
     {
-        "liquid.temperature.highest": "60 °C",
+        "liquid.temperature.highest": "65 °C",
         "supply.kind": "gas_blanketed",
         "supply.pressure": {"lowest": "19.9 kPa absolute", "source": "S1"},
     },
