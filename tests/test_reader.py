@@ -133,7 +133,7 @@ def test_a_long_sum_inside_brackets_is_broken_and_read_whole(count: int) -> None
     }
     setting = line("p_s", tree, values, DISPLAYS)
     assert setting.width <= MEASURE + 0.01
-    found = read_pictures([setting], rows=4)[0]
+    found = read_pictures([setting], rows=6)[0]
     assert not isinstance(found, str), found
     assert [form.right for form in found] == [expected(tree), expected(with_numbers(tree, values))]
 

@@ -34,6 +34,7 @@ class Book:
     values: dict[str, tuple[Quantity, ...]] = field(default_factory=dict)
     cites: dict[str, set[str]] = field(default_factory=dict)
     symbols: dict[Symbol, tuple[int, str]] = field(default_factory=dict)
+    measured: list[tuple[int, str, Symbol, str]] = field(default_factory=list)
     classes: dict[str, Class] = field(default_factory=dict)
     findings: list[Finding] = field(default_factory=list)
     unread: list[Finding] = field(default_factory=list)
@@ -64,6 +65,11 @@ class Book:
         """Remember symbols in use and where each first stands."""
         for x in found:
             self.symbols.setdefault(x, (sheet, address))
+
+    def result(self, sheet: int, address: str, of: Symbol, unit: str) -> None:
+        """Remember which symbol a value is printed for, and in which unit."""
+        self.uses(sheet, address, [of])
+        self.measured.append((sheet, address, of, unit))
 
     def enter(self, address: str, values: Iterable[Quantity]) -> None:
         """Let later lines cite ``address``."""

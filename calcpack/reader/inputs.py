@@ -44,7 +44,7 @@ def _quantity(printed: str) -> Quantity:
 def enter(row: Input, book: Book) -> None:
     """Let lines cite the input, and compare what is used with what is given where nothing converts it."""
     book.enter(row.address, [row.given])
-    book.uses(row.sheet, row.address, [row.symbol])
+    book.result(row.sheet, row.address, row.symbol, row.given.unit)
     if not row.by and row.used != row.given:
         book.note(row.sheet, row.address, "used otherwise than given, and no line converts it", row.used, row.given)
 

@@ -52,7 +52,7 @@ class Reading:
         self.inputs: list[Input] = []
         self.conversions: dict[str, Conversion] = {}
         self.converting: list[tuple[Line, str]] = []
-        self.known: set[Symbol] = set()
+        self.known: dict[Symbol, str] = {}
         self.rules: dict[str, Judged] = {}
         self.order: list[tuple[int, str]] = []
 

@@ -28,11 +28,11 @@ def recompute(line: Line, book: Book) -> Class:
             book.note(line.sheet, line.address, f"{operand.symbol} {wrong[0]}", *wrong[1:])
     _headline(line, book)
     if line.entry is not None:
-        book.uses(line.sheet, line.address, [line.entry.symbol])
+        book.result(line.sheet, line.address, line.entry.symbol, line.record.unit)
         return tabulated(line, line.entry, book)
     first = line.forms[0]
     if isinstance(first.left, Symbol):
-        book.uses(line.sheet, line.address, [first.left])
+        book.result(line.sheet, line.address, first.left, line.record.unit)
     book.uses(line.sheet, line.address, (operand.symbol for operand in line.operands))
     if any(form.relation != "=" for form in line.forms):
         raise Unread("a line that is no equation")
@@ -136,6 +136,7 @@ def _root(line: Line, book: Book) -> None:
         raise Unread("a root without both sides in symbols and in numbers")
     symbolic, numeric = (Op("-", (form.left, form.right)) for form in line.forms if form.left is not None)
     unknown = _unknown(line, symbolic)
+    book.result(line.sheet, line.address, unknown, line.record.unit)
     _substitution(line, symbolic, numeric, book)
     root, half = line.record.value, unit_of_record(line.record.value) / 2
     signs = []
