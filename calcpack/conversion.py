@@ -31,7 +31,10 @@ _SHORT = 10**6
 @cache
 def factor_text(factor: Fraction) -> str:
     """An exact factor as a checker can type it: a short fraction, else the definitions it is made of."""
-    if max(factor.numerator, factor.denominator) < _SHORT:
+    if all(
+        part < _SHORT or set(str(part)) <= set("10") and str(part).count("1") == 1
+        for part in (factor.numerator, factor.denominator)
+    ):
         return str(factor.numerator) if factor.denominator == 1 else f"{factor.numerator} / {factor.denominator}"
     ways = []
     for foot, pound, gravity in product(range(-4, 5), (-1, 0, 1), (-1, 0, 1)):

@@ -107,7 +107,6 @@ _ALL = (
         "Engineering Data Library, eq. 1.E.1 and 1.E.2 (2023)",
         "opened",
     ),
-    Reference("hi961", "ANSI/HI 9.6.1-2012: Rotodynamic Pumps, Guideline for NPSH Margin", "recalled"),
     Reference(
         "hi961s",
         "ANSI/HI 9.6.1: Rotodynamic Pumps, Guideline for NPSH Margin, in the structure of its 2012 edition, as a public sheet "

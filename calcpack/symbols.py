@@ -10,8 +10,10 @@ from fractions import Fraction
 
 from .formula import Dimension
 
+
 def _dimension(length: int = 0, mass: int = 0, time: int = 0, temperature: int = 0) -> Dimension:
     return (Fraction(length), Fraction(mass), Fraction(time), Fraction(temperature))
+
 
 #: Kind of quantity -> exponents of length, mass, time, temperature.
 KINDS: dict[str, Dimension] = {
@@ -36,6 +38,7 @@ KINDS: dict[str, Dimension] = {
     "specific_speed": _dimension(),
 }
 
+
 @dataclass(frozen=True)
 class Symbol:
     """One entry of the nomenclature; ``base`` and ``sub`` are how it is written, upright for names of several letters."""
@@ -49,6 +52,7 @@ class Symbol:
     @property
     def upright(self) -> bool:
         return len(self.base) > 2
+
 
 _TABLE = """
 A       A        .      area                 flow area of the bore
@@ -146,15 +150,15 @@ n       n        .      ratio                number of equal elements
 n_0     n        0      speed                speed of the maker's curve
 n_a     n        a      ratio                exponent of the pressure law of the atmosphere
 N       N        .      ratio                number of pumps whose flow a section carries
-N_A     N        A      length               NPSH required at the point of the maker's curve below this flow
-N_B     N        B      length               NPSH required at the point of the maker's curve above this flow
+N_A     NPSHR    A      length               NPSH required at the point of the maker's curve below this flow
+N_B     NPSHR    B      length               NPSH required at the point of the maker's curve above this flow
 n_p     n        p      speed                speed of the pump
-N_p     N        p      length               NPSH required at a point of the maker's curve
+N_p     NPSHR    p      length               NPSH required at a point of the maker's curve
 N_s0    N        ss,0   specific_speed       suction specific speed from which the stricter margin holds
 N_sm    N        ss,max specific_speed       suction specific speed, the most
 N_ss    N        ss     specific_speed       suction specific speed
 n_u     n        u      speed                unit of speed in the suction specific speed
-NPSH_b  NPSH     b      length               NPSH required at best efficiency
+NPSH_b  NPSHR    b      length               NPSH required at best efficiency
 NPSHR_c NPSHR    c      length               NPSH required at the speed of the maker's curve
 nu      ν        .      kinematic_viscosity  kinematic viscosity of the liquid
 nu_1    ν        1      kinematic_viscosity  kinematic viscosity in the row of the table below the temperature
@@ -184,6 +188,7 @@ p_k     p        k      pressure             absolute pressure at the point wher
 p_l     p        l      pressure             lowest gauge pressure to be kept in the loop
 p_m     p        min    pressure             absolute pressure to be kept along the line
 p_n     p        n      pressure             absolute pressure at a point of the line
+p_sn    p        n,s    pressure             lowest absolute pressure at a point of the line within a stroke
 p_r     p        r      pressure             station barometer as read, absolute
 p_s     p        s      pressure             absolute pressure on the liquid surface
 p_v     p        v      pressure             vapour pressure, absolute
@@ -258,9 +263,11 @@ z_w     z        w      length               drawdown of the surface while pumpi
 Z       Z        .      length               site elevation, geometric
 """
 
+
 def _read(table: str) -> dict[str, Symbol]:
     rows = (line.split(maxsplit=4) for line in table.strip().splitlines())
     return {r[0]: Symbol(r[0], r[1], "" if r[2] == "." else r[2], r[3], r[4]) for r in rows}
+
 
 #: Symbol name, as formulas write it -> its entry.
 NOMENCLATURE: dict[str, Symbol] = _read(_TABLE)

@@ -153,7 +153,7 @@ DOCUMENT: dict[str, Faults] = {
         ("Crane TP-410", "line.fitting_set", "crane, hooper_2k or darby_3k", "`crane`"),
         ("wet-pit", "pump.arrangement", "wet_pit", "`wet_pit`"),
         ("certified: certifed", "pump.npsh_required.certified", "typical or certified", "`certified`"),
-        ("bell, elevation: 0.10 m}", "intake.reference", "bell_lip or inlet_centreline", "`bell_lip`"),
+        ("bell, elevation: 0.10 m}", "intake.reference", "bell_lip, inlet_centreline or inlet_mouth", "`bell_lip`"),
         ("HI 9.8}", "criteria.submergence.method", "hi_9_8", "`hi_9_8`"),
         ("filed, tap: {size: DN 15", "readings[1].gauge.leg", "filled or dry", "`filled`"),
     ],

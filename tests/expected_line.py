@@ -28,6 +28,7 @@ LINE: dict[str, Faults] = {
         )
     ],
     "coefficient_out_of_range": [("1.2", "line.sections[P1].hazen_williams_C", "from 20 to 200", "the decimal point")],
+    "axis_length_negative": [("-8.5 m", "line.sections[P1].axis_length", "above zero", "")],
     "withheld_head_negative": [("-0.5 m", "line.withheld_head", "zero or more", "")],
     "condition_without_material": [("condition: rusty", "line.sections[P1].condition", "new or aged", "")],
     "sections_out_of_order": [

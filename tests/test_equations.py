@@ -57,7 +57,7 @@ def test_the_catalogue_is_what_the_folder_holds() -> None:
 
 
 def test_names_are_unique_and_their_number_is_pinned() -> None:
-    assert len(EQUATIONS) == len(EQUATION) == 125
+    assert len(EQUATIONS) == len(EQUATION) == 126
     assert {name: e.name for name, e in EQUATION.items()} == {name: name for name in EQUATION}
 
 
@@ -214,6 +214,7 @@ WITHOUT_SOURCE = {
     "inlet_area",
     "inlet_velocity",
     "submergence",
+    "pressure_less_acceleration",
     "pressure_kept",
     "inlet_gauge_running",
     "inlet_gauge_at_rest",
@@ -247,6 +248,9 @@ SUPPLIES: tuple[Document, ...] = (
     plant({"supply.kind": "gas_blanketed", "supply.pressure": {"lowest": "3 kPa absolute"}}),
     plant({"supply.level.drawdown": "0.2 m", "pump.arrangement": "wet_pit"}, line=False),
     plant({"pump.npsh_required.datum_elevation": "-0.2 m"}),
+    plant({"pump.speed": "200 r/min", "pump.npsh_required.speed": "200 r/min",
+           "pump.reciprocating": {"type": "triplex", "liquid": "water"},
+           "line.sections.0.elements.1": {"id": "2", "kind": "pipe", "length": "8 m", "elevation": "0 m"}}),
     plant({"liquid": {"name": "oil", "temperature": {"highest": "25 °C"}, "table": _TABLE, **_CITED}}),
     plant({"liquid": {"name": "oil", "temperature": {"highest": "25 °C"}, "table": _IN_STOKES, **_CITED}}),
     plant({"liquid": {"name": "sea water", "salinity": "35 g/kg", "vapour_pressure_of": "raoult",

@@ -120,7 +120,7 @@ def triplex() -> float:
     p_v, rho, mu = saturated("Water", 40)
     d, q = bore(4, "40"), 22 / 3600
     v, f = speed(q, d), darcy(q, d, rho, mu, 0.00005 * 0.3048)[1]
-    k = 0.5 + (3 * 14 + 8) * ft_Crane(d) + 18 * f + f * 8.5 / d
+    k = 0.5 + (3 * 14 + 8) * ft_Crane(d) + 18 * f + f * 7.5 / d
     return (air(95, 1700) - p_v) / (rho * G) + 2.6 - k * head(v) - 8.5 * v * 210 * 0.066 / (1.5 * G)
 
 

@@ -44,7 +44,7 @@ EQUATIONS = (
         "h",
         "h_0 * (Q / Q_0)**2",
         "Loss at this flow",
-        Cite("eaton"),
+        Cite("eaton", "printed for strainers"),
         "square law: turbulent flow",
     ),
     Equation(

@@ -4,6 +4,14 @@ from ..references import DEFINITION, PRACTICE
 from . import Equation
 
 EQUATIONS = (
+    Equation(
+        "pressure_less_acceleration",
+        "p_sn",
+        "p_n - gamma * h_a",
+        "Lowest pressure within a stroke",
+        DEFINITION,
+        "absolute",
+    ),
     Equation("pressure_kept", "p_m", "p_v + gamma * h_c", "Absolute pressure to be kept along the line", DEFINITION),
     Equation(
         "inlet_gauge_running",

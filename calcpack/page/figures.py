@@ -151,7 +151,7 @@ def _line(d: Drawing, scale: Scale, sketch: Sketch) -> None:
         for side in (-half, half):
             d.between(x1, y1 + side, x2, y2 + side, 0.35)
         d.between(x1, y1, x2, y2, 0.15, SECOND, "3 0.8 0.6 0.8")
-    if sketch["intake"] and sketch["intake"]["reference"] == "bell_lip":
+    if sketch["intake"] and sketch["intake"]["reference"] != "inlet_centreline":
         d.line(
             f"M{first} {start - HALF:.2f}L{first - 1.6} {start - 2.4:.2f}V{start + 2.4:.2f}L{first} {start + HALF:.2f}",
             0.35,

@@ -35,6 +35,7 @@ class Book:
     cites: dict[str, set[str]] = field(default_factory=dict)
     symbols: dict[Symbol, tuple[int, str]] = field(default_factory=dict)
     measured: list[tuple[int, str, Symbol, str]] = field(default_factory=list)
+    bases: dict[str, str] = field(default_factory=dict)
     classes: dict[str, Class] = field(default_factory=dict)
     findings: list[Finding] = field(default_factory=list)
     unread: list[Finding] = field(default_factory=list)
@@ -57,6 +58,11 @@ class Book:
             )
         return None
 
+    def renamed(self, of: Symbol, address: str) -> tuple[str, str, str] | None:
+        """What is wrong with the value of ``address`` standing for ``of``: its line's symbol may differ in the subscript only."""
+        base = self.bases.get(address, of.base)
+        return None if base == of.base else (f"stands for another symbol than line {address}", str(of), base)
+
     def cite(self, by: str, address: str) -> None:
         """Remember that line ``by`` rests on ``address``."""
         self.cites.setdefault(by, set()).add(address)
@@ -69,6 +75,7 @@ class Book:
     def result(self, sheet: int, address: str, of: Symbol, unit: str) -> None:
         """Remember which symbol a value is printed for, and in which unit."""
         self.uses(sheet, address, [of])
+        self.bases[address] = of.base
         self.measured.append((sheet, address, of, unit))
 
     def enter(self, address: str, values: Iterable[Quantity]) -> None:

@@ -102,6 +102,8 @@ def _total(band: Band, record: Quantity, table: Table, book: Book) -> None:
     if not _equations(found) or not (isinstance(found[0].right, Op) and found[0].right.name == "sum"):
         raise Unread("a total that is no sum")
     book.uses(band.sheet, band.address, (s for x in (found[0].left, found[0].right) if x for s in symbols(x)))
+    if isinstance(found[0].left, Symbol):
+        book.result(band.sheet, band.address, found[0].left, record.unit)
     if not table.losses or found[1].right != _sum(table.losses):
         book.note(band.sheet, band.address, "the sum is not that of the rows above it")
     total = of_record(value(found[1].right))

@@ -24,7 +24,8 @@ def recompute(line: Line, book: Book) -> Class:
     """
     for operand in line.operands:
         book.cite(line.address, operand.address)
-        if wrong := book.citation(operand.quantity, operand.address):
+        wrong = book.citation(operand.quantity, operand.address) or book.renamed(operand.symbol, operand.address)
+        if wrong:
             book.note(line.sheet, line.address, f"{operand.symbol} {wrong[0]}", *wrong[1:])
     _headline(line, book)
     if line.entry is not None:

@@ -16,7 +16,7 @@ from .glyphs import Glyph
 from .line import cited, picture
 from .picture import forms
 from .text import rows, scalar, words
-from .tree import Number, symbols
+from .tree import Number, Symbol, symbols
 from .units import Quantity, converted, factor, named
 
 LEFT, RELATION, RIGHT, MARGIN = (68.0, 95.0), (95.0, 100.0), (100.0, 127.0), (127.0, 150.0)
@@ -107,12 +107,13 @@ def _pair(band: Band, relation: str, left: Side, right: Side, book: Book) -> tup
         (s for form in found for t in (form.left, form.right) if t for s in symbols(t)),
     )
     sides = []
-    for printed, side in ((found[1].left, left), (found[1].right, right)):
-        if not isinstance(printed, Number):
-            raise Unread("a comparison of something else than two numbers")
+    for of, printed, side in ((found[0].left, found[1].left, left), (found[0].right, found[1].right, right)):
+        if not isinstance(printed, Number) or not isinstance(of, Symbol):
+            raise Unread("a comparison of something else than two values")
         known = book.values.get(side.address, ())
         unit = known[0].unit if known else ""
-        if wrong := book.citation(Quantity(printed.value, unit), side.address):
+        wrong = book.citation(Quantity(printed.value, unit), side.address) or book.renamed(of, side.address)
+        if wrong:
             book.note(band.sheet, band.address, f"the comparison {wrong[0]}", *wrong[1:])
         sides.append(Quantity(printed.value, unit))
     if sides[0].unit != sides[1].unit:
@@ -140,7 +141,9 @@ def _margin(band: Band, room: Decimal, limit: Quantity, book: Book) -> Quantity:
     shown = words(g for g in cell if g.bold)
     number, rest = scalar(shown)
     unit = named(rest)
-    found = rounded(Fraction(margin) * factor(limit.unit, unit), number, ROUND_FLOOR)
+    # The sixth digit of the record is no part of a margin: at three decimals more than shown it is rounded away first.
+    room_shown = rounded(Fraction(margin) * factor(limit.unit, unit), number.scaleb(-3), ROUND_HALF_EVEN)
+    found = rounded(Fraction(room_shown), number, ROUND_FLOOR)
     if found != number or not _signed(shown, margin):
         book.note(band.sheet, band.address, "the margin is another", shown, found)
     for row in map(str, rows(g for g in cell if g.colour == SECOND and not g.bold)):

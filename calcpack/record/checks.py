@@ -14,11 +14,13 @@ from ..quantity import PLANT, Unit
 from ..symbols import NOMENCLATURE
 from ..value import Line, Value, in_unit
 from ..verdict import Check, reported_decimals
-from .lines import Json, References, number, value
+from .lines import Json, References, number, quantity, value
 
 _SIGN = {">=": "≥", "<=": "≤", ">": ">", "<": "<"}
 _OPPOSITE = {">=": "<", "<=": ">", ">": "<=", "<": ">="}
 _HOLDS = {">=": operator.ge, "<=": operator.le, ">": operator.gt, "<": operator.lt}
+#: Decimals beyond those of a margin in which the six digits of record may leave a trace: 39.9996 is 40.
+_NOISE = 3
 #: Decimals beyond which no value of record has a digit left to show.
 _ALL_DIGITS = 8
 
@@ -59,11 +61,19 @@ def _check(ledger: Ledger, c: Check, address: str, references: References) -> Js
         "left": left,
         "right": right,
         "verdict": c.verdict,
-        "reason": c.reason,
+        "reason": _reason(c, margin),
         "criterion": c.criterion,
         "source": f"{c.source or 'no source stated'}; form of the rule: {references.text(c.rule.cite)}",
         "margin": margin,
     }
+
+
+def _reason(c: Check, margin: Json | None) -> str:
+    """Why the verdict stands; where a rule is not met, by how much comes first."""
+    if c.verdict != "not met" or margin is None:
+        return c.reason
+    shown = margin["headline"]
+    return f"{'short' if c.rule.tree.op in ('>=', '>') else 'over'} by {quantity({**shown, 'text': shown['text'].lstrip('-')})}; {c.reason}"
 
 
 def _margin(ledger: Ledger, c: Check, left: Value, margin: Decimal, decimals: int) -> Json:
@@ -73,7 +83,7 @@ def _margin(ledger: Ledger, c: Check, left: Value, margin: Decimal, decimals: in
     shown = margin if unit is left.unit else in_unit(Value("", left.symbol, margin, 0.0, left.unit, ""), unit)
     return {
         "value": number(margin), "unit": left.unit.name,
-        "headline": {"text": str(rounded(shown, decimals, "down")), "unit": unit.name},
+        "headline": {"text": str(rounded(rounded(shown, decimals + _NOISE, "even"), decimals, "down")), "unit": unit.name},
         "percent": None if c.percent is None else str(rounded(c.percent, 1, "down")),
     }  # fmt: skip
 
@@ -91,18 +101,19 @@ def _headlines(ledger: Ledger, c: Check, left: Value, right: Value) -> list[Json
     toward, holds = ("down", "up") if op in (">=", ">") else ("up", "down"), _HOLDS[op](left.record, right.record)
     if left.record == right.record:
         toward = ("even", "even")
-    sides = []
+    sides = [_reported(ledger, v, t, 0) for v, t in zip((left, right), toward, strict=True)]
+    one_unit = len({unit.name for _, unit, _ in sides}) == 1
     for more in range(_ALL_DIGITS):
-        sides = [_reported(ledger, v, t, more) for v, t in zip((left, right), toward, strict=True)]
+        sides = [_reported(ledger, v, t, more, as_stated=one_unit) for v, t in zip((left, right), toward, strict=True)]
         a, b = ((Fraction(x) + unit.offset) * unit.factor for x, unit, _ in sides)
         if _HOLDS[op](a, b) == holds:
             break
     return [headline for _, _, headline in sides]
 
 
-def _reported(ledger: Ledger, v: Value, toward: str, more: int) -> tuple[Decimal, Unit, Json]:
+def _reported(ledger: Ledger, v: Value, toward: str, more: int, as_stated: bool = True) -> tuple[Decimal, Unit, Json]:
     """A side as it was stated, or in plant units at the decimals line rounding allows and ``more``."""
-    line = _stated(ledger, v)
+    line = _stated(ledger, v) if as_stated else None
     if line is not None and line.kind == "lookup":
         return v.record, v.unit, {"text": number(v.record), "unit": v.unit.name}
     if line is not None:

@@ -100,4 +100,10 @@ def _statement(study: Study, judged: list[Json]) -> str:
     if study.differences:
         apart = ", ".join(f"{study.ledger.shown(d.value)} ({d.name})" for d in study.differences)
         words.append(f"Model less reading, at the state of the reading: {apart}.")
+    if study.calculation.supply.kind == "saturated":
+        words.append("Steady state only: a fall of the vessel's pressure is not analysed.")
+    if study.calculation.pump.running > 1:
+        words.append(
+            f"Computed with {study.calculation.pump.running} pumps running; with fewer, each runs out on its curve."
+        )
     return " ".join(words)

@@ -35,6 +35,13 @@ def limits(study: Study) -> list[Json]:
     return rows
 
 
+def _breathes(c: Calculation) -> bool:
+    """Whether the barometer enters NPSH available: over an open surface, beside a gauge pressure, and in readings."""
+    pressure = c.supply.pressure.lowest if c.supply.pressure else None
+    gauge = pressure is not None and pressure.quantity.reference != "absolute" and c.supply.kind != "saturated"
+    return c.supply.kind == "open" or gauge or bool(c.readings)
+
+
 def _stated(c: Calculation) -> list[tuple[str, str, Given | None]]:
     """What is limited, the word for it while the verdict holds, and the value; ``None`` where the file has none."""
     level, pressure, states = c.supply.level, c.supply.pressure, design_states(c)
@@ -47,7 +54,7 @@ def _stated(c: Calculation) -> list[tuple[str, str, Given | None]]:
         ("temperature of the liquid", "not above", c.liquid.temperature.highest),
         ("lowest temperature of the liquid", "not below", coldest),
         (f"pressure {place}", "not below", pressure.lowest if pressure else None),
-        ("barometer at the site", "not below", c.site.barometer.lowest if c.site.barometer else None),
+        ("barometer at the site", "not below", c.site.barometer.lowest if c.site.barometer and _breathes(c) else None),
     ]
     for section in c.line.sections if c.line else ():
         for e in section.elements:
@@ -56,4 +63,6 @@ def _stated(c: Calculation) -> list[tuple[str, str, Given | None]]:
             elif e.loss is not None:
                 rows.append((f"loss of {e.name or e.kind}", "not above", e.loss))
     npsh = c.pump.npsh_required
+    if npsh.points:
+        rows.insert(1, ("flow of one pump, by the curve", "not below", npsh.points[0].flow))
     return [*rows, ("speed of the pump", "as", c.pump.speed or npsh.speed), ("impeller", "as", npsh.impeller)]

@@ -77,7 +77,7 @@ def _design(c: Calculation) -> Iterator[str]:
         )
     if c.pump.arrangement == "wet_pit":
         yield (
-            "The pump hangs in its sump: NPSH required counts from its bell, and the losses inside the pump are its own. No line is modelled."
+            "The pump hangs in its sump: the losses from its bell on are its own, part of NPSH required. No line is modelled."
         )
     if len(design_states(c)) > 1:
         yield (

@@ -121,7 +121,7 @@ def standing(study: Study) -> list[tuple[str, str]]:
 def limits_note(judged: list[Json]) -> str:
     """What the limits of use mean under the verdict."""
     if all(r["verdict"] in PASSING for r in judged):
-        return "The verdict holds at these values and on the safe side of each; outside them the package no longer applies."
+        return "The verdict holds at these values, and on the safe side of each that has one; outside them the package no longer applies."
     short = [
         word
         for verdict, word in (("not met", "met"), ("not assessed", "assessed"))

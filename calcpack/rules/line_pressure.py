@@ -7,6 +7,7 @@ from collections.abc import Iterator
 from ..references import PRACTICE
 from ..study.entry import cited
 from ..study.npsh import Run
+from ..study.reciprocating import acceleration
 from ..study.results import Results
 from ..verdict import Check, Rule, Unapplied, compare, lacking
 
@@ -49,8 +50,14 @@ def _check(results: Results, run: Run) -> Check:
         operands = {"p_v": least, "gamma": liquid.specific_weight, "h_c": clearance}
         least = entry.ledger.apply("pressure_kept", operands, run.state.name)
     lowest = min(run.nodes, key=lambda node: node.pressure.record)
-    reason = f"lowest after {lowest.words}, element {lowest.element} (line {lowest.pressure.address})"
+    pressure, stroke = lowest.pressure, ""
+    taken = acceleration(entry, run.passage)[0] if results.calculation.pump.reciprocating and run.passage else None
+    if taken is not None:
+        operands = {"p_n": pressure, "gamma": liquid.specific_weight, "h_a": taken}
+        pressure = entry.ledger.apply("pressure_less_acceleration", operands, run.state.name)
+        stroke = "; the whole acceleration head is taken off, on the safe side upstream of the pump"
+    reason = f"lowest after {lowest.words}, element {lowest.element} (line {lowest.pressure.address}){stroke}"
     return compare(
-        LINE_PRESSURE, lowest.pressure, least, about=run.available.about, criterion=_criterion(results),
+        LINE_PRESSURE, pressure, least, about=run.available.about, criterion=_criterion(results),
         source=cited(asked), met=reason, not_met=reason,
     )  # fmt: skip

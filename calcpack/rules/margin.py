@@ -4,12 +4,12 @@ from __future__ import annotations
 
 from collections.abc import Iterator
 
-from ..references import Cite
+from ..references import PRACTICE
 from ..study.results import Judged, Results
 from ..verdict import Check, Rule, compare, without_numbers
 
 ORDER = 10
-_TITLE, _CITE = "NPSH available with its margin", Cite("hi961", "ratio or difference, the greater")
+_TITLE, _CITE = "NPSH available with its margin", PRACTICE
 NPSH_MARGIN = Rule("npsh_margin", _TITLE, "NPSHA >= N_L", _CITE)
 #: The same where the margin must be exceeded.
 NPSH_ABOVE = Rule("npsh_margin", _TITLE, "NPSHA > N_L", _CITE)

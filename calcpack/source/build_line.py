@@ -35,6 +35,7 @@ def _section(at: Branch) -> Section:
         condition=at.text("condition"),
         roughness=at.given("roughness"),
         coefficient_C=at.given("hazen_williams_C"),
+        axis_length=at.given("axis_length"),
         pumps=at.number("pumps", 1),
         elements=tuple(map(_element, at.each("elements"))),
         **at.origin,

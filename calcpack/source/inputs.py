@@ -164,7 +164,7 @@ class Section:
     """A stretch of line of one bore.
 
     ``roughness`` goes before ``material`` with its ``condition`` (``new``, ``aged`` or empty); ``coefficient_C`` is that of
-    Hazen and Williams; ``pumps`` how many pumps it serves, of which those running send their flow through it.
+    Hazen and Williams; ``axis_length`` counts fittings and valves in; ``pumps`` how many pumps it serves, of which those running send their flow through it.
     """
 
     id: str
@@ -174,6 +174,7 @@ class Section:
     condition: str
     roughness: Given | None
     coefficient_C: Given | None
+    axis_length: Given | None
     pumps: int
     elements: tuple[Element, ...]
     provenance: Provenance
@@ -280,7 +281,7 @@ class Intake:
     """The mouth of the suction line in the free surface; ``elevation`` is that of ``reference``."""
 
     inlet_diameter: Given
-    reference: Literal["bell_lip", "inlet_centreline"]
+    reference: Literal["bell_lip", "inlet_centreline", "inlet_mouth"]
     elevation: Given
 
 

@@ -16,6 +16,11 @@ def at_flow(at: Passing, loss: Given, element: Element, words: str) -> Value:
     """A loss known at one flow, scaled by the square of the flow."""
     assert element.at_flow is not None, "source asks for the flow beside the loss"
     head = _head(at, loss, words, "its reference flow", "h_0")
+    at.entry.assume(
+        f"viscosity {element.id}",
+        f"The loss of {words} is turbulent and goes by the square of the flow, whatever the liquid's viscosity",
+        "a liquid thicker than the one the loss was stated for loses more: ask the maker, above all for the coldest case",
+    )
     reference = at.entry.value(element.at_flow, "Q_0", f"Reference flow of the loss, {element.name or element.kind}")
     return at.entry.ledger.apply("loss_at_flow", {"h_0": head, "Q": at.flow.flow, "Q_0": reference}, words)
 

@@ -64,7 +64,8 @@ def _roughness(entry: Entry, section: Section) -> Value:
         entry.assume(
             f"aged {material}",
             f"The pipe wall of {material} has aged to {entry.ledger.shown(value)}: {found.words}",
-            "walls age by the water as much as by the years; a roughness measured, or agreed with the owner, replaces it",
+            "walls age by the water as much as by the years; a roughness measured, or agreed with the owner, replaces it. The "
+            "coefficients of fittings rest on clean walls all the same",
         )
     else:
         entry.assume(

@@ -20,9 +20,14 @@ class Submergence:
     velocity: Value
 
 
+_REFERENCES = {
+    "bell_lip": "bell lip", "inlet_centreline": "centreline of the inlet", "inlet_mouth": "mouth of the inlet",
+}  # fmt: skip
+
+
 def reference(intake: Intake) -> str:
     """The line submergence counts from, in words."""
-    return "bell lip" if intake.reference == "bell_lip" else "centreline of the inlet"
+    return _REFERENCES[intake.reference]
 
 
 def inlet_velocity(entry: Entry, flow: Value) -> Value:

@@ -79,7 +79,10 @@ def origin(entry: Entry, state: State) -> Origin:
     ledger.group("Static head")
     if supply.kind in POINTS:
         assert supply.elevation is not None, "source asks for the elevation of the point"
-        elevation, place = entry.value(supply.elevation, "z_k", "Elevation of the point where pressure is known"), supply.elevation
+        elevation, place = (
+            entry.value(supply.elevation, "z_k", "Elevation of the point where pressure is known"),
+            supply.elevation,
+        )
         static = ledger.apply("point_static_head", {"z_k": elevation, "z_d": datum(entry)})
     else:
         assert state.level is not None, "a surface needs a level"
@@ -106,8 +109,8 @@ def design(entry: Entry, state: State, about: str) -> Run:
         entry.assume(
             "wet pit",
             "No loss lies between the surface and the inlet of the pump",
-            "NPSH required of a pump that hangs in its sump counts from its bell, whose loss is the pump's own; a screen or a "
-            "channel before it lowers the level itself",
+            "the loss from the bell to the first stage is the pump's own, part of NPSH required; a screen or a channel before the "
+            "pump lowers the level itself",
         )
         npsh = ledger.apply("npsh_wet_pit", heads, key_result=True)
     else:
@@ -136,7 +139,10 @@ def quoted(entry: Entry, run: Run) -> Available:
         found = less_acceleration(entry, found, run.passage)
     level, intake = run.state.level, c.intake
     if intake is not None and level is not None and intake.elevation.quantity.si() >= level.quantity.si():
-        found = replace(found, doubt=f"the inlet, at {intake.elevation.text}, is not below the level, {level.text}: the pump draws gas")
+        found = replace(
+            found,
+            doubt=f"the inlet, at {intake.elevation.text}, is not below the level, {level.text}: the pump draws gas",
+        )
     return at_required_datum(entry, found)
 
 

@@ -43,8 +43,9 @@ def _pump(entry: Entry) -> None:
     npsh = c.pump.npsh_required
     if npsh.basis != "NPSH3":
         entry.find(
-            "NPSH required is not stated as NPSH3, by a fall of head of 3 %",
-            "the margins in print are counted over NPSH3: ask the maker on which basis the figure stands",
+            "NPSH required is not stated as NPSH3",
+            "the margins in print are counted over NPSH3, a fall of head of 3 % of a rotodynamic pump; a positive displacement "
+            "pump's figure rests on a loss of capacity: ask the maker on which basis it stands, and for the margin over it",
         )
     for low, high in pairwise(npsh.points):
         if high.npsh.quantity.si() < low.npsh.quantity.si():

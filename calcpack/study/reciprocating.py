@@ -6,7 +6,7 @@ from collections.abc import Mapping
 
 from ..quantity import parse
 from ..references import Cite
-from ..source.inputs import Given
+from ..source.inputs import Given, Section
 from ..value import Value
 from . import curve, straight
 from .entry import Entry
@@ -19,14 +19,16 @@ PUMPS: Mapping[str, str] = {
 }  # fmt: skip
 LIQUIDS: Mapping[str, str] = {"deaerated water": "1.4", "water": "1.5", "hydrocarbon": "2.0", "hot oil": "2.5"}
 _CITE = Cite("hi61")
-#: Length of straight pipe, m, up to which the form holds: about 50 ft.
+#: Length of line, m, up to which the form holds: about 50 ft.
 LONGEST = 15
 #: Why no reading settles a reciprocating pump.
 UNSEEN = "the mean of a gauge reading does not show the acceleration head that the pump takes in each stroke"
 
 
 def acceleration(entry: Entry, passage: Passage) -> tuple[Value | None, str]:
-    """The acceleration head of the straight pipes of the line, and why the result cannot be judged, where it cannot.
+    """The acceleration head of the line, and why the result cannot be judged, where it cannot.
+
+    Each section counts with its length along the axis, or, where the file gives none, with its straight pipe: a finding.
 
     Source: ANSI/HI 6.1-6.5 and GPSA, recalled.
     """
@@ -52,25 +54,39 @@ def acceleration(entry: Entry, passage: Passage) -> tuple[Value | None, str]:
         "k": _coefficient(entry, "k", "Coefficient of the liquid", its.k, its.liquid, LIQUIDS),
         "g": ledger.constant("g"),
     }
-    heads, pipes = [], []
+    heads, lengths = [], []
     for flow in passage.flows:
-        own = [element for element in flow.section.elements if element.kind == "pipe"]
-        if own:
+        length = _length(entry, flow.section)
+        if length is not None:
             about = flow.section.name or flow.section.id
-            length = straight.length(entry, own, about)
             heads.append(ledger.apply("acceleration_head", operands | {"L": length, "V": flow.velocity}, about))
-            pipes += own
+            lengths.append(length)
     if not heads:
         return None, ""
     taken = heads[0] if len(heads) == 1 else ledger.apply("acceleration_heads", {"h_as": heads})
-    together = straight.length(entry, pipes, "whole line")
+    together = lengths[0] if len(lengths) == 1 else ledger.apply("straight_pipe", {"L": lengths}, "whole line")
     doubt = ""
     if together.shadow > LONGEST:
         doubt = (
             f"the acceleration head is known for a short, rigid line of {LONGEST} m (50 ft) at most; "
-            f"this one has {ledger.shown(together)} of straight pipe (line {together.address})"
+            f"this one has {ledger.shown(together)} (line {together.address})"
         )
     return taken, doubt
+
+
+def _length(entry: Entry, section: Section) -> Value | None:
+    """The length of liquid a section accelerates."""
+    about = section.name or section.id
+    if section.axis_length is not None:
+        return entry.value(section.axis_length, "L", f"Length along the axis, fittings included, {about}")
+    pipes = [element for element in section.elements if element.kind == "pipe"]
+    others = len(pipes) < len(section.elements)
+    if others:
+        entry.find(
+            f"The acceleration head of {about} counts its straight pipe only",
+            "the liquid in fittings and valves is accelerated too: state axis_length, measured along the axis with them",
+        )
+    return straight.length(entry, pipes, about) if pipes else None
 
 
 def _coefficient(

@@ -40,7 +40,8 @@ def warmest(calculation: Calculation) -> tuple[str, Given]:
 def worst_case(calculation: Calculation) -> State:
     """All unfavourable extremes together: lowest level and pressure, highest temperature and flow, fouled strainers."""
     name, temperature = warmest(calculation)
-    return _unfavourable(calculation, "worst case", f"{name} temperature", temperature)
+    colder = calculation.liquid.temperature.lowest not in (None, temperature)
+    return _unfavourable(calculation, "warmest case" if colder else "worst case", f"{name} temperature", temperature)
 
 
 def design_states(calculation: Calculation) -> list[State]:
