@@ -165,14 +165,15 @@ def liquid(of: str, name: str, kelvin: float, fraction: float = 0.0) -> float:
 
     lowest = source.lowest
     if source.mixture:
-        if fraction > source.most:
+        if fraction > source.most * (1 + 1e-12):  # the limit itself, typed, is a fraction and not quite this float
             raise OutOfRange(f"{of} is looked up to {100 * source.most:g} % dissolved")
+        fraction = min(fraction, source.most)
         dissolved = f"INCOMP::{source.fluid}[{fraction!r}]"
         if source.freezes:
             lowest = PropsSI("T_freeze", "T", source.highest, "P", MIXTURE_PRESSURE, dissolved)
     if not lowest <= kelvin <= source.highest:
         begins = f"its freezing point, {_both(lowest)}," if source.freezes else _both(lowest)
-        raise OutOfRange(f"{of} is looked up between {begins} and {_both(source.highest)}")
+        raise OutOfRange(f"a temperature at which {of} is looked up, between {begins} and {_both(source.highest)}")
     output = PROPERTIES[name].output
     if source.mixture:
         return float(PropsSI(output, "T", kelvin, "P", MIXTURE_PRESSURE, dissolved))

@@ -34,6 +34,13 @@ _GROUPED = re.compile(r"[+\-\u2212]?[0-9]{1,3}(?:[ '’][0-9]{3})+(?:\.[0-9]+)?(
 _COMMA = re.compile(r"([+\-\u2212]?[0-9]+),([0-9]+)(?![0-9.,])")
 
 
+#: Why a Reid vapour pressure cannot stand for the true one.
+REID = (
+    "a Reid vapour pressure is measured at 37.8 °C with four volumes of vapour to one of liquid and air: it is not the "
+    "true vapour pressure, and lies below it for volatile mixtures"
+)
+
+
 class QuantityFault(ValueError):
     """A text that is not the quantity wanted; says what was wanted, what was found and what to write."""
 

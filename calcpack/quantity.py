@@ -13,7 +13,7 @@ from functools import cache
 
 from .faults import listed, shown
 from .kinds import BARE, KINDS, Kind, Reference
-from .misread import MOST_DIGITS, QuantityFault, too_long, unknown_unit, unreadable, with_units
+from .misread import MOST_DIGITS, REID, QuantityFault, too_long, unknown_unit, unreadable, with_units
 from .units import CARRIED, COHERENT, PLANT, SPELLINGS, Unit, conversion, unit
 
 __all__ = ["COHERENT", "KINDS", "PLANT", "Quantity", "QuantityFault", "Unit", "conversion", "parse", "unit"]
@@ -76,6 +76,8 @@ def parse(text: str, kind: str) -> Quantity:
     """
     asked = KINDS[kind]
     wanted = f"{asked.words}, such as {listed(asked.examples)}"
+    if kind == "vapour_pressure" and re.search("rvp|reid", text, re.IGNORECASE):
+        raise QuantityFault("reid", wanted, f"{shown(text)}: {REID}")
     text = text.strip(" \t\r\n")
     match = _NUMBER.match(text)
     if match is None:

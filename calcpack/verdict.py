@@ -115,7 +115,9 @@ def compare(
         if not right.record or not rule.decides or NOMENCLATURE[b].kind == "temperature"
         else evaluate(_PERCENT, {"M": margin, "N_L": abs(right.record)}, InDecimal())
     )
-    drifted = reported_decimals(left) is None or reported_decimals(right) is None
+    drifted = any(reported_decimals(v) is None for v in (left, right)) and abs(margin) <= _CLEAR * (
+        drift(left) + drift(right)
+    )
     verdict: Verdict = "met" if record else "not met"
     reason = met if record else not_met
     if record != shadow:
@@ -131,6 +133,8 @@ def compare(
     return Check(rule, about, verdict, reason, criterion, source, left, right, margin, percent)
 
 
+#: Times the drift of both sides beyond which a margin stands whatever rounding did.
+_CLEAR = 100
 _PERCENT = formula.parse("100 * M / N_L")
 
 

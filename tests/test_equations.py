@@ -311,7 +311,8 @@ SI = {
 USUAL = {
     "length": 3.2, "bore": 0.25, "area": 0.03, "velocity": 1.7, "acceleration": 9.80665, "flow": 0.05, "pressure": 1.0e5,
     "pressure_difference": 2.0e3, "density": 998.2, "dynamic_viscosity": 1.0e-3, "kinematic_viscosity": 1.0e-6, "specific_weight": 9789.0,
-    "temperature": 293.0, "absolute_temperature": 293.0, "temperature_difference": 5.0, "lapse_rate": 0.0065, "ratio": 1.3, "speed": 24.0, "specific_speed": 145.0,
+    "temperature": 293.0, "absolute_temperature": 293.0, "temperature_difference": 5.0, "lapse_rate": 0.0065, "ratio": 1.3,
+    "speed": 24.0, "specific_speed": 145.0,
 }  # fmt: skip
 OWN = {"Re": 3.0e5, "r": 2.0e-4, "f": 0.016, "f_T": 0.014, "eps": 4.6e-5, "eps_c": 4.6e-5, "r_0": 6.356766e6, "Z": 900.0, "H": 900.0,
        "n_a": 5.2559, "K_h": 0.034163195, "n": 3.0, "Fr": 0.6, "c": 0.1, "Q_A": 0.03, "Q_B": 0.08,

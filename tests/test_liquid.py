@@ -120,7 +120,7 @@ def test_a_mixture_is_looked_up_from_freezing_to_the_end_of_its_range(name: str)
             assert 900 < liquid(name, "density", kelvin, fraction) < 1500
             assert liquid(name, "viscosity", kelvin, fraction) > 1e-4
         for kelvin in (lowest - 0.01, source.highest + 0.01):
-            with pytest.raises(OutOfRange, match=f"{name} is looked up between"):
+            with pytest.raises(OutOfRange, match=f"{name} is looked up, between"):
                 liquid(name, "density", kelvin, fraction)
     with pytest.raises(OutOfRange, match="dissolved"):
         liquid(name, "density", 300.0, source.most + 0.001)

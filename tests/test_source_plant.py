@@ -116,7 +116,7 @@ def test_the_pump_and_its_criteria_arrive() -> None:
     c = read(
         POINTS
         | {
-            "pump.running": 3,
+            "pump.running": 1,
             "pump.eyes": 2,
             "pump.speed": "1450 r/min",
             "pump.npsh_required.interpolation": "smooth",
@@ -131,7 +131,7 @@ def test_the_pump_and_its_criteria_arrive() -> None:
         }
     )
     pump, required, criteria = c.pump, c.pump.npsh_required, c.criteria
-    assert (pump.running, pump.eyes, required.interpolation, required.value) == (3, 2, "smooth", None)
+    assert (pump.running, pump.eyes, required.interpolation, required.value) == (1, 2, "smooth", None)
     assert [point.npsh.key for point in required.points] == [f"pump.npsh_required.points[{n}].npsh" for n in (1, 2)]
     assert pump.reciprocating is not None and pump.reciprocating.k is not None and pump.reciprocating.C is None
     assert criteria.service is not None and criteria.service.name == "boiler feed"
@@ -212,7 +212,7 @@ def test_accepted(changes: dict[str, Any]) -> None:
             HAZEN_WILLIAMS | fourth("elbow", L_over_D=30),
             [("line.sections[L1]", "roughness")],
         ),
-        ({f"{SECTION}.pumps": 2}, [("line.sections[L1].pumps", "pumps")]),
+        ({f"{SECTION}.pumps": 2, "pump.running": 2}, [("line.sections[L1].pumps", "pumps")]),
         ({f"{SECTION}.pumps": "9" * 5000}, [("line.sections[L1].pumps", "number")]),
         (TEE | fourth("entrance", shape="bell"), [("line.sections[L1].elements[4]", "entrance")]),
         (fourth("elbow", radius="long", set="darby_3k"), [("line.sections[L1].elements[4].set", "fitting")]),
@@ -283,3 +283,30 @@ def test_a_damaged_line_raises_nothing_but_a_fault(path: Path) -> None:
 @pytest.mark.parametrize("path", PATHS, ids=lambda path: path.stem)
 def test_every_damaged_line_raises_nothing_but_a_fault(path: Path) -> None:
     damaged(path, 1)
+
+
+HEADER = {f"{SECTION}.pumps": 3}
+
+
+@pytest.mark.parametrize(
+    ("changes", "key"),
+    [
+        ({"pump.running": 3}, "pump.running"),
+        (LOOP | {"supply.high_point": "0.2 m", f"{SECTION}.elements.3.elevation": "1 m"}, "supply.high_point"),
+        (
+            {"criteria.suction_specific_speed": {"highest": 11000, "in": "metric"}},
+            "criteria.suction_specific_speed.highest",
+        ),
+        (
+            {"criteria.suction_specific_speed": {"highest": 213, "in": "US"}},
+            "criteria.suction_specific_speed.highest",
+        ),
+        ({"liquid.vapour_pressure": "9 psi RVP"}, "liquid.vapour_pressure"),
+    ],
+)
+def test_what_looks_right_and_is_not_is_refused(changes: dict[str, Any], key: str) -> None:
+    assert [found for found, _ in refused(changes)] == [key]
+
+
+def test_a_header_says_how_many_pumps_run() -> None:
+    assert "pump.running" in [found for found, _ in refused(HEADER)]

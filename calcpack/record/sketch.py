@@ -61,7 +61,7 @@ def sketch(study: Study) -> Json:
 
 def _governing(study: Study) -> Judged:
     """The result that decides: by its verdict, then by its margin."""
-    checks = [check for check in study.checks if check.rule is NPSH_MARGIN]
+    checks = [check for check in study.checks if check.rule.name == NPSH_MARGIN.name]
     return min(zip(checks, study.judged, strict=True), key=lambda pair: weight(pair[0].verdict, pair[0].percent))[1]
 
 

@@ -164,7 +164,8 @@ class Section:
     """A stretch of line of one bore.
 
     ``roughness`` goes before ``material`` with its ``condition`` (``new``, ``aged`` or empty); ``coefficient_C`` is that of
-    Hazen and Williams; ``axis_length`` counts fittings and valves in; ``pumps`` how many pumps it serves, of which those running send their flow through it.
+    Hazen and Williams; ``axis_length`` counts fittings and valves in; ``pumps`` how many pumps it serves, of which
+    those running send their flow through it.
     """
 
     id: str

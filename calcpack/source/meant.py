@@ -5,6 +5,7 @@ from __future__ import annotations
 from collections.abc import Iterable, Mapping
 
 from ..faults import did_you_mean, listed
+from ..misread import REID
 
 _WORDS = {
     "SI": "metric|si units|mks",
@@ -51,7 +52,7 @@ _WORDS = {
     "calcium chloride brine": "brine|calcium chloride|cacl2",
     "sodium chloride brine": "brine|sodium chloride|nacl",
     "ammonia": "nh3|r717|r-717",
-    "propane": "lpg|r290|r-290|c3h8",
+    "propane": "r290|r-290|c3h8",
     "n-butane": "butane|r600",
     "isobutane": "i-butane|r600a",
     "methanol": "methyl alcohol",
@@ -63,11 +64,7 @@ for _choice, _others in _WORDS.items():
         _MEANT.setdefault(_word, []).append(_choice)
 
 #: Words for something else that resembles what is wanted -> why it cannot stand for it.
-_REID = (
-    "a Reid vapour pressure is measured at 37.8 °C with four volumes of vapour to one of liquid and air: it is not the "
-    "true vapour pressure, and lies below it for volatile mixtures"
-)
-NOT_THAT: Mapping[str, str] = dict.fromkeys(("reid", "rvp", "reid_vapour_pressure", "reid_vapor_pressure"), _REID)
+NOT_THAT: Mapping[str, str] = dict.fromkeys(("reid", "rvp", "reid_vapour_pressure", "reid_vapor_pressure"), REID)
 
 
 def likely(word: str, choices: Iterable[str]) -> str:

@@ -65,6 +65,8 @@ def losses(entry: Entry, state: State, flow: Value, liquid: Liquid) -> Passage:
         )
     for (before, *_), (element, *_) in pairwise(rows):
         reducer.lie(entry, before, element)
+    for up, down in pairwise(flows):
+        reducer.join(entry, up, down)
     entry.ledger.group("Losses from the supply to the suction nozzle")
     title = f"Losses, supply to suction nozzle: {_sets(entry, line)} coefficients; {state.scope}"
     labelled = [(label(line, flow.section, element), words, content) for element, flow, words, content in rows]

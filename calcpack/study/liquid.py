@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 from dataclasses import dataclass
+from fractions import Fraction
 
 from ..lookup import LIQUIDS
 from ..quantity import parse
@@ -131,7 +132,7 @@ def _share(entry: Entry) -> Given:
     source = LIQUIDS[liquid.name]
     given = liquid.salinity if source.mixture == "salinity" else liquid.mass_fraction
     assert given is not None, "source asks for what is dissolved"
-    if given.quantity.si() > source.most:
+    if given.quantity.si() > Fraction(str(source.most)):  # the limit as printed, not its nearest float
         entry.refuse(
             given,
             f"at most {100 * source.most:g} %",

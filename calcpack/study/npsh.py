@@ -137,11 +137,15 @@ def quoted(entry: Entry, run: Run) -> Available:
         found = replace(found, npsh=less)
     if run.passage is not None:
         found = less_acceleration(entry, found, run.passage)
-    level, intake = run.state.level, c.intake
-    if intake is not None and level is not None and intake.elevation.quantity.si() >= level.quantity.si():
+    surface, intake = run.origin.elevation, c.intake
+    if c.supply.kind not in POINTS and intake is not None and float(intake.elevation.quantity.si()) >= surface.shadow:
+        level = f"{ledger.shown(surface)} (line {surface.address})"
+        doubt = f"the inlet, at {intake.elevation.text}, is not below the surface, {level}: the pump draws gas"
+        found = replace(found, doubt=doubt)
+    elif c.pump.arrangement == "wet_pit" and run.origin.static_head.record < 0:
+        where = f"line {run.origin.static_head.address}"
         found = replace(
-            found,
-            doubt=f"the inlet, at {intake.elevation.text}, is not below the level, {level.text}: the pump draws gas",
+            found, doubt=f"the pump's datum lies above the surface ({where}): a pump in its sump does not lift"
         )
     return at_required_datum(entry, found)
 

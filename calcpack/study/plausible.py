@@ -30,6 +30,7 @@ def check(entry: Entry) -> None:
             _like_look_up(entry, name, given, temperature)
     _table_runs_on(entry)
     _pump(entry)
+    _elevations(entry)
     if c.liquid.vapour_pressure_kind == "effective":
         entry.find(
             "The vapour pressure is an effective one: it counts gas dissolved in the liquid",
@@ -58,6 +59,36 @@ def _pump(entry: Entry) -> None:
             f"The margin of the service “{c.criteria.service.name}” is published for rotodynamic pumps",
             "a reciprocating pump needs the margin that its maker or the project states",
         )
+
+
+#: Height, m, by which the ends of a line may lie off the inlet and the pump before it is asked about.
+OFF = 2
+
+
+def _elevations(entry: Entry) -> None:
+    """Find pipes that fall more than their length, and lines that begin or end far from inlet and pump."""
+    c = entry.calculation
+    elements = [e for s in c.line.sections for e in s.elements] if c.line else []
+    for before, element in pairwise(elements):
+        if element.kind == "pipe" and element.length and element.elevation and before.elevation:
+            apart = abs(element.elevation.quantity.si() - before.elevation.quantity.si())
+            if apart > element.length.quantity.si():
+                entry.find(
+                    f"Element {element.id}, {element.length.text} of pipe, leads from {before.elevation.text} to "
+                    f"{element.elevation.text}",
+                    "a pipe cannot rise or fall by more than its length: an elevation or the length is in doubt",
+                )
+    if not elements:
+        return
+    ends = [(elements[-1].elevation, c.pump.datum_elevation, "The line ends", "the pump's datum")]
+    if c.intake is not None and elements[0].kind == "entrance":
+        ends.append((elements[0].elevation, c.intake.elevation, "The entrance lies", "the inlet of `intake`"))
+    for here, there, words, what in ends:
+        if here is not None and abs(here.quantity.si() - there.quantity.si()) > OFF:
+            entry.find(
+                f"{words} at {here.text}, {what} at {there.text}",
+                "both describe one place: an elevation, or its datum, is in doubt",
+            )
 
 
 def _beyond(entry: Entry, name: str, what: str, read: Given | None, extreme: Given | None, *, lower: bool) -> None:

@@ -62,7 +62,7 @@ def acceleration(entry: Entry, passage: Passage) -> tuple[Value | None, str]:
             heads.append(ledger.apply("acceleration_head", operands | {"L": length, "V": flow.velocity}, about))
             lengths.append(length)
     if not heads:
-        return None, ""
+        return None, "the line has no length, so its acceleration head is not known"
     taken = heads[0] if len(heads) == 1 else ledger.apply("acceleration_heads", {"h_as": heads})
     together = lengths[0] if len(lengths) == 1 else ledger.apply("straight_pipe", {"L": lengths}, "whole line")
     doubt = ""

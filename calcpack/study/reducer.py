@@ -92,3 +92,35 @@ def lie(entry: Entry, before: Element, element: Element) -> None:
 
 def _called(element: Element) -> str:
     return f"reducer {element.name}, element {element.id}".replace(" ,", ",")
+
+
+#: Part of a bore by which two ends may differ and still be one: tables round bores, and flanges join odd ones.
+SAME_BORE = 0.02
+#: Elements at the joint of two sections that change the bore themselves, or may: their stated loss is of the change too.
+_CHANGING = ("tee", "fitting", "equipment")
+
+
+def join(entry: Entry, up: Flow, down: Flow) -> None:
+    """Refuse a reducer that leads to another bore than the next section's; find a change of bore without one."""
+    last, first = up.section.elements[-1], down.section.elements[0]
+    for element, own, named_bore in ((last, up.bore, down.bore), (first, down.bore, up.bore)):
+        if element.kind == "reducer" and (element.to is not None) == (element is last):
+            other = other_end(entry, element)
+            if _apart(other, named_bore):
+                entry.refuse(
+                    element,
+                    f"the bore of the section next to it, {entry.ledger.shown(named_bore)}",
+                    f"a reducer between {entry.ledger.shown(own)} and {entry.ledger.shown(other)}",
+                    "give both the same size",
+                )
+            return
+    if _apart(up.bore, down.bore) and last.kind not in _CHANGING and first.kind not in _CHANGING:
+        entry.find(
+            f"The bore changes from {entry.ledger.shown(up.bore)} to {entry.ledger.shown(down.bore)} between sections "
+            f"{up.section.id} and {down.section.id} without a reducer",
+            "the loss of the change is left out: add the reducer",
+        )
+
+
+def _apart(a: Value, b: Value) -> bool:
+    return abs(a.shadow - b.shadow) > SAME_BORE * max(a.shadow, b.shadow)

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 
 from ..source.inputs import Calculation
 from ..value import Value
@@ -12,6 +12,9 @@ from .npsh import Available, Run
 from .pump import Needed
 from .state import State, as_found, design_states, worst_case
 from .supply import flow_of
+
+#: Why no reading is carried to a state with several pumps running.
+NOT_OF_SEVERAL = "a reading on one pump does not show what a shared line or sump loses with several pumps running"
 
 
 @dataclass(frozen=True)
@@ -96,6 +99,8 @@ def compute(entry: Entry) -> Results:
         origins = npsh.origin(entry, state), npsh.origin(entry, worst)
         carried = npsh.carried(entry, found, *origins, f"{reading.name}, carried to the worst case")
         carried = npsh.less_acceleration(entry, carried, runs[0].passage if runs else None)
+        if calculation.pump.running > 1:
+            carried = replace(carried, doubt=NOT_OF_SEVERAL)
         available.append(npsh.at_required_datum(entry, carried))
     plausible.check(entry)
     ledger.part("What the pump needs", worst.scope)

@@ -105,6 +105,16 @@ def _pumps(view: View) -> Iterator[Fault]:
         if after > before:
             wanted = f"a number not above that of the section before it, {before}: toward the pump a line only branches"
             yield view.fault(node, key, wanted, f"{after}", "list the sections from the supply to the pump", "pumps")
+    most, running = max((number for *_, number in served), default=1), view.at("pump", "running")
+    count = view.text("pump", "running")
+    pump = view.at("pump")
+    if most > 1 and not running and isinstance(pump, Mapping):
+        wanted = f"`running` beside a section that serves {most} pumps: how many of them run at most"
+        yield view.fault(pump, "pump.running", wanted, "none", f"add `running: {most}`", "pumps")
+    elif running and count.isdecimal() and int(count) > most and served:
+        wanted = f"at most {most}, the pumps that the line serves"
+        hint = "give the shared sections `pumps`, or leave `running` out where every pump has a line of its own"
+        yield view.fault(running, "pump.running", wanted, count, hint, "pumps")
     if served and served[-1][2] != 1:
         key, node, last = served[-1]
         wanted = "1 for the last section, which leads to one pump"

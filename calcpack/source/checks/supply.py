@@ -16,10 +16,23 @@ _START = ("pressure", "elevation", "velocity_head")
 def check(view: View) -> Iterator[Fault]:
     yield from _routes(view)
     yield from _main(view)
+    yield from _high_point(view)
     intake, kind = view.at("intake"), view.text("supply", "kind")
     if intake and not has_surface(view):
         wanted = f"no `intake` for kind {kind}: it has no free surface, so nothing can be submerged"
         yield view.fault(intake, "intake", wanted, "one", "leave it out", "intake")
+
+
+def _high_point(view: View) -> Iterator[Fault]:
+    """No element of the suction line lies above the high point of the loop."""
+    node, highest = view.at("supply", "high_point"), view.quantity("supply", "high_point")
+    for address, element in view.elements():
+        elevation = view.quantity("elevation", node=element)
+        if node and highest and elevation and elevation.si() > highest.si():
+            wanted = "the highest point of the loop, not below any element of the line"
+            found = f"{highest.text} {highest.unit.name}, below {address} ({elevation.text} {elevation.unit.name})"
+            yield view.fault(node, "supply.high_point", wanted, found, "", "order")
+            return
 
 
 def has_surface(view: View) -> bool:
