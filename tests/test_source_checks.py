@@ -71,7 +71,6 @@ def test_a_whole_number_as_a_revision_is_a_text() -> None:
         ("kind: open", "kind: closed tank", "`gas_blanketed`"),
         ("material: commercial steel", "material: HDPE pipe", "`plastic`"),
         ("name: water", "name: river water", "`water`"),
-        ("name: water", "name: LPG", "`propane`"),
         ("type: gate", "type: sluice", "state its K"),
         ("count: 2", 'count: "2"', "quotation marks"),
         ("size: DN 150\n", "size: 150\n", ""),

@@ -286,6 +286,6 @@ def _datum(d: Drawing, scale: Scale, sketch: Sketch) -> None:
     d.label(LEFT, scale.bottom + 4.0, f"datum 0: {sketch['datum']}", colour=SECOND)
     d.label(LEFT, scale.bottom + 7.6, f"vertical scale 1:{scale.ratio}, horizontal not to scale", colour=SECOND)
     if sketch["required_datum"]:
-        y = scale.y(ends_at(sketch))
+        y, below = scale.y(ends_at(sketch)), ends_at(sketch) < 0
         d.between(PUMP + 6, y, WIDTH, y, 0.18, SECOND, "2 1")
-        d.label(PUMP + 5, y + 0.9, label(sketch["required_datum"], signed=True), "end", colour=SECOND)
+        d.label(PUMP + 6, y + (2.9 if below else -0.8), label(sketch["required_datum"], signed=True), colour=SECOND)

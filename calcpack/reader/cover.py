@@ -22,8 +22,8 @@ _RULE = re.compile(r"9\.[1-9]\d*")
 NUMBER, COLUMNS = (6.0, 15.0), ((89.0, 113.0), (113.0, 136.0), (136.0, 156.0))
 
 
-def check_cover(sheet: Sheet, judged: Mapping[str, Judged], book: Book) -> None:
-    """Compare the cover with the rules ``judged``, by address."""
+def check_cover(sheet: Sheet, after: Sheet | None, judged: Mapping[str, Judged], book: Book) -> None:
+    """Compare the cover with the rules ``judged``, by address; a long table of rules runs on to the sheet ``after`` it."""
     verdicts = [each.verdict for each in judged.values()]
     printed = words(g for g in sheet.glyphs if g.serif and g.bold and abs(g.size - _VERDICT) < 0.1).lower()
     worst = next((word for word in ("not met", "not assessed") if word in verdicts), "met")
@@ -32,12 +32,16 @@ def check_cover(sheet: Sheet, judged: Mapping[str, Judged], book: Book) -> None:
     shown = [tally for row in rows(sheet.glyphs) if (tally := {w: int(n) for n, w in _COUNT.findall(str(row))})]
     if Counter(verdicts) not in shown:
         book.note(sheet.number, "", "the cover's tally is not that of the rules", shown, dict(Counter(verdicts)))
-    _table(sheet, judged, book)
+    found = _table(sheet, judged, book)
+    if after is not None and judged.keys() - found:
+        found |= _table(after, judged, book)
+    if missing := judged.keys() - found:
+        book.note(sheet.number, "", "the cover leaves rules out", "", ", ".join(sorted(missing)))
 
 
-def _table(sheet: Sheet, judged: Mapping[str, Judged], book: Book) -> None:
-    """Every rule once, with the figures of section 9 on the row of its address."""
-    edge, found = paper_edge(sheet), set()
+def _table(sheet: Sheet, judged: Mapping[str, Judged], book: Book) -> set[str]:
+    """The rules found on a sheet, each once with the figures of section 9 on the row of its address."""
+    edge, found = paper_edge(sheet), set[str]()
     for row in rows(g for g in _between(sheet, edge, NUMBER) if g.colour == ACCENT):
         address = str(row)
         if address in found or not _RULE.fullmatch(address):
@@ -55,8 +59,7 @@ def _table(sheet: Sheet, judged: Mapping[str, Judged], book: Book) -> None:
         if shown != judged[address].shown:
             told = " · ".join(map(str, judged[address].shown))
             book.note(sheet.number, address, "the cover gives other figures", " · ".join(map(str, shown)), told)
-    if missing := judged.keys() - found:
-        book.note(sheet.number, "", "the cover leaves rules out", "", ", ".join(sorted(missing)))
+    return found
 
 
 def _between(sheet: Sheet, edge: float, column: tuple[float, float]) -> list[Glyph]:

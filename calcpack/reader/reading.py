@@ -108,7 +108,7 @@ class Reading:
         book.findings += [finding for _, finding in book.aside.values()]
         self._addresses()
         check_symbols(self.known, book)
-        check_cover(found[0], self.rules, book)
+        check_cover(found[0], found[1] if len(found) > 1 else None, self.rules, book)
         for sheet in found:
             check_visible(sheet, book)
             check_strip(sheet, len(found), book)

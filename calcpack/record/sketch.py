@@ -3,8 +3,10 @@
 from __future__ import annotations
 
 from collections.abc import Iterator
+from decimal import Decimal
 
 from ..assessment import Study
+from ..formula import Bin, Name, Node
 from ..ledger import Ledger
 from ..number import decimal, rounded, typeset_minus
 from ..quantity import Unit
@@ -17,14 +19,13 @@ from ..value import Line, Value
 from .cover import weight
 from .lines import Json, number
 
-#: The terms of a result as the build-up names them; those in ``_TAKEN`` are subtracted.
+#: The terms of a result as the build-up names them.
 _HEADS = {
     "H_s": "surface pressure", "z": "static head", "H_v": "vapour pressure", "h_L": "losses", "H_b": "barometer",
     "H_g": "gauge reading", "z_g": "gauge height", "h_V": "velocity head", "NPSHA_m": "NPSH by the reading",
     "dH_s": "surface pressure, change", "dz": "level, change", "dH_v": "vapour pressure, change", "dh_h": "losses, change",
     "h_w": "head withheld", "h_a": "acceleration head",
 }  # fmt: skip
-_TAKEN = frozenset({"H_v", "h_L", "dH_v", "dh_h", "h_w", "h_a"})
 
 
 def sketch(study: Study) -> Json:
@@ -51,8 +52,7 @@ def sketch(study: Study) -> Json:
         "nodes": _nodes(study, each),
         "gauge": gauge,
         "heads": [
-            {"name": _name(study, s), "symbol": s, "value": number(-v.record if s in _TAKEN else v.record)}
-            for s, v in _terms(ledger, result)
+            {"name": _name(study, symbol), "symbol": symbol, "value": number(head)} for symbol, head in _terms(ledger, result)
         ],
         "available": number(result.value.record),
         "limit": None if each.needed.limit is None else number(each.needed.limit.record),
@@ -65,16 +65,28 @@ def _governing(study: Study) -> Judged:
     return min(zip(checks, study.judged, strict=True), key=lambda pair: weight(pair[0].verdict, pair[0].percent))[1]
 
 
-def _terms(ledger: Ledger, result: Line) -> Iterator[tuple[str, Value]]:
-    """The heads a result is made of, the first a pressure; what was taken off it at the end comes last.
+def _terms(ledger: Ledger, result: Line) -> Iterator[tuple[str, Decimal]]:
+    """The heads a result is made of, the first a pressure, those subtracted with a minus; what was taken off last comes last.
 
     A shift to another datum moves where the result is counted from, not the liquid: it is no head.
     """
-    for symbol, v in result.operands:
+    operands = dict(result.operands)
+    assert result.tree is not None, "a result is computed"
+    for symbol, sign in _signed(result.tree):
         if symbol == "NPSHA":
-            yield from _terms(ledger, ledger.line_of(v))
+            yield from _terms(ledger, ledger.line_of(operands[symbol]))
         elif symbol not in ("z_d", "z_R"):
-            yield symbol, v
+            yield symbol, sign * operands[symbol].record
+
+
+def _signed(tree: Node, sign: int = 1) -> Iterator[tuple[str, int]]:
+    """The names of a sum with their signs."""
+    match tree:
+        case Bin("+" | "-" as op, a, b):
+            yield from _signed(a, sign)
+            yield from _signed(b, sign if op == "+" else -sign)
+        case Name(name):
+            yield name, sign
 
 
 def _name(study: Study, symbol: str) -> str:
