@@ -20,7 +20,7 @@ from calcpack.arithmetic import InFloat, OnArrays, evaluate
 from calcpack.assessment import Study, run
 from calcpack.catalog import EQUATIONS
 from calcpack.equations import Equation
-from calcpack.formula import Call, Cmp, walk
+from calcpack.formula import Call, Cmp, Name, walk
 from calcpack.source import load
 
 ROOT = Path(__file__).resolve().parent.parent
@@ -98,10 +98,10 @@ IN_NUMPY = {
 
 
 def plain() -> list[Equation]:
-    """Every equation that is an expression of single values: no root, no sum of a list."""
+    """Every equation that computes with single values: no root, no sum of a list, no value handed on."""
     return [
         e for e in EQUATIONS
-        if not isinstance(e.tree, Cmp) and not any(isinstance(n, Call) and n.fn == "sum" for n in walk(e.tree))
+        if not isinstance(e.tree, Cmp | Name) and not any(isinstance(n, Call) and n.fn == "sum" for n in walk(e.tree))
     ]  # fmt: skip
 
 
