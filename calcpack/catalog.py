@@ -15,6 +15,7 @@ from .equations import (
     profile,
     pump,
     reducer,
+    stake,
     straight,
 )
 
@@ -31,5 +32,6 @@ EQUATIONS: tuple[Equation, ...] = (
     *pump.EQUATIONS,
     *intake.EQUATIONS,
     *pressure.EQUATIONS,
+    *stake.EQUATIONS,
 )
 EQUATION: dict[str, Equation] = {e.name: e for e in EQUATIONS}

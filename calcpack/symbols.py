@@ -75,6 +75,7 @@ dH_c    ΔH       T      length               head that a warmer liquid would co
 dh_h    Δh       L      length               change of the losses with flow
 dH_s    ΔH       s      length               change of the surface head
 dH_v    ΔH       v      length               change of the vapour-pressure head
+dH_x    ΔH       x      length               head that a finding puts at stake
 dN      ΔN       .      length               rise of the NPSH curve over the interval that is read
 dN_A    ΔN       A      length               rise over the interval at the slope of the point below
 dN_B    ΔN       B      length               rise over the interval at the slope of the point above
@@ -95,6 +96,7 @@ e_n     e        n      ratio                exponent of the speed ratio
 eps     ε        .      bore                 roughness of the pipe wall
 eps_c   ε        c      bore                 roughness of clean commercial steel, as the fitting set takes it
 f       f        .      ratio                Darcy friction factor
+f_x     f        x      ratio                Darcy friction factor with the wall as aged
 f_T     f        T      ratio                Darcy friction factor of fully rough flow in clean commercial steel
 Fr      F        D      ratio                Froude number of the inlet
 g       g        .      acceleration         standard acceleration of gravity
@@ -224,6 +226,7 @@ Re      Re       .      ratio                Reynolds number
 rho     ρ        .      density              density of the liquid
 rho_1   ρ        1      density              density in the row of the table below the temperature
 rho_2   ρ        2      density              density in the row of the table above the temperature
+rho_x   ρ        x      density              density of the liquid as looked up, beside the one cited
 rho_w   ρ        w      density              density of the water to which Cv and Kv refer
 s       s        .      ratio                sine of half the angle of a taper
 S       S        .      length               available submergence over the reference line

@@ -32,7 +32,7 @@ def table(record: Json) -> str:
             if x["key_result"]:
                 rows.append(f"  {x['address']:6} {quantity(x['headline']):>14}  {x['title']} ({part['title']})")
     if record["findings"]:
-        rows += ["", "Findings", *(f"  {f['text']}: {f['reason']}." for f in record["findings"])]
+        rows += ["", "Findings", *map(_finding, record["findings"])]
     if cover["unverified"]:
         rows += [
             "",
@@ -41,6 +41,11 @@ def table(record: Json) -> str:
         ]
     rows += ["", "Cautions", *(f"  {text}" for text in record["cautions"])]
     return "\n".join(rows)
+
+
+def _finding(f: Json) -> str:
+    cost = f"Head at stake: {f['cost']}" if f["cost"] else ""
+    return "  " + " ".join(f"{part}." for part in (f"{f['text']}: {f['reason']}", cost, f["intended"]) if part)
 
 
 def _sides(r: Json) -> str:

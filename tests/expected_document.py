@@ -8,6 +8,7 @@ NOWHERE = ""
 
 DOCUMENT: dict[str, Faults] = {
     "unknown_key": [("flwo:", "pump.flwo", "`flow`", "`flow`")],
+    "intended_near_miss": [("gauge_hight:", "intended.gauge_hight", "`gauge_height`", "`gauge_height`")],
     "missing_key": [("name: P-3 A/B", "pump.datum_elevation", "`datum_elevation`", "datum_elevation: ")],
     "bare_number": [("length: 9.5}", "line.sections[P1].elements[2].length", "a value needs its unit", "`9.5 m`")],
     "wrong_dimension": [("temperature: 21 m", "readings[1].temperature", "m³/h measures a flow", "")],

@@ -229,7 +229,7 @@ def test_the_exceptions_of_the_interface_are_at_hand_and_cost_no_import() -> Non
 def test_findings_stand_below_the_verdict_in_a_terminal(capsys: pytest.CaptureFixture[str]) -> None:
     assert cli.run(["assess", str(SAMPLES / "c_transfer_pump_both_routes.yaml")]) == 0
     told = capsys.readouterr().out
-    assert "Open findings, below: 2." in told and "section" not in told
+    assert "Open findings, below: 3." in told and "section" not in told
     assert told.index("Open findings") < told.index("\nFindings\n")
 
 

@@ -48,7 +48,7 @@ OUTSIDE = (
 def test_hazen_and_williams_outside_their_usual_range_are_found(changes: Document, told: str) -> None:
     assert "outside its usual range" not in findings(line(PIPE, **HW))
     study = studied(line(PIPE, **{**HW, **changes}))
-    (reason,) = [reason for text, reason in study.findings.items() if "outside its usual range in L1" in text]
+    (reason,) = [found.reason for text, found in study.findings.items() if "outside its usual range in L1" in text]
     assert told in reason
 
 

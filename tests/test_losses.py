@@ -140,8 +140,8 @@ UNDERSTATED = (
 @pytest.mark.parametrize(("fitting", "set_name", "told"), UNDERSTATED)
 def test_coefficients_of_turbulent_flow_are_found_in_viscous_flow(fitting: Document, set_name: str, told: bool) -> None:
     viscous = oil(400, fitting, PIPE, **{"line.fitting_set": set_name})
-    assert ("understate the losses in L1" in findings(viscous)) is told
-    assert "understate" not in findings(oil(2, fitting, PIPE, **{"line.fitting_set": set_name}))
+    assert ("of L1, is that of turbulent flow" in findings(viscous)) is told
+    assert "turbulent flow" not in findings(oil(2, fitting, PIPE, **{"line.fitting_set": set_name}))
 
 
 def test_an_equivalent_length_carries_the_friction_factor_of_its_section() -> None:

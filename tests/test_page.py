@@ -77,7 +77,13 @@ def other() -> Record:
     }
     made["cover"] |= {"verdict": "not assessed", "statement": "A long statement of the result. " * 20}
     made["findings"] = [
-        {"text": "The loss between surface and tap is larger than expected", "reason": "it may be a closed valve"}
+        {
+            "name": "",
+            "text": "The loss between surface and tap is larger than expected",
+            "reason": "it may be a closed valve",
+            "cost": "1.2 m (line 8.3)",
+            "intended": "",
+        }  # fmt: skip
     ]
     return made
 

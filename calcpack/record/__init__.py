@@ -12,6 +12,7 @@ from .. import __version__, formula
 from ..assessment import Study
 from ..lookup import library
 from ..source.inputs import Given
+from ..study.finding import Finding
 from ..symbols import NOMENCLATURE
 from . import words
 from .checks import checks, reported
@@ -56,7 +57,7 @@ def assemble(study: Study) -> Json:
         "computation": computation,
         "checks": judged,
         "unapplied": [{"title": u.title, "missing": u.missing} for u in study.unapplied],
-        "findings": [{"text": text[0].upper() + text[1:], "reason": reason} for text, reason in study.findings.items()],
+        "findings": [_finding(study, each) for each in study.findings.values()],
         "limits": limits(study),
         "limits_note": words.limits_note(judged),
         "cautions": words.cautions(c),
@@ -128,9 +129,30 @@ def _assumptions(study: Study, inputs: list[Json]) -> list[Json]:
             )
     for text, consequence in study.assumptions.values():
         add(text, words.SILENT, consequence, "")
+    for each, reason in study.intended:
+        at_stake = _at_stake(study, each)
+        add(_capital(each.text), f"{words.INTENDED}: {reason}", f"{at_stake} at stake" if at_stake else each.reason, "")
     for text, consequence in words.standing(study):
         add(text, words.INHERENT, consequence, "")
     return found
+
+
+def _finding(study: Study, found: Finding) -> Json:
+    """A finding in words, with the head at stake and its line where it is computed."""
+    return {
+        "name": found.name, "text": _capital(found.text), "reason": found.reason, "cost": _at_stake(study, found),
+        "intended": found.intended,
+    }  # fmt: skip
+
+
+def _at_stake(study: Study, found: Finding) -> str:
+    if found.cost is None:
+        return ""
+    return f"{study.ledger.shown(found.cost).lstrip('-')} (line {found.cost.address})"
+
+
+def _capital(text: str) -> str:
+    return text[:1].upper() + text[1:]
 
 
 _LIBRARIES = {

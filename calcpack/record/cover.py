@@ -6,7 +6,7 @@ from collections import Counter
 from decimal import Decimal
 
 from ..assessment import Study
-from ..number import MINUS
+from ..number import MINUS, typeset_minus
 from ..rules.margin import NPSH_MARGIN
 from ..verdict import PASSING
 from .lines import Json, quantity
@@ -98,7 +98,7 @@ def _statement(study: Study, judged: list[Json]) -> str:
                 f"By the same rule {more} more {'results are' if more > 1 else 'result is'} {first['verdict']}."
             )
     if study.differences:
-        apart = ", ".join(f"{study.ledger.shown(d.value)} ({d.name})" for d in study.differences)
+        apart = ", ".join(f"{typeset_minus(study.ledger.shown(d.value))} ({d.name})" for d in study.differences)
         words.append(f"Model less reading, at the state of the reading: {apart}.")
     if study.calculation.supply.kind == "saturated":
         words.append("Steady state only: a fall of the vessel's pressure is not analysed.")

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 from ..assessment import Study
 from ..source.inputs import Calculation
+from ..study import mistakes
 from ..study.supply import POINTS
 from ..verdict import PASSING
 from .lines import Json
@@ -64,7 +65,7 @@ def purpose(c: Calculation) -> list[str]:
 
 
 #: Parts of the computation that are no state of their own.
-_BESIDE = ("What the pump needs", "What the rules compare")
+_BESIDE = ("What the pump needs", "What the rules compare", mistakes.PART)
 
 
 def scope(study: Study) -> list[str]:
@@ -83,7 +84,7 @@ def scope(study: Study) -> list[str]:
 
 
 #: Bases of the assumptions that the tool makes itself.
-SILENT, INHERENT = "the file states no other value", "inherent in the method"
+SILENT, INHERENT, INTENDED = "the file states no other value", "inherent in the method", "intended, as the file states"
 
 
 def standing(study: Study) -> list[tuple[str, str]]:

@@ -42,16 +42,9 @@ def judge(results: Results) -> Iterator[Check]:
 
 
 def _blanketed(results: Results, p_s: Value, liquid: Liquid) -> Check:
-    entry, worst, name = results.entry, results.worst, results.calculation.supply.name
-    warmer = vapour_pressure_beside(entry, worst, "dT_s")
-    if warmer is not None and liquid.vapour_pressure.record <= p_s.record < warmer.record:
-        entry.find(
-            f"{name} stands within {NEAR} of saturation (lines {p_s.address} and {warmer.address})",
-            "if it is vapour that stands over the liquid, state `kind: saturated`: the two pressures then cancel",
-        )
     return compare(
         CLOSED_VESSEL, p_s, liquid.vapour_pressure, criterion="The gas keeps the liquid above its vapour pressure",
-        source=cited(worst.pressure), met="the liquid does not boil at its surface",
+        source=cited(results.worst.pressure), met="the liquid does not boil at its surface",
         not_met=f"the liquid boils at its surface, within {NEAR}: state `kind: saturated` if it is vapour that stands over it, "
         "or check whether the pressure is gauge or absolute",
     )  # fmt: skip

@@ -16,6 +16,7 @@ from .inputs import (
     CurvePoint,
     Gauge,
     Intake,
+    Intended,
     Level,
     Liquid,
     NpshRequired,
@@ -61,6 +62,7 @@ def build(root: Mapping, read: dict[Mark, Quantity], raw: bytes, name: str) -> C
         intake=top.maybe("intake", _intake),
         criteria=_criteria(top.branch("criteria")),
         readings=tuple(map(_reading, top.each("readings"))),
+        intended=top.maybe("intended", _intended) or (),
         path=PurePath(name).name,
         named=name,
         raw=raw,
@@ -205,6 +207,10 @@ def _criteria(at: Branch) -> Criteria:
 def _choice(at: Branch, name: str) -> Choice | None:
     chosen = at.text(name)
     return Choice(name=chosen, provenance=at.provenance) if chosen else None
+
+
+def _intended(at: Branch) -> tuple[Intended, ...]:
+    return tuple(Intended(name=name.text, reason=at.text(name.text)) for name, _ in at.node.entries)
 
 
 def _reading(at: Branch) -> Reading:

@@ -352,6 +352,14 @@ class Reading:
 
 
 @dataclass(frozen=True, kw_only=True)
+class Intended:
+    """A finding, by its name, that the file states as intended, and why it is."""
+
+    name: str
+    reason: str
+
+
+@dataclass(frozen=True, kw_only=True)
 class Calculation:
     """A whole input file.
 
@@ -381,6 +389,7 @@ class Calculation:
     intake: Intake | None
     criteria: Criteria
     readings: tuple[Reading, ...]
+    intended: tuple[Intended, ...]
     path: str
     named: str
     raw: bytes

@@ -122,6 +122,11 @@ def _between(entry: Entry, flow: Value) -> Value:
     operands = {"Q": flow, **_neighbours(entry, above - 1)}
     if npsh.interpolation != "smooth" or len(flows) == 2:
         return entry.ledger.apply("npsh_between_points", operands)
+    entry.assume(
+        "smooth curve",
+        "NPSH required follows a smooth curve through the maker's points",
+        "where the curve bends upwards it lies below the straight line between two points, which is the safe side",
+    )
     slopes = {"dN_A": _slope(entry, above - 1, -1), "dN_B": _slope(entry, above - 1, +1)}
     part = entry.ledger.apply("curve_place", operands)
     return entry.ledger.apply("npsh_on_smooth_curve", operands | slopes | {"t": part})

@@ -16,6 +16,7 @@ def at_flow(at: Passing, loss: Given, element: Element, words: str) -> Value:
     """A loss known at one flow, scaled by the square of the flow."""
     assert element.at_flow is not None, "source asks for the flow beside the loss"
     head = _head(at, loss, words, "its reference flow", "h_0")
+    at.turbulent(element)
     at.entry.assume(
         f"viscosity {element.id}",
         f"The loss of {words} is turbulent and goes by the square of the flow, whatever the liquid's viscosity",
@@ -31,11 +32,6 @@ def strainer(at: Passing, element: Element) -> tuple[str, Value]:
     fouled = at.state.strainers == "fouled" and element.fouled is not None
     drop = element.fouled if fouled else element.clean
     assert drop is not None, "source asks for the clean drop"
-    if at.state.strainers == "fouled" and not fouled:
-        at.entry.find(
-            f"The file gives no fouled drop of {name}, element {element.id}: its clean drop is taken",
-            "a screen fouls before it is cleaned, and until then lowers NPSH available further",
-        )
     words = f"{name}, {'fouled' if fouled else 'clean'}"
     return words, at_flow(at, drop, element, words)
 

@@ -58,16 +58,16 @@ def loss(at: Passing, element: Element) -> tuple[str, Content]:
     if element.curve:
         return words, drop.on_curve(at, element, words)
     if element.Cv is not None or element.Kv is not None:
-        at.turbulent()
+        at.turbulent(element)
         return words, drop.equal(entry, element, drop.flow_coefficient(at, element, words))
     if element.K is not None:
-        at.turbulent()
+        at.turbulent(element)
         k = entry.value(element.K, "K", f"Loss coefficient, {words}, element {element.id}")
     elif element.L_over_D is not None:
         ratio = entry.value(element.L_over_D, "q", f"Equivalent length over bore, {words}, element {element.id}")
         k = entry.ledger.apply("equivalent_length", {"f": friction_factor(entry, at.flow), "q": ratio}, words)
     elif element.kind == "reducer":
-        at.turbulent()
+        at.turbulent(element)
         _lent(entry, element)
         words, k = element.name or f"Reducer, {element.type}", reducer.coefficient(entry, at.flow, element)
     else:
@@ -121,7 +121,7 @@ def _tabulated(at: Passing, element: Element) -> tuple[str, Value]:
     }
     words = element.name or found.title
     if "K_1" not in constants:
-        at.turbulent()
+        at.turbulent(element)
     if not found.equation:
         return words, constants["K"]
     return words, ledger.apply(found.equation, constants | _conditions(at, found), found.title)

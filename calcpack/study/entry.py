@@ -11,6 +11,7 @@ from ..lookup import OutOfRange
 from ..quantity import parse
 from ..source.inputs import Calculation, Element, Given, Provenance
 from ..value import Value
+from .finding import Finding, finding
 
 
 class Place(Protocol):
@@ -34,7 +35,7 @@ class Entry:
     def __init__(self, calculation: Calculation, ledger: Ledger) -> None:
         self.calculation = calculation
         self.ledger = ledger
-        self.findings: dict[str, str] = {}
+        self.findings: dict[str, Finding] = {}
         self.assumptions: dict[str, tuple[str, str]] = {}
 
     def value(self, given: Given, symbol: str, title: str, note: str = "") -> Value:
@@ -86,9 +87,13 @@ class Entry:
         """Record an assumption the tool makes, once."""
         self.assumptions.setdefault(key, (text, consequence))
 
-    def find(self, text: str, reason: str) -> None:
+    def find(self, text: str, reason: str, name: str = "", *, cost: Value | None = None, unless: str = "") -> None:
+        """Record a finding, once; :func:`~calcpack.study.finding.finding` says what its parts are."""
+        self.record(finding(name, text, reason, cost, unless))
+
+    def record(self, found: Finding) -> None:
         """Record a finding, once."""
-        self.findings.setdefault(text, reason)
+        self.findings.setdefault(found.text, found)
 
 
 def cited(of: Provenance | None) -> str:

@@ -15,7 +15,6 @@ from .flow import Flow, bore_of, flow_in, flow_through, named
 from .liquid import Liquid
 from .passing import Passing
 from .state import State
-from .supply import POINTS
 
 __all__ = ["Flow", "Passage", "Passed", "bore_of", "flow_in", "label", "losses"]
 
@@ -59,10 +58,6 @@ def losses(entry: Entry, state: State, flow: Value, liquid: Liquid) -> Passage:
         entry.ledger.group(f"Velocity, {named(section)}")
         flows.append(flow_through(entry, state, flow, liquid, section))
         rows += _section(Passing(entry, state, liquid, flows[-1]))
-    if entry.calculation.supply.kind not in POINTS and not any(element.kind == "entrance" for element, *_ in rows):
-        entry.find(
-            "The line has no entrance: its loss is left out", "a line from a tank or basin begins with an entrance loss"
-        )
     for (before, *_), (element, *_) in pairwise(rows):
         reducer.lie(entry, before, element)
     for up, down in pairwise(flows):
@@ -115,6 +110,8 @@ def _sets(entry: Entry, line: Line) -> str:
     if len(names) > 1:
         entry.find(
             f"Loss coefficients of several sets are mixed in the line: {', '.join(names)}",
-            "the file says that this is intended; sets differ by tens of per cent for one fitting, and each is consistent in itself",
+            "sets differ by tens of per cent for one fitting, and each is consistent in itself",
+            "mixed_sets",
+            unless="each is the better one for its fitting",
         )
     return " and ".join(names)

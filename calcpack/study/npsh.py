@@ -226,26 +226,26 @@ def measured(entry: Entry, reading: Reading, about: str) -> Available:
     return Available(about, npsh, flow, liquid.temperature)
 
 
+def inferred(entry: Entry, found: Available, reading: Origin) -> Value:
+    """The losses from the surface to the tap, as a reading shows them: every error of level and gauge is in them."""
+    return entry.ledger.apply("inferred_loss", {
+        "H_sm": reading.pressure_head, "z_m": reading.static_head, "H_vm": reading.vapour_head, "NPSHA_m": found.npsh,
+    })  # fmt: skip
+
+
 def carried(entry: Entry, found: Available, reading: Origin, worst: Origin, about: str) -> Available:
     """A reading carried to the worst case: surface pressure, level, vapour pressure, and its own losses by flow squared."""
     ledger = entry.ledger
     ledger.group("From the reading to the worst case")
-    inferred = ledger.apply("inferred_loss", {
-        "H_sm": reading.pressure_head, "z_m": reading.static_head, "H_vm": reading.vapour_head, "NPSHA_m": found.npsh,
-    })  # fmt: skip
+    lost = inferred(entry, found, reading)
     changes = {
         "dH_s": ledger.apply("surface_head_change", {"H_s": worst.pressure_head, "H_sm": reading.pressure_head}),
         "dz": ledger.apply("level_change", {"z": worst.static_head, "z_m": reading.static_head}),
         "dH_v": ledger.apply("vapour_head_change", {"H_v": worst.vapour_head, "H_vm": reading.vapour_head}),
-        "dh_h": ledger.apply("loss_change", {"h_u": inferred, "Q": worst.flow, "Q_m": reading.flow}),
+        "dh_h": ledger.apply("loss_change", {"h_u": lost, "Q": worst.flow, "Q_m": reading.flow}),
     }
     npsh = ledger.apply("npsh_carried", {"NPSHA_m": found.npsh, **changes}, key_result=True)
-    if inferred.record < 0:
-        entry.find(
-            f"The reading {found.about} shows more head than the surface offers (line {inferred.address})",
-            "losses cannot be negative: level, gauge, its elevation, barometer or datum is in doubt",
-        )
     doubt = ""
-    if inferred.shadow < -CREDIBLE:
-        doubt = f"the reading shows {ledger.shown(inferred).lstrip('-')} more head than the surface offers (line {inferred.address})"
+    if lost.shadow < -CREDIBLE:
+        doubt = f"the reading shows {ledger.shown(lost).lstrip('-')} more head than the surface offers (line {lost.address})"
     return Available(about, npsh, worst.flow, worst.liquid.temperature, doubt=doubt)

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 from dataclasses import dataclass
 
+from ..source.inputs import Element
 from .entry import Entry
 from .flow import Flow, named
 from .friction import TURBULENT_ABOVE
@@ -20,12 +21,14 @@ class Passing:
     liquid: Liquid
     flow: Flow
 
-    def turbulent(self) -> None:
-        """Find that a coefficient or a square law is used where the flow is not turbulent."""
+    def turbulent(self, element: Element) -> None:
+        """Find that an element's coefficient or square law is used where the flow is not turbulent."""
         reynolds = self.flow.reynolds
         if reynolds.record < TURBULENT_ABOVE:
             self.entry.find(
-                f"Coefficients of turbulent flow understate the losses in {named(self.flow.section)} (line {reynolds.address})",
-                f"its Reynolds number is below {TURBULENT_ABOVE}, where a fitting loses more than its K of turbulent flow; "
-                "the sets of Hooper and of Darby correct for the Reynolds number",
+                f"The loss of {element.name or element.kind}, element {element.id} of {named(self.flow.section)}, is that of "
+                f"turbulent flow, {self.state.name}",
+                f"the Reynolds number there is {self.entry.ledger.shown(reynolds).removesuffix(' 1')} (line {reynolds.address}); below "
+                f"{TURBULENT_ABOVE} an element loses more than its coefficient, or the square of the flow, says: ask the maker; for "
+                "fittings the sets of Hooper and of Darby correct for it",
             )

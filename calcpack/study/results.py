@@ -6,7 +6,7 @@ from dataclasses import dataclass, replace
 
 from ..source.inputs import Calculation
 from ..value import Value
-from . import npsh, plausible, pump
+from . import npsh, pump
 from .entry import Entry
 from .npsh import Available, Run
 from .pump import Needed
@@ -102,7 +102,6 @@ def compute(entry: Entry) -> Results:
         if calculation.pump.running > 1:
             carried = replace(carried, doubt=NOT_OF_SEVERAL)
         available.append(npsh.at_required_datum(entry, carried))
-    plausible.check(entry)
     ledger.part("What the pump needs", worst.scope)
     judged = [Judged(each, pump.needed(entry, each.flow)) for each in available]
     for each in judged:

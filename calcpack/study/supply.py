@@ -24,6 +24,9 @@ def near(entry: Entry, distance: Value, at: Given, what: str) -> None:
         entry.find(
             f"{entry.ledger.shown(distance).lstrip('-')} lie between {at.key} and {what} (line {distance.address})",
             "suction sides are rarely that tall: two datums, or two units, may have been mixed up",
+            "far_apart",
+            cost=distance,
+            unless="the suction side is that tall",
         )
 
 
