@@ -84,8 +84,8 @@ def parse(text: str) -> Node:
         raise FormulaError(f"{text[:40]!r} is not a formula: at most {LONGEST} plain characters, without comments")
     try:
         body = ast.parse(text, mode="eval").body
-    except SyntaxError as error:
-        raise FormulaError(f"{text!r} is not a formula: {error.msg}") from None
+    except (SyntaxError, ValueError) as error:  # a null byte is the one or the other, by version of Python
+        raise FormulaError(f"{text!r} is not a formula: {error}") from None
     return _convert(body, text, top=True)
 
 

@@ -5,6 +5,18 @@ from __future__ import annotations
 from expected_document import Faults
 
 PUMP: dict[str, Faults] = {
+    "cases_of_nothing": [
+        ("name: as ever", "cases[1]", "something that differs from the most", "leave the case out"),
+        ("running: 2", "cases[2].running", "at most 1, the pumps", ""),
+        ("temperature: lowest", "cases[3].temperature", "(normal or highest)", "`lowest`"),
+        ("pressure: 20", "cases[3].pressure", "not in the file", "leave it out"),
+        ("flow: 90", "cases[4].flow", "a flow", "`90 m³/h`"),
+        ("level: 1 kPa", "cases[4].level", "an elevation", ""),
+        ("dirty", "cases[4].strainers", "clean or fouled", ""),
+        ("name: Odd", "cases[5].name", "each name once", ""),
+        ("20 mm", "cases[5].temperature", "a temperature", ""),
+        ("running: 0", "cases[5].running", "a whole number from 1 to 20", ""),
+    ],
     "dry_leg": [("leg: dry", "readings[1].gauge.tap_elevation", "`tap_elevation`", "`tap_elevation`")],
     "strainer_state": [("- name: commissioning", "readings[1].strainers", "STR-3", "")],
     "margin_missing": [("npsh_margin:", "criteria.npsh_margin", "`ratio`, `difference`", "ratio: ")],

@@ -41,7 +41,7 @@ A, B, C, D = (
     "d_blanketed_hot_water_vessel",
 )
 E, F, G, H = "e_deaerator_feed", "f_propane_sphere", "g_glycol_loop", "h_wet_pit"
-I, I2, J, K = "i_three_pumps_one_header", "i2_one_pump_alone", "j_viscous_oil", "k_triplex_plunger"  # noqa: E741
+I, I2, J, K = "right_three_pumps", "right_one_pump_alone", "j_viscous_oil", "k_triplex_plunger"  # noqa: E741
 ROWS = (
     Row("gauge_as_absolute", "gauge_as_absolute", "right_cold_blanket", 1.01),
     Row("gauge_as_absolute_hot", "value", D, by="fault"),

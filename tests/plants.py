@@ -119,7 +119,7 @@ def changed(document: Document, changes: Mapping[str, Any]) -> Document:
         if value is None:
             at.pop(last, None)
         elif isinstance(at, list):
-            at[int(last)] = value
+            at[int(last)] = copy.deepcopy(value)
         else:
             at[last] = copy.deepcopy(value)
     return made

@@ -299,7 +299,7 @@ def restated(of: Any) -> Any:
 def as_typed(path: Path) -> Document:
     """The file with every value as text, save the keys that hold whole numbers."""
     loaded: Document = yaml.load(path.read_text("utf-8"), yaml.BaseLoader)
-    for part in (loaded["pump"], *loaded.get("line", {}).get("sections", ())):
+    for part in (loaded["pump"], *loaded.get("line", {}).get("sections", ()), *loaded.get("cases", ())):
         part.update({key: int(part[key]) for key in ("running", "eyes", "pumps") if key in part})
     for element in (e for s in loaded.get("line", {}).get("sections", ()) for e in s["elements"]):
         element.update({key: int(element[key]) for key in ("count", "angle") if key in element})

@@ -102,7 +102,8 @@ def _statement(study: Study, judged: list[Json]) -> str:
         words.append(f"Model less reading, at the state of the reading: {apart}.")
     if study.calculation.supply.kind == "saturated":
         words.append("Steady state only: a fall of the vessel's pressure is not analysed.")
-    if study.calculation.pump.running > 1:
+    pump = study.calculation.pump
+    if pump.running > 1 and not any((case.running or pump.running) < pump.running for case in study.calculation.cases):
         words.append(
             f"Computed with {study.calculation.pump.running} pumps running; with fewer, each runs out on its curve."
         )

@@ -5,7 +5,7 @@ from __future__ import annotations
 from ..assessment import Study
 from ..number import typeset_minus
 from ..source.inputs import Calculation, Given
-from ..study.state import design_states
+from ..study.state import coldest
 from ..study.supply import POINTS
 from ..verdict import PASSING
 from .lines import Json
@@ -44,15 +44,14 @@ def _breathes(c: Calculation) -> bool:
 
 def _stated(c: Calculation) -> list[tuple[str, str, Given | None]]:
     """What is limited, the word for it while the verdict holds, and the value; ``None`` where the file has none."""
-    level, pressure, states = c.supply.level, c.supply.pressure, design_states(c)
+    level, pressure = c.supply.level, c.supply.pressure
     place = f"at {c.supply.point or c.supply.name}" if c.supply.kind in POINTS else "on the surface"
-    coldest = c.liquid.temperature.lowest if len(states) > 1 else None
     rows = [
         ("flow of one pump", "not above", c.pump.flow.highest),
         ("level of the surface", "not below", level.lowest if level else None),
         ("drawdown of the surface", "not above", level.drawdown if level else None),
         ("temperature of the liquid", "not above", c.liquid.temperature.highest),
-        ("lowest temperature of the liquid", "not below", coldest),
+        ("lowest temperature of the liquid", "not below", coldest(c)),
         (f"pressure {place}", "not below", pressure.lowest if pressure else None),
         ("barometer at the site", "not below", c.site.barometer.lowest if c.site.barometer and _breathes(c) else None),
     ]
@@ -63,6 +62,7 @@ def _stated(c: Calculation) -> list[tuple[str, str, Given | None]]:
             elif e.loss is not None:
                 rows.append((f"loss of {e.name or e.kind}", "not above", e.loss))
     npsh = c.pump.npsh_required
+    rows += [(f"flow of one pump, {case.name}", "not above", case.flow) for case in c.cases]
     if npsh.points:
         rows.insert(1, ("flow of one pump, by the curve", "not below", npsh.points[0].flow))
     return [*rows, ("speed of the pump", "as", c.pump.speed or npsh.speed), ("impeller", "as", npsh.impeller)]

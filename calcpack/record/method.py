@@ -10,7 +10,7 @@ from ..lookup import LIQUIDS
 from ..references import Cite
 from ..source.inputs import Calculation, Line
 from ..study.element import from_set
-from ..study.state import design_states
+from ..study.state import coldest
 from ..study.supply import POINTS
 from .lines import References
 from .words import shared
@@ -79,7 +79,7 @@ def _design(c: Calculation) -> Iterator[str]:
         yield (
             "The pump hangs in its sump: the losses from its bell on are its own, part of NPSH required. No line is modelled."
         )
-    if len(design_states(c)) > 1:
+    if coldest(c) is not None:
         yield (
             "The design route is run twice: with the warmest liquid, whose vapour pressure is highest, and with the coldest, which is the most "
             "viscous and loses most in the line. The worse of the two governs."

@@ -29,9 +29,11 @@ def judge(results: Results) -> Iterator[Check | Unapplied]:
         )
         return
     entry.ledger.group("Velocity in the suction line")
-    fastest = max(passage.flows, key=lambda flow: flow.velocity.record)
+    flows = [(flow, run.state) for run in results.runs if run.passage for flow in run.passage.flows]
+    fastest, state = max(flows, key=lambda pair: pair[0].velocity.record)
     limit = entry.value(asked, "V_m", "Velocity in the line, the most")
-    reason = f"highest in {named(fastest.section)} (line {fastest.velocity.address})"
+    governs = f", {state.name}" if results.calculation.cases else ""
+    reason = f"highest in {named(fastest.section)}{governs} (line {fastest.velocity.address})"
     yield compare(
         LINE_VELOCITY, fastest.velocity, limit, criterion=criterion, source=cited(asked), met=reason, not_met=reason
     )

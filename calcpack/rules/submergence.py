@@ -18,7 +18,7 @@ def judge(results: Results) -> Iterator[Check]:
     """Judge submergence over the inlet's reference line; without a free surface the rule does not apply."""
     entry, c = results.entry, results.calculation
     reference = intake.reference(c.intake) if c.intake else "inlet"
-    criterion = f"Submergence at the lowest level, over the {reference}, at least D (1 + 2.3 F)"
+    criterion = f"Submergence over the {reference}, at least D (1 + 2.3 F)"
     source = cited(c.criteria.submergence.provenance) if c.criteria.submergence else ""
     if c.supply.kind in ("loop", "main"):
         reason = f"{c.supply.name} has no free surface, so no vortex can draw gas into the inlet"
@@ -34,8 +34,10 @@ def judge(results: Results) -> Iterator[Check]:
             "The least submergence is that of ANSI/HI 9.8, D (1 + 2.3 F)",
             "the file names no criterion; the project may ask for another",
         )
-    found = intake.submergence(entry, results.worst, results.inlet_flow)
-    counted = f"counted from the {reference}"
+    each = [(state, intake.submergence(entry, state, flow)) for state, flow in results.situations]
+    state, found = min(each, key=lambda pair: pair[1].there_is.record - pair[1].needed.record)
+    governs = f", in the case that governs, {state.name}" if results.calculation.cases else ""
+    counted = f"counted from the {reference}{governs}"
     yield compare(
         SUBMERGENCE, found.there_is, found.needed, criterion=criterion, source=source, met=counted, not_met=counted
     )

@@ -11,10 +11,13 @@ from .branch import Branch
 from .build_line import build_line, build_pipe
 from .inputs import (
     Calculation,
+    Case,
     Choice,
     Criteria,
     CurvePoint,
+    Extremes,
     Gauge,
+    Given,
     Intake,
     Intended,
     Level,
@@ -31,6 +34,7 @@ from .inputs import (
     Supply,
 )
 from .nodes import Mapping, Mark
+from .schema import EXTREMES
 
 
 def build(root: Mapping, read: dict[Mark, Quantity], raw: bytes, name: str) -> Calculation:
@@ -40,6 +44,7 @@ def build(root: Mapping, read: dict[Mark, Quantity], raw: bytes, name: str) -> C
     current = Revision(revision=head.text("revision"), date=head.day("date"), reason=head.text("status", "preliminary"))
     system: Any = head.text("units")
     paper: Any = head.text("paper", "Letter" if system == "US" else "A4")
+    liquid, supply, pump = _liquid(top.branch("liquid")), _supply(top.branch("supply")), _pump(top.branch("pump"))
     return Calculation(
         number=head.text("number"),
         title=head.text("title"),
@@ -55,12 +60,13 @@ def build(root: Mapping, read: dict[Mark, Quantity], raw: bytes, name: str) -> C
         revisions=tuple(map(_revision, top.each("revisions"))) or (current,),
         sources=top.maybe("sources", _sources) or (),
         site=_site(top.branch("site")),
-        liquid=_liquid(top.branch("liquid")),
-        supply=_supply(top.branch("supply")),
+        liquid=liquid,
+        supply=supply,
         line=top.maybe("line", build_line),
-        pump=_pump(top.branch("pump")),
+        pump=pump,
         intake=top.maybe("intake", _intake),
         criteria=_criteria(top.branch("criteria")),
+        cases=tuple(_case(each, liquid, supply, pump) for each in top.each("cases")),
         readings=tuple(map(_reading, top.each("readings"))),
         intended=top.maybe("intended", _intended) or (),
         path=PurePath(name).name,
@@ -146,7 +152,7 @@ def _pump(at: Branch) -> Pump:
         best_efficiency_flow=at.given("best_efficiency_flow"),
         npsh_required=_npsh_required(at.branch("npsh_required")),
         reciprocating=at.maybe("reciprocating", _reciprocating),
-        **at.place,
+        **at.origin,
     )
 
 
@@ -211,6 +217,26 @@ def _choice(at: Branch, name: str) -> Choice | None:
 
 def _intended(at: Branch) -> tuple[Intended, ...]:
     return tuple(Intended(name=name.text, reason=at.text(name.text)) for name, _ in at.node.entries)
+
+
+def _case(at: Branch, liquid: Liquid, supply: Supply, pump: Pump) -> Case:
+    def chosen(name: str, extremes: Extremes | None) -> Given | None:
+        word = at.text(name)
+        if word in EXTREMES:
+            found: Given | None = getattr(extremes, word)
+            return found
+        return at.given(name)
+
+    return Case(
+        name=at.text("name"),
+        flow=chosen("flow", pump.flow),
+        running=at.number("running", 0) or None,
+        level=chosen("level", supply.level),
+        temperature=chosen("temperature", liquid.temperature),
+        pressure=chosen("pressure", supply.pressure),
+        strainers=at.text("strainers"),
+        **at.origin,
+    )
 
 
 def _reading(at: Branch) -> Reading:

@@ -1,8 +1,9 @@
-"""A value as the file gives it, with where it comes from."""
+"""A value as the file gives it, with where it comes from: its origin, the documents, the issues of the file."""
 
 from __future__ import annotations
 
 from dataclasses import dataclass
+from datetime import date
 
 from ..quantity import Quantity
 
@@ -48,3 +49,22 @@ class Level(Extremes):
 
     overflow: Given | None = None
     drawdown: Given | None = None
+
+
+@dataclass(frozen=True, kw_only=True)
+class Source:
+    """A document that values come from."""
+
+    id: str
+    title: str
+    document: str
+    edition: str
+
+
+@dataclass(frozen=True, kw_only=True)
+class Revision:
+    """One issue of the calculation."""
+
+    revision: str
+    date: date
+    reason: str

@@ -10,25 +10,8 @@ from .given import Extremes as Extremes
 from .given import Given as Given
 from .given import Level as Level
 from .given import Provenance as Provenance
-
-
-@dataclass(frozen=True, kw_only=True)
-class Source:
-    """A document that values come from."""
-
-    id: str
-    title: str
-    document: str
-    edition: str
-
-
-@dataclass(frozen=True, kw_only=True)
-class Revision:
-    """One issue of the calculation."""
-
-    revision: str
-    date: date
-    reason: str
+from .given import Revision as Revision
+from .given import Source as Source
 
 
 @dataclass(frozen=True, kw_only=True)
@@ -272,6 +255,7 @@ class Pump:
     best_efficiency_flow: Given | None
     npsh_required: NpshRequired
     reciprocating: Reciprocating | None
+    provenance: Provenance
     key: str
     line: int
     column: int
@@ -352,6 +336,23 @@ class Reading:
 
 
 @dataclass(frozen=True, kw_only=True)
+class Case:
+    """A state by how it differs from the most unfavourable one; what does not differ is ``None``, ``strainers`` empty."""
+
+    name: str
+    flow: Given | None
+    running: int | None
+    level: Given | None
+    temperature: Given | None
+    pressure: Given | None
+    strainers: str
+    provenance: Provenance
+    key: str
+    line: int
+    column: int
+
+
+@dataclass(frozen=True, kw_only=True)
 class Intended:
     """A finding, by its name, that the file states as intended, and why it is."""
 
@@ -388,6 +389,7 @@ class Calculation:
     pump: Pump
     intake: Intake | None
     criteria: Criteria
+    cases: tuple[Case, ...]
     readings: tuple[Reading, ...]
     intended: tuple[Intended, ...]
     path: str

@@ -18,6 +18,8 @@ from .nodes import Mapping, Mark, Node, Scalar, Sequence, below, label
 #: The keys of an origin, which stand in nearly every mapping and are left out where messages list keys.
 PROVENANCE = ("source", "status", "note", "confirm")
 Schema = dict[str, Any]
+#: What a case may say in the place of a value: the extreme it takes.
+EXTREMES = ("lowest", "normal", "highest")
 
 
 @cache
@@ -100,6 +102,8 @@ def quantities(root: Mapping, file: str) -> tuple[dict[Mark, Quantity], list[Fau
     for key, node, _, kind in parts(root):
         text = node.get("value") if isinstance(node, Mapping) else node
         if kind not in KINDS or not isinstance(text, Scalar) or (text.plain and not text.text):
+            continue
+        if key.startswith("cases[") and text.text in EXTREMES:
             continue
         try:
             read[text.mark] = parse(text.text, kind)

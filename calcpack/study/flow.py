@@ -83,7 +83,9 @@ def _pumps(entry: Entry, state: State, section: Section) -> Value | None:
     if number == 1:
         return None
     if state.running < section.pumps:
-        title, key, line, provenance = "Number of pumps running", f"{pump.key}.running", pump.line, None
+        place = next((case for case in entry.calculation.cases if case.name == state.name), pump)
+        title, key, line = f"Number of pumps running, {state.name}", f"{place.key}.running", place.line
+        provenance = place.provenance
     else:
         title, key = f"Number of pumps that draw through {named(section)}", f"{section.key}.pumps"
         line, provenance = section.line, section.provenance

@@ -12,7 +12,7 @@ from .line import Passage, bore_of, flow_in, losses
 from .liquid import Liquid, at
 from .profile import Node, nodes
 from .reciprocating import UNSEEN, acceleration
-from .state import State, as_found
+from .state import State, as_found, warmest
 from .supply import POINTS, flow_of, near, point_pressure, surface_level, surface_pressure
 
 
@@ -36,7 +36,7 @@ class Origin:
 class Available:
     """A result to judge: NPSH available, what it describes, and the flow and temperature it holds at.
 
-    ``doubt`` says why it cannot be judged, where it cannot; ``cold`` marks the case of the coldest liquid.
+    ``doubt`` says why it cannot be judged, where it cannot; ``cold`` marks a case of a liquid colder than the warmest.
     """
 
     about: str
@@ -101,7 +101,7 @@ def design(entry: Entry, state: State, about: str) -> Run:
     ledger, c = entry.ledger, entry.calculation
     start = origin(entry, state)
     heads = {"H_s": start.pressure_head, "z": start.static_head, "H_v": start.vapour_head}
-    cold = state.temperature is c.liquid.temperature.lowest
+    cold = state.temperature is not warmest(c)[1]
     passage: Passage | None = None
     along: tuple[Node, ...] = ()
     ledger.group(GROUP)

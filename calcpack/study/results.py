@@ -54,6 +54,16 @@ class Results:
         return self.runs[0] if self.runs else None
 
     @property
+    def situations(self) -> list[tuple[State, Value]]:
+        """Every state the design route is run at, the worst case alone without one, and the flow through the inlet there."""
+        if not self.runs:
+            return [(self.worst, self.inlet_flow)]
+        return [
+            (run.state, run.passage.flows[0].flow if run.passage else flow_of(self.entry, run.state))
+            for run in self.runs
+        ]
+
+    @property
     def inlet_flow(self) -> Value:
         """The flow through the inlet at the worst case: of every pump that its line serves and that runs."""
         passage = self.line.passage if self.line else None

@@ -5,7 +5,7 @@ from __future__ import annotations
 from dataclasses import dataclass
 
 from ..number import typeset_minus
-from ..source.inputs import Calculation, Given, Reading
+from ..source.inputs import Calculation, Case, Given, Reading
 
 
 @dataclass(frozen=True)
@@ -40,7 +40,7 @@ def warmest(calculation: Calculation) -> tuple[str, Given]:
 def worst_case(calculation: Calculation) -> State:
     """All unfavourable extremes together: lowest level and pressure, highest temperature and flow, fouled strainers."""
     name, temperature = warmest(calculation)
-    colder = calculation.liquid.temperature.lowest not in (None, temperature)
+    colder = coldest(calculation) is not None
     return _unfavourable(calculation, "warmest case" if colder else "worst case", f"{name} temperature", temperature)
 
 
@@ -49,10 +49,38 @@ def design_states(calculation: Calculation) -> list[State]:
     if calculation.line is None and calculation.pump.arrangement != "wet_pit":
         return []
     states = [worst_case(calculation)]
-    coldest = calculation.liquid.temperature.lowest
-    if coldest is not None and coldest is not states[0].temperature:
-        states.append(_unfavourable(calculation, "coldest case", "lowest temperature", coldest))
-    return states
+    if (cold := coldest(calculation)) is not None:
+        states.append(_unfavourable(calculation, "coldest case", "lowest temperature", cold))
+    return states + [_of(calculation, case) for case in calculation.cases]
+
+
+def coldest(calculation: Calculation) -> Given | None:
+    """The lowest temperature, where the file gives it beside a higher one."""
+    lowest = calculation.liquid.temperature.lowest
+    return None if lowest is warmest(calculation)[1] else lowest
+
+
+def _of(c: Calculation, case: Case) -> State:
+    """The state of a case: the most unfavourable one with what differs."""
+    base = worst_case(c)
+    flow, temperature = case.flow or base.flow, case.temperature or base.temperature
+    level, pressure = case.level or base.level, case.pressure or base.pressure
+    running, strainers = case.running or base.running, case.strainers or base.strainers
+    words = [f"flow {typeset_minus(flow.text)}", typeset_minus(temperature.text)]
+    if c.pump.running > 1:
+        words.insert(0, f"{running} {'pump' if running == 1 else 'pumps'} running")
+    if level is not None:
+        words.insert(0, f"level {typeset_minus(level.text)}")
+    if pressure is not None:
+        words.append(f"pressure {typeset_minus(pressure.text)}")
+    if _strained(c):
+        words.append(f"strainer {strainers}")
+    scope = ", ".join(words)
+    return State(case.name, scope, flow, running, temperature, level, base.drawdown, pressure, None, strainers)
+
+
+def _strained(c: Calculation) -> bool:
+    return c.line is not None and any(e.kind == "strainer" for s in c.line.sections for e in s.elements)
 
 
 def _unfavourable(c: Calculation, name: str, extreme: str, temperature: Given) -> State:
@@ -67,7 +95,7 @@ def _unfavourable(c: Calculation, name: str, extreme: str, temperature: Given) -
         words.insert(0, f"lowest level {typeset_minus(level.text)}")
     if pressure is not None:
         words.append(f"lowest pressure {typeset_minus(pressure.text)}")
-    if c.line and any(e.kind == "strainer" for s in c.line.sections for e in s.elements):
+    if _strained(c):
         words.append("strainer fouled")
     scope = ", ".join(words)
     return State(name, scope, highest, c.pump.running, temperature, level, drawdown, pressure, None, "fouled")

@@ -39,7 +39,8 @@ def flow_of(entry: Entry, state: State) -> Value:
 def surface_level(entry: Entry, state: State) -> Value:
     """The elevation of the surface in ``state``, drawn down where the file says by how much."""
     assert state.level is not None, "a surface needs a level"
-    word = "lowest" if state.barometer is None else state.name
+    level = entry.calculation.supply.level
+    word = "lowest" if level is not None and state.level is level.lowest else state.name
     if state.drawdown is None:
         return entry.value(state.level, "z_s", f"Level of the surface, {word}")
     still = entry.value(state.level, "z_l", f"Level of the surface before drawdown, {word}")

@@ -10,9 +10,9 @@ from collections.abc import Iterator
 
 from ...faults import Fault
 from ..view import View
-from . import criteria, document, element, line, liquid, order, pump, reading, site, supply
+from . import cases, criteria, document, element, line, liquid, order, pump, reading, site, supply
 
-TOPICS = (document, order, site, liquid, supply, line, element, pump, criteria, reading)
+TOPICS = (document, order, site, liquid, supply, line, element, pump, criteria, reading, cases)
 
 
 def check(view: View) -> Iterator[Fault]:

@@ -57,6 +57,7 @@ def _unique(view: View) -> Iterator[Fault]:
     ]
     groups += [
         ("name", list(view.readings())),
+        ("name", [(f"cases[{name}]", case) for name, case in view.items("cases")]),
         ("revision", [(f"revisions[{n}]", r) for n, r in view.items("revisions")]),
     ]
     marks = [(name, [(below(address, name), item.get(name)) for address, item in items]) for name, items in groups]
