@@ -11,7 +11,9 @@ from .. import formula
 from ..conversion import conversion_tree, factor_text
 from ..ledger import Ledger
 from ..number import DIGITS, typeset_minus
+from ..quantity import COHERENT, PLANT
 from ..references import REFERENCES, Cite
+from ..symbols import NOMENCLATURE
 from ..value import Line, Losses, Part, Value
 
 Json = dict[str, Any]
@@ -66,11 +68,14 @@ def quantity(headline: Json) -> str:
 
 
 def _shown(ledger: Ledger, of: Line, reported: Reported) -> Json:
-    """The figure shown large: an input and a table's entry as they stand there, a result in plant units.
+    """The figure shown large: an input as it stands, a result in plant units, a table's entry as it stands where its unit is
+    one of the display system.
 
     A value that a rule compares is shown as the rule reports it.
     """
-    if of.kind in ("given", "constant") or (of.kind == "lookup" and not of.operands):
+    kind = NOMENCLATURE[of.value.symbol].kind
+    at_home = of.value.unit.name in (COHERENT[ledger.system][kind].name, PLANT[ledger.system][kind][0].name)
+    if of.kind in ("given", "constant") or (of.kind == "lookup" and not of.operands and at_home):
         return {"text": number(of.value.record), "unit": of.value.unit.name}
     return reported.get(of.value.address) or headline(ledger, of.value)
 
