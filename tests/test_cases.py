@@ -82,3 +82,8 @@ def test_a_header_carries_the_pumps_of_the_case() -> None:
     study = studied(plant(header | {"cases": [{"name": "alone", "running": 1}]}))
     flows = [run.passage.flows[0].flow.shadow for run in study.results.runs if run.passage]
     assert flows[0] == pytest.approx(3 * flows[1])
+
+
+def test_an_extreme_may_have_a_source() -> None:
+    case = {"name": "other", "level": {"value": "normal", "source": "S1"}, "flow": {"value": "normal", "note": "usual"}}
+    assert available(of(case)) == available(of({"name": "other", "level": "normal", "flow": "normal"}))

@@ -179,3 +179,9 @@ def test_lines_of_the_ledger_grow_with_the_elements_and_not_faster() -> None:
     per_element = (written[200] - written[100]) / 100
     assert per_element < 4
     assert written[200] - written[10] <= 1.2 * per_element * 190
+
+
+def test_where_an_element_is_drawn_stands_in_the_table_of_losses() -> None:
+    drawn = plant({"line.sections.0.elements.1.drawing": "D-118 sheet 2"})
+    rows = [b["losses"]["rows"] for part in recorded(drawn)["computation"] for b in part["blocks"] if "losses" in b]
+    assert [row["element"].endswith(", D-118 sheet 2") for row in rows[0]] == [False, True, False, False]

@@ -59,7 +59,7 @@ def test_absent_keys_have_their_defaults() -> None:
     assert c.line is not None and c.line.loss_method == "darcy_weisbach" and c.line.mixed_sets == ""
     section = c.line.sections[0]
     assert (section.pumps, section.condition, section.coefficient_C) == (1, "", None)
-    assert (c.pump.running, c.pump.eyes, c.pump.arrangement) == (1, 1, "")
+    assert (c.pump.running, c.pump.eyes, c.pump.arrangement) == (1, 0, "")
     assert (c.pump.npsh_required.interpolation, c.pump.npsh_required.points) == ("linear", ())
     assert [(e.angle, e.count) for e in section.elements] == [(0, 1), (0, 1), (90, 2), (0, 1)]
     assert (c.liquid.table, c.supply.point, c.criteria.service) == ((), "", None)

@@ -45,6 +45,11 @@ class Branch:
     def text(self, name: str, absent: str = "") -> str:
         return _text(self.node, name) or absent
 
+    def word(self, name: str) -> str:
+        """The text of a value, whether it stands alone or in a mapping with its origin."""
+        node = self.node.get(name)
+        return _text(node, "value") if isinstance(node, Mapping) else self.text(name)
+
     def number(self, name: str, absent: int) -> int:
         return int(self.text(name, str(absent)))
 

@@ -147,7 +147,7 @@ def _pump(at: Branch) -> Pump:
         datum=at.text("datum"),
         arrangement=at.text("arrangement"),
         running=at.number("running", 1),
-        eyes=at.number("eyes", 1),
+        eyes=at.number("eyes", 0),
         speed=at.given("speed"),
         best_efficiency_flow=at.given("best_efficiency_flow"),
         npsh_required=_npsh_required(at.branch("npsh_required")),
@@ -221,7 +221,7 @@ def _intended(at: Branch) -> tuple[Intended, ...]:
 
 def _case(at: Branch, liquid: Liquid, supply: Supply, pump: Pump) -> Case:
     def chosen(name: str, extremes: Extremes | None) -> Given | None:
-        word = at.text(name)
+        word = at.word(name)
         if word in EXTREMES:
             found: Given | None = getattr(extremes, word)
             return found

@@ -241,7 +241,7 @@ class Pump:
     """One pump; ``flow`` always has ``highest``, ``datum`` is its NPSH datum in words.
 
     ``arrangement`` is ``wet_pit`` for a pump that hangs in its sump, else empty; ``running`` how many run at most;
-    ``eyes`` 2 for a double-suction impeller; ``speed`` is that of operation.
+    ``eyes`` 2 for a double-suction impeller, 0 where absent; ``speed`` is that of operation.
     """
 
     name: str

@@ -45,6 +45,12 @@ def suction_specific_speed(entry: Entry, units: Literal["US", "metric"]) -> tupl
     if read.npsh is None:
         return None, f"NPSH required at best efficiency is not known: {read.doubt}"
     ledger.group("Suction specific speed")
+    if not pump.eyes:
+        entry.assume(
+            "eyes",
+            "The impeller takes its whole flow in one eye",
+            "a double-suction impeller takes half in each, and its suction specific speed is lower: state `eyes: 2`",
+        )
     eye = ledger.apply("eye_flow", {"Q_b": at_curve}) if pump.eyes == 2 else at_curve
     unit = {
         symbol: ledger.tabulated(symbol, f"Unit of the suction specific speed, {text}", parse(text, kind), units, DEFINITION)

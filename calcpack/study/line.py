@@ -64,14 +64,17 @@ def losses(entry: Entry, state: State, flow: Value, liquid: Liquid) -> Passage:
         reducer.join(entry, up, down)
     entry.ledger.group("Losses from the supply to the suction nozzle")
     title = f"Losses, supply to suction nozzle: {_sets(entry, line)} coefficients; {state.scope}"
-    labelled = [(label(line, flow.section, element), words, content) for element, flow, words, content in rows]
+    labelled = [
+        (label(line, flow.section, element), ", ".join(filter(None, (words, element.drawing))), content)
+        for element, flow, words, content in rows
+    ]
     table = entry.ledger.losses(title, labelled, "losses" if line.friction_contingency is None else "sum_of_rows")
     total = table.total.value
     if line.friction_contingency is not None:
         total = entry.ledger.apply("losses_with_contingency", {"h_S": total, "c": contingency(entry, line)})
     passed = (
-        Passed(row.label, row.element, element, flow, row.line.value)
-        for row, (element, flow, *_) in zip(table.rows, rows, strict=True)
+        Passed(row.label, words, element, flow, row.line.value)
+        for row, (element, flow, words, _) in zip(table.rows, rows, strict=True)
     )
     return Passage(total, tuple(flows), tuple(passed))
 

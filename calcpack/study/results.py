@@ -57,7 +57,7 @@ class Results:
     def situations(self) -> list[tuple[State, Value]]:
         """Every state the design route is run at, the worst case alone without one, and the flow through the inlet there."""
         if not self.runs:
-            return [(self.worst, self.inlet_flow)]
+            return [(self.worst, flow_of(self.entry, self.worst))]
         return [
             (run.state, run.passage.flows[0].flow if run.passage else flow_of(self.entry, run.state))
             for run in self.runs
@@ -66,8 +66,7 @@ class Results:
     @property
     def inlet_flow(self) -> Value:
         """The flow through the inlet at the worst case: of every pump that its line serves and that runs."""
-        passage = self.line.passage if self.line else None
-        return passage.flows[0].flow if passage else flow_of(self.entry, self.worst)
+        return self.situations[0][1]
 
     @property
     def route(self) -> str:

@@ -46,7 +46,8 @@ def check(view: View) -> Iterator[Fault]:
 def _extremes(view: View, address: str, case: Mapping) -> Iterator[Fault]:
     """What a case takes by its extreme stands in the file, and what it changes is there."""
     for name, place in _OF.items():
-        node, word = case.get(name), view.text(name, node=case)
+        node = case.get(name)
+        word = view.text(name, "value", node=case) if isinstance(node, Mapping) else view.text(name, node=case)
         held = view.at(*place)
         if not node:
             continue

@@ -101,7 +101,7 @@ def _cost_of_station(at: Search, n: int) -> Value | None:
 def whole_flow_of_two_eyes(at: Search) -> Iterator[Finding]:
     """A double-suction pump, by its words or by its suction specific speed, with the flow of both eyes in one."""
     pump = at.c.pump
-    if pump.eyes != 1:
+    if pump.eyes == 2:
         return
     words = says(f"{at.c.title} {pump.name} {pump.npsh_required.curve} {pump.npsh_required.provenance.note}", _TWO_EYES)
     speed, _ = suction_specific_speed(at.trial, "US")
