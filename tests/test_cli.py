@@ -223,7 +223,7 @@ def test_the_exceptions_of_the_interface_are_at_hand_and_cost_no_import() -> Non
         calcpack.nothing_of_the_kind  # noqa: B018
     with pytest.raises(calcpack.InputFault) as caught:
         calcpack.assess(BAD)
-    assert caught.value.faults  # type: ignore[attr-defined]
+    assert caught.value.faults  # type: ignore[attr-defined]  # reached by a lazy attribute, typed as Any exception
 
 
 def test_findings_stand_below_the_verdict_in_a_terminal(capsys: pytest.CaptureFixture[str]) -> None:

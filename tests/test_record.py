@@ -352,7 +352,10 @@ def si(side: Json, shown: Json) -> tuple[Fraction, Fraction]:
     """A side of record and as shown, both in SI."""
     name = re.sub(" (absolute|gauge|vacuum)$", "", shown["unit"]) or "1"
     own, plain = unit(side["unit"]), unit(name)
-    return tuple((Fraction(x) + u.offset) * u.factor for x, u in ((side["value"], own), (shown["text"], plain)))  # type: ignore[return-value]
+    of_record, as_shown = (
+        (Fraction(x) + u.offset) * u.factor for x, u in ((side["value"], own), (shown["text"], plain))
+    )
+    return of_record, as_shown
 
 
 @each_sample

@@ -48,7 +48,8 @@ def darcy(flow: float, d: float, rho: float, mu: float, eps: float) -> tuple[flo
 
 def saturated(fluid: str, celsius: float) -> tuple[float, float, float]:
     """Vapour pressure, density and viscosity of the saturated liquid."""
-    return tuple(PropsSI(x, "T", celsius + 273.15, "Q", 0, fluid) for x in "PDV")  # type: ignore[return-value]
+    pressure, density, viscosity = (PropsSI(x, "T", celsius + 273.15, "Q", 0, fluid) for x in "PDV")
+    return pressure, density, viscosity
 
 
 def air(metres: float, allowance: float) -> float:

@@ -12,6 +12,7 @@ from fontTools.ttLib import TTFont
 
 from calcpack import formula
 from calcpack.catalog import EQUATIONS
+from calcpack.equations import Equation
 from calcpack.formula import parse
 from calcpack.page import layout, metrics
 from calcpack.page.boxes import Box, Run
@@ -223,9 +224,9 @@ def test_an_unknown_symbol_is_refused() -> None:
 
 
 @pytest.mark.parametrize("equation", EQUATIONS, ids=lambda e: e.name)
-def test_every_equation_fits_the_column_at_a_legible_size(equation: object) -> None:
-    tree = equation.tree  # type: ignore[attr-defined]
-    symbol = None if isinstance(tree, formula.Cmp) else equation.result  # type: ignore[attr-defined]
+def test_every_equation_fits_the_column_at_a_legible_size(equation: Equation) -> None:
+    tree = equation.tree
+    symbol = None if isinstance(tree, formula.Cmp) else equation.result
     widest = dict.fromkeys(equation.operands, "-1234.56")  # type: ignore[attr-defined]
     assert line(symbol, tree, widest, NAMES).width <= MEASURE + 0.01
     setting = line(symbol, tree, dict.fromkeys(equation.operands, "0.123456"), NAMES)  # type: ignore[attr-defined]

@@ -137,7 +137,7 @@ def _cover(r: Mapping[str, Any], shared: Context) -> dict[str, Any]:
         "statement": text.together(cover["statement"]),
         "long": len(cover["statement"]) > LONG_STATEMENT,
         "many": len(shown) > MANY_RULES,
-        "listed": 4 if len(shown) > MANY_RULES else 12,
+        "listed": 2 if len(shown) > MANY_RULES else 12,
         "route": _route(r),
         "tally": [(n, word) for word, n in cover["tally"].items() if n],
         "governs": tables.rule(governing, shared) if governing else None,
